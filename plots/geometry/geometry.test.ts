@@ -127,7 +127,10 @@ describe('footprints', () => {
   it('overlap does not depend on the order', () => {
     const footprint = fc.record({
       shape: fc.constant('rect' as const),
-      centre: fc.record({ xM: fc.double({ min: -2, max: 2, noNaN: true }), yM: fc.double({ min: -2, max: 2, noNaN: true }) }),
+      centre: fc.record({
+        xM: fc.double({ min: -2, max: 2, noNaN: true }),
+        yM: fc.double({ min: -2, max: 2, noNaN: true }),
+      }),
       widthM: fc.double({ min: 0.1, max: 3, noNaN: true }),
       depthM: fc.double({ min: 0.1, max: 3, noNaN: true }),
       rotationDeg: fc.double({ min: 0, max: 359, noNaN: true }),
@@ -162,14 +165,22 @@ describe('touching circles', () => {
   it('every centre it gives touches both circles', () => {
     const radius = fc.double({ min: 0.05, max: 1, noNaN: true })
     fc.assert(
-      fc.property(metres, metres, radius, radius, radius, fc.double({ min: 0.01, max: 2, noNaN: true }), (x, y, a, b, r, gap) => {
-        const first = circle(x, y, a)
-        const second = circle(x + a + b + gap, y, b)
-        for (const point of tangentCentresOfTwo(first, second, r)) {
-          expect(distanceM(point, first.centre)).toBeCloseTo(a + r, 8)
-          expect(distanceM(point, second.centre)).toBeCloseTo(b + r, 8)
-        }
-      }),
+      fc.property(
+        metres,
+        metres,
+        radius,
+        radius,
+        radius,
+        fc.double({ min: 0.01, max: 2, noNaN: true }),
+        (x, y, a, b, r, gap) => {
+          const first = circle(x, y, a)
+          const second = circle(x + a + b + gap, y, b)
+          for (const point of tangentCentresOfTwo(first, second, r)) {
+            expect(distanceM(point, first.centre)).toBeCloseTo(a + r, 8)
+            expect(distanceM(point, second.centre)).toBeCloseTo(b + r, 8)
+          }
+        },
+      ),
     )
   })
 

@@ -50,7 +50,10 @@ describe('snapping a moved piece', () => {
   it('falls back on the grid, and stands free without one', () => {
     const moving = rect(3.11, 4.09, 1, 1)
     expect(snapMove({ moving, others: [], gridM: 0.25, reachM: 0.02 }).point).toEqual({ xM: 3, yM: 4 })
-    expect(snapMove({ moving, others: [], gridM: null, reachM: 0.02 })).toEqual({ point: { xM: 3.11, yM: 4.09 }, guides: [] })
+    expect(snapMove({ moving, others: [], gridM: null, reachM: 0.02 })).toEqual({
+      point: { xM: 3.11, yM: 4.09 },
+      guides: [],
+    })
   })
 
   it('puts a piece’s downstage side on the edge of the stage', () => {

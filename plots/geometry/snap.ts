@@ -55,9 +55,11 @@ function touchSnap({ moving, others, reachM }: SnapInput): Snap | null {
       Math.abs(distanceM(other.centre, moving.centre) - other.radiusM - moving.radiusM) <= reachM * 2,
   )
   const pairs = near.flatMap((a, index) =>
-    near.slice(index + 1).flatMap((b) =>
-      tangentCentresOfTwo(a, b, moving.radiusM).map((point) => ({ point, guides: [touchGuide(a), touchGuide(b)] })),
-    ),
+    near
+      .slice(index + 1)
+      .flatMap((b) =>
+        tangentCentresOfTwo(a, b, moving.radiusM).map((point) => ({ point, guides: [touchGuide(a), touchGuide(b)] })),
+      ),
   )
   const singles = near.map((other) => ({
     point: tangentCentre(other, moving.radiusM, moving.centre),
