@@ -1,0 +1,45 @@
+import { z } from 'zod'
+
+/** Ids are uuids, made by the server or by the client that wants to repeat a request safely. */
+export const idSchema = z.uuid('must be an id')
+
+export const nameSchema = z.string().trim().min(1, 'give a name').max(120, 'at most 120 characters')
+
+export const remarkSchema = z.string().trim().max(2000, 'at most 2000 characters')
+
+export const emailSchema = z
+  .string()
+  .trim()
+  .toLowerCase()
+  .max(254, 'at most 254 characters')
+  .pipe(z.email('write an e-mail address such as crew@example.example'))
+
+/** A calendar date as the wall shows it, YYYY-MM-DD. */
+export const dateSchema = z.iso.date('write a date as YYYY-MM-DD')
+
+/** A wall-clock time without a zone, HH:MM. */
+export const wallTimeSchema = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'write a time as HH:MM')
+
+const zones = new Set([...Intl.supportedValuesOf('timeZone'), 'UTC'])
+
+/** An IANA time zone name. */
+export const zoneSchema = z
+  .string()
+  .refine((zone) => zones.has(zone), 'choose a time zone from the list, such as Europe/Oslo')
+
+/** An ISO 4217 currency code. */
+export const currencySchema = z.string().regex(/^[A-Z]{3}$/, 'write a currency such as EUR')
+
+/** The version of the row that the writer saw; a stale one is refused, never overwritten. */
+export const versionSchema = z.number().int().min(1)
+
+export const roles = ['owner', 'drum-tech', 'tour-manager', 'viewer'] as const
+export const roleSchema = z.enum(roles, 'choose a role')
+export type Role = z.infer<typeof roleSchema>
+
+export const roleWords: Record<Role, string> = {
+  owner: 'owner',
+  'drum-tech': 'drum tech',
+  'tour-manager': 'tour manager',
+  viewer: 'production viewer',
+}

@@ -1,0 +1,12 @@
+import type { TaskList } from 'graphile-worker'
+import { makePackPdf } from './make-pack-pdf'
+import { sendMail } from './send-mail'
+import type { TaskName, TaskPayloads } from './task-names'
+
+const implementations: { [Name in TaskName]: (payload: TaskPayloads[Name]) => Promise<void> } = {
+  'send-mail': sendMail,
+  'make-pack-pdf': makePackPdf,
+}
+
+/** The queue hands payloads over untyped; only `enqueue` writes them, and it is typed by the same table. */
+export const tasks = implementations as unknown as TaskList
