@@ -1,0 +1,69 @@
+import { classes } from '@/components/ui/classes'
+import { round } from './round'
+
+/** The stretch of pitch that a bar or a chart shows, and the places in it: any measure that runs evenly, such as semitones. */
+export interface RangeScale {
+  from: number
+  to: number
+}
+
+export interface RangeBarProps {
+  scale: RangeScale
+  /** Lowest and highest playable. */
+  low: number
+  high: number
+  /** The middle of the range, where the head is neither slack nor choked. */
+  middleLow: number
+  middleHigh: number
+  /** Where the note lies, and its name; null: no note yet. */
+  note: { at: number; name: string } | null
+  /** The bar in words ("Tom 12: D3, in the middle of its range, A2 to F3"). */
+  label: string
+  /** Writes "slack" and "choked" under the two ends. */
+  ends?: boolean
+  className?: string
+}
+
+/** A place on the scale as a percentage of its width, held to the scale's ends. */
+export function scalePercent(scale: RangeScale, at: number): number {
+  return round(Math.min(100, Math.max(0, ((at - scale.from) / (scale.to - scale.from)) * 100)))
+}
+
+/** A drum's playable range with its middle shaded and the note as a bead. A bead outside the range is square and spike. */
+export function RangeBar({ scale, low, high, middleLow, middleHigh, note, label, ends, className }: RangeBarProps) {
+  const place = (from: number, to: number) => ({
+    left: `${scalePercent(scale, from)}%`,
+    width: `${round(scalePercent(scale, to) - scalePercent(scale, from))}%`,
+  })
+  const out = note !== null && (note.at < low || note.at > high)
+  return (
+    <div role="img" aria-label={label} className={className}>
+      <div className="relative h-8">
+        <div className="absolute inset-y-2 border border-line bg-wash" style={place(low, high)} data-part="range" />
+        <div className="absolute inset-y-2 bg-reed/35" style={place(middleLow, middleHigh)} data-part="middle" />
+        {note && (
+          <span
+            data-part="note"
+            className={classes(
+              'figures absolute top-1/2 flex h-7 min-w-7 -translate-x-1/2 -translate-y-1/2 items-center justify-center px-1 text-[0.6875rem] font-bold',
+              out ? 'bg-spike-text text-paper' : 'rounded-full bg-ink text-paper',
+            )}
+            style={{ left: `${scalePercent(scale, note.at)}%` }}
+          >
+            {note.name}
+          </span>
+        )}
+      </div>
+      {ends && (
+        <div className="relative h-4 text-[0.75rem] text-soft">
+          <span className="absolute" style={{ left: `${scalePercent(scale, low)}%` }}>
+            slack
+          </span>
+          <span className="absolute -translate-x-full" style={{ left: `${scalePercent(scale, high)}%` }}>
+            choked
+          </span>
+        </div>
+      )}
+    </div>
+  )
+}

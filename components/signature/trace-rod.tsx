@@ -1,0 +1,90 @@
+import { clockPoint } from './clock-point'
+import { round } from './round'
+import type { TraceLug, TraceMove } from './trace-lug'
+
+export interface TraceRodProps {
+  lug: TraceLug
+  hoopRadius: number
+  /** Which way this rod is to be turned now, if it is. */
+  move: TraceMove['turn'] | null
+}
+
+/** What stands beside a lug's number: a word for a lug that is out, nothing for one that is even. */
+function lugWord(lug: TraceLug): string | null {
+  if (lug.offset === null || !lug.out) return null
+  return lug.offset > 0 ? 'high' : 'low'
+}
+
+/**
+ * One claw with its rod and number. Filled: within tolerance. Hollow: not read yet. A wedge pointing out (high) or in
+ * (low), with the word: out of tolerance. A key on the rod: turn it now, the way its arrow goes.
+ */
+export function TraceRod({ lug, hoopRadius, move }: TraceRodProps) {
+  const word = lugWord(lug)
+  const turnDeg = round((lug.angleRad * 180) / Math.PI)
+  const label = clockPoint(lug.angleRad, move ? 111 : 95)
+  const sideways = Math.abs(Math.sin(lug.angleRad)) > 0.35
+  return (
+    <g data-lug={lug.number} data-out={lug.out || undefined}>
+      <g transform={`rotate(${turnDeg})`} className={word || move ? 'text-spike' : 'text-ink'}>
+        <rect x={-2} y={-hoopRadius - 12} width={4} height={7} fill="currentColor" />
+        {word ? (
+          <path
+            d={word === 'high' ? `M0 ${-hoopRadius - 9}l6 11h-12Z` : `M0 ${-hoopRadius + 6}l6 -12h-12Z`}
+            fill="currentColor"
+          />
+        ) : (
+          <rect
+            x={-5}
+            y={-hoopRadius - 5}
+            width={10}
+            height={9}
+            strokeWidth={1.6}
+            stroke="currentColor"
+            className={lug.offset === null ? 'fill-paper' : 'fill-current'}
+          />
+        )}
+        {move && <Key turn={move} y={-hoopRadius - 12} />}
+      </g>
+      <text
+        x={label.x}
+        y={round(label.y + 3.5)}
+        textAnchor="middle"
+        fontSize={10}
+        className={word || move ? 'figures fill-spike-text font-bold' : 'figures fill-soft'}
+      >
+        {lug.number}
+      </text>
+      {word && (
+        <text
+          x={label.x}
+          y={round(label.y + (sideways || label.y > 0 ? 12 : -7))}
+          textAnchor="middle"
+          fontSize={8.5}
+          className="fill-spike-text font-bold"
+        >
+          {word}
+        </text>
+      )}
+    </g>
+  )
+}
+
+/** A drum key on its rod, with an arrow the way it is to be turned: clockwise tightens. */
+function Key({ turn, y }: { turn: TraceMove['turn']; y: number }) {
+  const clockwise = turn === 'tighten'
+  const side = clockwise ? 1 : -1
+  return (
+    <g>
+      <rect x={-2.5} y={y - 9} width={5} height={10} fill="currentColor" />
+      <rect x={-11} y={y - 12} width={22} height={3.5} fill="currentColor" />
+      <path
+        d={`M${-8 * side} ${y - 16}Q0 ${y - 22} ${8 * side} ${y - 16}`}
+        fill="none"
+        stroke="currentColor"
+        strokeWidth={1.4}
+      />
+      <path d={`M${10.5 * side} ${y - 13.5}l${-6 * side} -1l${3.5 * side} -4Z`} fill="currentColor" />
+    </g>
+  )
+}

@@ -1,0 +1,132 @@
+import type { ReactNode } from 'react'
+import { classes } from '@/components/ui/classes'
+import { clockPoint } from './clock-point'
+import { round } from './round'
+import type { TraceLug, TraceMove } from './trace-lug'
+import { TraceRod } from './trace-rod'
+
+export interface TraceProps {
+  /** The whole picture in words, for a screen reader ("Tom 12, batter: lugs 1 and 4 high, the rest even"). */
+  label: string
+  lugs: readonly TraceLug[]
+  /** The head's readings, exaggerated, as a closed curve: 1 is the target circle, x to the right, y downwards. */
+  curve: readonly { x: number; y: number }[] | null
+  /** The tolerance as radii in the same measure, inner below 1 and outer above. */
+  bandInner: number
+  bandOuter: number
+  /** The words in the middle: the next move. */
+  centre: ReactNode
+  /** Lugs whose rods are to be turned now: a key is drawn on each. */
+  highlightLugs?: readonly TraceMove[]
+  /** Lug numbers in the order in which they are gone round; drawn as steps from lug to lug while there is no curve. */
+  order?: readonly number[]
+  /** Paper prints in black and white; stage is for the dark. Inherits the page's theme if not given. */
+  mode?: 'stage' | 'paper'
+  className?: string
+}
+
+const targetRadius = 50
+const headRadius = 66
+const hoopRadius = 71
+
+/** A drawn point never leaves the head, however far out a lug is. */
+function held(point: { x: number; y: number }): { x: number; y: number } {
+  const distance = Math.hypot(point.x, point.y) * targetRadius
+  const scale = distance > headRadius - 3 ? (targetRadius * (headRadius - 3)) / distance : targetRadius
+  return { x: round(point.x * scale), y: round(point.y * scale) }
+}
+
+/** A smooth closed path through the points (Catmull-Rom as cubic curves). */
+function closedPath(points: readonly { x: number; y: number }[]): string {
+  const at = (index: number) => points[(index + points.length) % points.length] ?? { x: 0, y: 0 }
+  const first = at(0)
+  const curves = points.map((_, i) => {
+    const [before, from, to, after] = [at(i - 1), at(i), at(i + 1), at(i + 2)]
+    return `C${round(from.x + (to.x - before.x) / 6)} ${round(from.y + (to.y - before.y) / 6)} ${round(to.x - (after.x - from.x) / 6)} ${round(to.y - (after.y - from.y) / 6)} ${to.x} ${to.y}`
+  })
+  return `M${first.x} ${first.y}${curves.join('')}Z`
+}
+
+/**
+ * The head's readings inside its real hoop, with claws and rods: round means even. The band is the tolerance; a lug
+ * outside it is marked by its shape and by a word.
+ */
+export function Trace(props: TraceProps) {
+  const { label, lugs, curve, bandInner, bandOuter, centre, highlightLugs = [], order, mode, className } = props
+  const inner = round(bandInner * targetRadius)
+  const outer = round(Math.min(bandOuter * targetRadius, headRadius))
+  const steps =
+    curve === null && order ? order.flatMap((number) => lugs.find((lug) => lug.number === number) ?? []) : []
+  return (
+    <figure data-theme={mode} className={classes('relative mx-auto w-full max-w-md', className)}>
+      <svg role="img" aria-label={label} viewBox="-120 -120 240 240" className="block w-full">
+        <g fill="none" stroke="currentColor" className="text-ink">
+          <circle r={hoopRadius} strokeWidth={1.6} />
+          <circle r={hoopRadius - 4} strokeWidth={1.6} />
+          <circle r={headRadius - 2} strokeWidth={0.5} className="fill-sheet stroke-line" />
+        </g>
+        <circle
+          r={round((inner + outer) / 2)}
+          strokeWidth={round(Math.max(1, outer - inner))}
+          fill="none"
+          className="stroke-reed opacity-30"
+          data-part="band"
+        />
+        <circle r={targetRadius} strokeWidth={0.7} strokeDasharray="2 2" fill="none" className="stroke-soft" />
+        {steps.length > 1 && (
+          <polyline
+            data-part="order"
+            points={steps
+              .map((lug) => clockPoint(lug.angleRad, headRadius - 5))
+              .map((point) => `${point.x},${point.y}`)
+              .join(' ')}
+            fill="none"
+            strokeWidth={0.7}
+            className="stroke-soft"
+          />
+        )}
+        {steps.map((lug, index) => {
+          const at = clockPoint(lug.angleRad, headRadius - 9)
+          return (
+            <g key={lug.number}>
+              <circle cx={at.x} cy={at.y} r={7} className="fill-sheet" />
+              <text
+                x={at.x}
+                y={round(at.y + 2.6)}
+                textAnchor="middle"
+                fontSize={7.5}
+                className="figures fill-ink"
+              >{`${index + 1}${ordinal(index + 1)}`}</text>
+            </g>
+          )
+        })}
+        {curve && (
+          <path
+            d={closedPath(curve.map(held))}
+            data-part="curve"
+            fill="none"
+            strokeWidth={2.4}
+            strokeLinejoin="round"
+            className="stroke-spike"
+          />
+        )}
+        {lugs.map((lug) => (
+          <TraceRod
+            key={lug.number}
+            lug={lug}
+            hoopRadius={hoopRadius}
+            move={highlightLugs.find((move) => move.number === lug.number)?.turn ?? null}
+          />
+        ))}
+      </svg>
+      <figcaption className="pointer-events-none absolute inset-0 m-auto flex size-[32%] flex-col items-center justify-center text-center leading-tight">
+        {centre}
+      </figcaption>
+    </figure>
+  )
+}
+
+function ordinal(step: number): string {
+  if (step % 100 > 10 && step % 100 < 14) return 'th'
+  return ['th', 'st', 'nd', 'rd'][step % 10] ?? 'th'
+}
