@@ -1,4 +1,4 @@
-import { HoopDrawing, lugReachIn } from './hoop-drawing'
+import { HoopDrawing, liesDown } from './hoop-drawing'
 import type { HoopDrawingProps } from './hoop-drawing'
 import { round } from './round'
 
@@ -6,11 +6,15 @@ export interface HoopProps extends HoopDrawingProps {
   className?: string
 }
 
+/** Room round the shell for lugs and claws, inches in all. */
+const lugRoomIn = 2.2
+const inchMm = 25.4
+
 /** One drum as a picture to scale, named for screen readers. */
 export function Hoop({ className, ...drum }: HoopProps) {
-  const lying = drum.role === 'kick' && drum.view === 'above'
-  const width = drum.diameterIn + (lying ? 0.5 : 2 * lugReachIn + 0.5)
-  const height = lying ? drum.depthIn + 0.5 : width
+  const width = drum.diameterIn + lugRoomIn
+  const height = (liesDown(drum) ? drum.depthIn : drum.diameterIn) + lugRoomIn
+  const box = [-width / 2, -height / 2, width, height].map((lengthIn) => round(lengthIn * inchMm))
   return (
     <svg
       role="img"
@@ -21,7 +25,7 @@ export function Hoop({ className, ...drum }: HoopProps) {
       ]
         .filter(Boolean)
         .join(', ')}
-      viewBox={`${round(-width / 2)} ${round(-height / 2)} ${round(width)} ${round(height)}`}
+      viewBox={box.join(' ')}
       width={round(width * drum.pxPerInch)}
       height={round(height * drum.pxPerInch)}
       className={className}

@@ -1,5 +1,6 @@
 import { renderToStaticMarkup } from 'react-dom/server'
 import { describe, expect, it } from 'vitest'
+import { traceOutline } from '@/lib/tuning/trace'
 import { Hoop } from './hoop'
 import { layTape } from './lay-tape'
 import { RangeBar } from './range-bar'
@@ -23,7 +24,7 @@ describe('hoop', () => {
     const html = renderToStaticMarkup(
       <Hoop role="tom" diameterIn={12} depthIn={8} lugs={lugs} name="Tom 12" note="D3" view="above" pxPerInch={8} />,
     )
-    expect(count(html, /data-lug=/g)).toBe(lugs)
+    expect(count(html, /data-part="lug"/g)).toBe(lugs)
     expect(text(html)).toBe('Tom 12 D3')
   })
 
@@ -32,30 +33,30 @@ describe('hoop', () => {
       const html = renderToStaticMarkup(
         <Hoop role="tom" diameterIn={diameterIn} depthIn={8} lugs={6} name="T" view="above" pxPerInch={10} />,
       )
-      const [, , , width = ''] = /viewBox="(\S+) (\S+) (\S+)/.exec(html) ?? []
+      const widthMm = Number(/viewBox="\S+ \S+ (\S+)/.exec(html)?.[1])
       const pixels = Number(/ width="([\d.]+)"/.exec(html)?.[1])
-      expect(pixels / Number(width)).toBeCloseTo(10, 6)
-      return Number(/<circle r="([\d.]+)"/.exec(html)?.[1])
+      expect(pixels / (widthMm / 25.4)).toBeCloseTo(10, 3)
+      return Number(/ r="([\d.]+)"/.exec(element(html, 'data-part="shell"'))?.[1])
     }
-    expect(radius(16) / radius(8)).toBe(2)
+    expect(radius(8)).toBeCloseTo(101.6, 6)
+    expect(radius(16)).toBeCloseTo(203.2, 6)
   })
 
-  it('draws a kick from above as diameter by depth and facing as its circle', () => {
-    const kick = { role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8, name: 'Kick 22', pxPerInch: 6 } as const
-    const above = renderToStaticMarkup(<Hoop {...kick} view="above" />)
-    expect(above).toMatch(/<rect[^>]*width="22" height="16"/)
+  it('draws a kick from above as its rectangle and facing as its circle, with all its lugs', () => {
+    const drum = { role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8, name: 'Kick 22', pxPerInch: 6 } as const
+    const above = renderToStaticMarkup(<Hoop {...drum} view="above" />)
+    expect(element(above, 'data-part="shell"')).toMatch(/^<polygon/)
     expect(above).not.toContain('<circle')
-    const facing = renderToStaticMarkup(<Hoop {...kick} view="facing" />)
-    expect(facing).toContain('<circle r="11"')
-    expect(count(facing, /data-lug=/g)).toBe(8)
+    const facing = renderToStaticMarkup(<Hoop {...drum} view="facing" />)
+    expect(element(facing, 'data-part="shell"')).toContain('r="279.4"')
+    expect(count(facing, /data-part="lug"/g)).toBe(8)
   })
 
-  it('puts lug 1 at twelve o’clock and lug 2 of four at three o’clock', () => {
+  it('says sizes, lugs and note to a screen reader', () => {
     const html = renderToStaticMarkup(
-      <Hoop role="tom" diameterIn={10} depthIn={7} lugs={4} name="T" view="facing" pxPerInch={8} />,
+      <Hoop role="tom" diameterIn={12} depthIn={8} lugs={6} name="Tom 12" note="C♯3" view="above" pxPerInch={8} />,
     )
-    expect(element(html, 'data-lug="1"')).toMatch(/x1="-?0" y1="-5"/)
-    expect(element(html, 'data-lug="2"')).toMatch(/x1="5" y1="-?0"/)
+    expect(html).toContain('aria-label="Tom 12, 12 in across, 8 deep, 6 lugs, note C♯3"')
   })
 })
 
@@ -69,28 +70,37 @@ describe('trace', () => {
   const shared = { label: 'Tom 12, batter', bandInner: 0.9, bandOuter: 1.1, centre: 'Ease 1' }
 
   it('marks each lug that is out with its word, and no other', () => {
-    const html = renderToStaticMarkup(<Trace {...shared} lugs={lugs} curve={null} />)
+    const html = renderToStaticMarkup(<Trace {...shared} lugs={lugs} outline={null} />)
     expect(count(html, /data-out=/g)).toBe(2)
     expect(text(html)).toBe('1 high 2 3 low 4 5 6 Ease 1')
   })
 
-  it('draws no curve before there are readings, and a closed one inside the hoop when there are', () => {
-    expect(renderToStaticMarkup(<Trace {...shared} lugs={lugs} curve={null} />)).not.toContain('data-part="curve"')
-    const far = [0, 1, 2, 3].map((i) => ({ x: 4 * Math.cos((i * Math.PI) / 2), y: 4 * Math.sin((i * Math.PI) / 2) }))
-    const html = renderToStaticMarkup(<Trace {...shared} lugs={lugs} curve={far} />)
-    const d = / d="([^"]+)"/.exec(element(html, 'data-part="curve"'))?.[1] ?? ''
-    expect(d.endsWith('Z')).toBe(true)
-    const ends = [...d.matchAll(/ (-?[\d.]+) (-?[\d.]+)(?=C|Z)/g)].map(([, x, y]) => Math.hypot(Number(x), Number(y)))
-    expect(ends).toHaveLength(4)
-    for (const radius of ends) expect(radius).toBeLessThan(66)
+  it('draws nothing between lugs that were not read, and closes only a whole round', () => {
+    const draw = (deviations: (number | null)[]) => {
+      const outline = traceOutline(
+        deviations.map((deviation, index) => ({ lug: index + 1, seenRad: (index * Math.PI) / 2, deviation })),
+        { radiusPerUnit: 0.01 },
+      )
+      return renderToStaticMarkup(<Trace {...shared} lugs={lugs} outline={outline} />)
+    }
+    const whole = draw([10, 0, -5, 0])
+    expect(count(whole, /<polygon[^>]*data-part="curve"/g)).toBe(1)
+    expect(count(whole, /data-part="reading"/g)).toBe(4)
+    const gap = draw([10, 0, null, 0])
+    expect(count(gap, /<polygon/g)).toBe(0)
+    expect(count(gap, /<polyline[^>]*data-part="curve"/g)).toBe(1)
+    expect(count(gap, /data-part="reading"/g)).toBe(3)
+    expect(renderToStaticMarkup(<Trace {...shared} lugs={lugs} outline={null} />)).not.toContain('data-part="curve"')
   })
 
-  it('draws the order in steps only while there is no curve', () => {
+  it('draws the order in steps only while nothing was read', () => {
     const order = [1, 4, 2, 5, 3, 6]
-    const before = renderToStaticMarkup(<Trace {...shared} lugs={lugs} curve={null} order={order} />)
+    const before = renderToStaticMarkup(<Trace {...shared} lugs={lugs} outline={null} order={order} />)
     expect(before).toContain('data-part="order"')
     expect(text(before)).toContain('1st 2nd 3rd 4th 5th 6th')
-    const after = renderToStaticMarkup(<Trace {...shared} lugs={lugs} curve={[{ x: 1, y: 0 }]} order={order} />)
+    const after = renderToStaticMarkup(
+      <Trace {...shared} lugs={lugs} outline={{ segments: [], closed: false, lugs: [{ x: 1, y: 0 }] }} order={order} />,
+    )
     expect(after).not.toContain('data-part="order"')
   })
 })

@@ -13,3 +13,13 @@ export interface TraceMove {
   number: number
   turn: 'tighten' | 'ease'
 }
+
+/** The readings as an outline about the target circle of radius 1, x to the right, y downwards; see `traceOutline`. */
+export interface TraceOutline {
+  /** Pieces of the outline; between them nothing was read and nothing is drawn. */
+  segments: readonly (readonly { x: number; y: number }[])[]
+  /** One piece that runs all the way round. */
+  closed: boolean
+  /** Where each lug that was read lies on the outline. */
+  lugs: readonly { x: number; y: number }[]
+}

@@ -2,15 +2,15 @@ import type { ReactNode } from 'react'
 import { classes } from '@/components/ui/classes'
 import { clockPoint } from './clock-point'
 import { round } from './round'
-import type { TraceLug, TraceMove } from './trace-lug'
+import type { TraceLug, TraceMove, TraceOutline } from './trace-lug'
 import { TraceRod } from './trace-rod'
 
 export interface TraceProps {
   /** The whole picture in words, for a screen reader ("Tom 12, batter: lugs 1 and 4 high, the rest even"). */
   label: string
   lugs: readonly TraceLug[]
-  /** The head's readings, exaggerated, as a closed curve: 1 is the target circle, x to the right, y downwards. */
-  curve: readonly { x: number; y: number }[] | null
+  /** The head's readings as `traceOutline` gives them about a circle of radius 1; null before the first reading. */
+  outline: TraceOutline | null
   /** The tolerance as radii in the same measure, inner below 1 and outer above. */
   bandInner: number
   bandOuter: number
@@ -18,7 +18,7 @@ export interface TraceProps {
   centre: ReactNode
   /** Lugs whose rods are to be turned now: a key is drawn on each. */
   highlightLugs?: readonly TraceMove[]
-  /** Lug numbers in the order in which they are gone round; drawn as steps from lug to lug while there is no curve. */
+  /** Lug numbers in the order in which they are gone round; drawn as steps from lug to lug while nothing was read. */
   order?: readonly number[]
   /** Paper prints in black and white; stage is for the dark. Inherits the page's theme if not given. */
   mode?: 'stage' | 'paper'
@@ -29,22 +29,8 @@ const targetRadius = 50
 const headRadius = 66
 const hoopRadius = 71
 
-/** A drawn point never leaves the head, however far out a lug is. */
-function held(point: { x: number; y: number }): { x: number; y: number } {
-  const distance = Math.hypot(point.x, point.y) * targetRadius
-  const scale = distance > headRadius - 3 ? (targetRadius * (headRadius - 3)) / distance : targetRadius
-  return { x: round(point.x * scale), y: round(point.y * scale) }
-}
-
-/** A smooth closed path through the points (Catmull-Rom as cubic curves). */
-function closedPath(points: readonly { x: number; y: number }[]): string {
-  const at = (index: number) => points[(index + points.length) % points.length] ?? { x: 0, y: 0 }
-  const first = at(0)
-  const curves = points.map((_, i) => {
-    const [before, from, to, after] = [at(i - 1), at(i), at(i + 1), at(i + 2)]
-    return `C${round(from.x + (to.x - before.x) / 6)} ${round(from.y + (to.y - before.y) / 6)} ${round(to.x - (after.x - from.x) / 6)} ${round(to.y - (after.y - from.y) / 6)} ${to.x} ${to.y}`
-  })
-  return `M${first.x} ${first.y}${curves.join('')}Z`
+function points(line: readonly { x: number; y: number }[]): string {
+  return line.map((point) => `${round(point.x * targetRadius)},${round(point.y * targetRadius)}`).join(' ')
 }
 
 /**
@@ -52,11 +38,11 @@ function closedPath(points: readonly { x: number; y: number }[]): string {
  * outside it is marked by its shape and by a word.
  */
 export function Trace(props: TraceProps) {
-  const { label, lugs, curve, bandInner, bandOuter, centre, highlightLugs = [], order, mode, className } = props
+  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], order, mode, className } = props
   const inner = round(bandInner * targetRadius)
   const outer = round(Math.min(bandOuter * targetRadius, headRadius))
   const steps =
-    curve === null && order ? order.flatMap((number) => lugs.find((lug) => lug.number === number) ?? []) : []
+    outline === null && order ? order.flatMap((number) => lugs.find((lug) => lug.number === number) ?? []) : []
   return (
     <figure data-theme={mode} className={classes('relative mx-auto w-full max-w-md', className)}>
       <svg role="img" aria-label={label} viewBox="-120 -120 240 240" className="block w-full">
@@ -100,15 +86,26 @@ export function Trace(props: TraceProps) {
             </g>
           )
         })}
-        {curve && (
-          <path
-            d={closedPath(curve.map(held))}
-            data-part="curve"
-            fill="none"
-            strokeWidth={2.4}
-            strokeLinejoin="round"
-            className="stroke-spike"
-          />
+        {outline && (
+          <g className="stroke-spike" fill="none" strokeWidth={2.4} strokeLinejoin="round" strokeLinecap="round">
+            {outline.segments.map((segment, index) =>
+              outline.closed ? (
+                <polygon key={index} data-part="curve" points={points(segment)} />
+              ) : (
+                <polyline key={index} data-part="curve" points={points(segment)} />
+              ),
+            )}
+            {outline.lugs.map((lug, index) => (
+              <circle
+                key={index}
+                data-part="reading"
+                cx={round(lug.x * targetRadius)}
+                cy={round(lug.y * targetRadius)}
+                r={2}
+                className="fill-spike"
+              />
+            ))}
+          </g>
         )}
         {lugs.map((lug) => (
           <TraceRod
