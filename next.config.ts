@@ -4,6 +4,8 @@ const config: NextConfig = {
   // The test run builds into its own folder so that it never disturbs a running app.
   distDir: process.env['NEXT_DIST_DIR'] ?? '.next',
   typedRoutes: true,
+  // Next writes its type folder into the tsconfig it uses; another build folder brings its own file.
+  typescript: { tsconfigPath: process.env['NEXT_TSCONFIG'] ?? 'tsconfig.json' },
   poweredByHeader: false,
   reactStrictMode: true,
   serverExternalPackages: ['@node-rs/argon2', '@react-pdf/renderer', 'graphile-worker', 'pg', 'pino'],
