@@ -34,7 +34,9 @@ let parsed: Env | undefined
 /** The environment, checked once at first use. Throws one sentence that names every variable at fault. */
 export function env(): Env {
   if (parsed) return parsed
-  const result = schema.safeParse(process.env)
+  // A line left empty in an environment file means "not set".
+  const given = Object.fromEntries(Object.entries(process.env).filter(([, value]) => value !== ''))
+  const result = schema.safeParse(given)
   if (!result.success) {
     const faults = result.error.issues.map((issue) => `${issue.path.join('.')} (${issue.message})`).join(', ')
     throw new Error(`The environment is not complete: ${faults}. See .env.example.`)
