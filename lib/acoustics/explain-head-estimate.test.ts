@@ -4,7 +4,15 @@ import { headEstimate } from './head-estimate'
 import type { HeadEstimateInput } from './head-estimate'
 
 const tom: HeadEstimateInput = {
-  ...{ diameterM: 0.3048, plyMils: [10], coatingKgPerM2: 0.02, noteHz: 146.8324, lugs: 6, role: 'tom', temperatureC: 25 },
+  ...{
+    diameterM: 0.3048,
+    plyMils: [10],
+    coatingKgPerM2: 0.02,
+    noteHz: 146.8324,
+    lugs: 6,
+    role: 'tom',
+    temperatureC: 25,
+  },
 }
 
 /** The stated formulas worked out afresh from the stated inputs. */
@@ -14,7 +22,9 @@ const BY_HAND: Record<string, (given: Record<string, number>) => number> = {
   'moving-density': (g) => g['σ']! + g['β0']! * g['ρ']! * g['a']!,
   tension: (g) => g['σ0']! * ((2 * Math.PI * g['a']! * g['f01']!) / g['j01']!) ** 2,
   tap: (g) =>
-    g['f01']! * (g['j11']! / g['j01']!) * Math.sqrt((g['σ']! + g['β0']! * g['ρ']! * g['a']!) / (g['σ']! + g['β1']! * g['ρ']! * g['a']!)),
+    g['f01']! *
+    (g['j11']! / g['j01']!) *
+    Math.sqrt((g['σ']! + g['β0']! * g['ρ']! * g['a']!) / (g['σ']! + g['β1']! * g['ρ']! * g['a']!)),
   'rod-pull': (g) => (2 * Math.PI * g['a']! * g['T']!) / g['N']!,
   torque: (g) => g['K']! * g['d']! * g['F']!,
   'film-stress': (g) => g['T']! / g['h']!,

@@ -13,7 +13,16 @@ export type FigureMark = 'published' | 'derived' | 'common practice' | 'from mem
 export type FigureInput = { symbol: string; label: string; value: number; unit: string }
 
 export type ExplainedFigure = FigureInput & {
-  id: 'areal-density' | 'air-density' | 'moving-density' | 'tension' | 'tap' | 'rod-pull' | 'torque' | 'film-stress' | 'range'
+  id:
+    | 'areal-density'
+    | 'air-density'
+    | 'moving-density'
+    | 'tension'
+    | 'tap'
+    | 'rod-pull'
+    | 'torque'
+    | 'film-stress'
+    | 'range'
   formula: string
   inputs: FigureInput[]
   mark: FigureMark
@@ -56,7 +65,8 @@ export function explainHeadEstimate(input: HeadEstimateInput): ExplainedFigure[]
     {
       ...{ id: 'moving-density', ...moving, formula: 'σ0 = σ + β0·ρ·a', mark: 'derived' },
       inputs: [density, load, air, radius],
-      source: 'Open air on both faces, one-term Rayleigh quotient; checked against T. D. Rossing, Acoustics of Timpani, 1982.',
+      source:
+        'Open air on both faces, one-term Rayleigh quotient; checked against T. D. Rossing, Acoustics of Timpani, 1982.',
     },
     {
       ...{ id: 'tension', ...tension, formula: 'T = σ0·(2π·a·f01/j01)²', mark: 'derived' },
@@ -93,7 +103,8 @@ export function explainHeadEstimate(input: HeadEstimateInput): ExplainedFigure[]
         figure('Tslack', 'Slack edge', estimate.range.slackNPerM, 'N/m'),
         figure('Tchoked', 'Choked edge', estimate.range.chokedNPerM, 'N/m'),
       ],
-      source: 'The edges are a default by role, or the range kept for this head. The middle is the safe aim (common practice).',
+      source:
+        'The edges are a default by role, or the range kept for this head. The middle is the safe aim (common practice).',
     },
   ]
 }
@@ -109,7 +120,11 @@ function tapFigure(input: HeadEstimateInput, tapHz: number, tapRatio: number, in
   }
   return {
     ...{ id: 'tap', ...tap, formula: 'f11 = f01·(j11/j01)·√((σ + β0·ρ·a)/(σ + β1·ρ·a))', mark: 'derived' },
-    inputs: [...inputs, figure('j11', 'First zero of J1', besselJZero(1, 1), ''), figure('j01', 'First zero of J0', besselJZero(0, 1), '')],
+    inputs: [
+      ...inputs,
+      figure('j11', 'First zero of J1', besselJZero(1, 1), ''),
+      figure('j01', 'First zero of J0', besselJZero(0, 1), ''),
+    ],
     source:
       'Air loads the note more than the tap, so the ratio is above the ideal 1.593. Open air; on a shell the tap lies lower. A measured ratio replaces this.',
   }

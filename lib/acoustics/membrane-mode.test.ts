@@ -40,13 +40,22 @@ describe('ideal membrane (A&S 9.5, DLMF 10.21; figures derived)', () => {
 
   it('scales as √T, 1/a and 1/√σ', () => {
     fc.assert(
-      fc.property(mode, head, tension, fc.double({ min: 1.1, max: 2, noNaN: true }), (shape, bare, tensionNPerM, by) => {
-        const hz = idealModeHz(shape, { ...bare, tensionNPerM })
-        expect(idealModeHz(shape, { ...bare, tensionNPerM: tensionNPerM * by }) / hz).toBeCloseTo(Math.sqrt(by), 11)
-        expect(idealModeHz(shape, { ...bare, tensionNPerM, diameterM: bare.diameterM * by }) / hz).toBeCloseTo(1 / by, 11)
-        const heavier = { ...bare, arealDensityKgPerM2: bare.arealDensityKgPerM2 * by }
-        expect(idealModeHz(shape, { ...heavier, tensionNPerM }) / hz).toBeCloseTo(1 / Math.sqrt(by), 11)
-      }),
+      fc.property(
+        mode,
+        head,
+        tension,
+        fc.double({ min: 1.1, max: 2, noNaN: true }),
+        (shape, bare, tensionNPerM, by) => {
+          const hz = idealModeHz(shape, { ...bare, tensionNPerM })
+          expect(idealModeHz(shape, { ...bare, tensionNPerM: tensionNPerM * by }) / hz).toBeCloseTo(Math.sqrt(by), 11)
+          expect(idealModeHz(shape, { ...bare, tensionNPerM, diameterM: bare.diameterM * by }) / hz).toBeCloseTo(
+            1 / by,
+            11,
+          )
+          const heavier = { ...bare, arealDensityKgPerM2: bare.arealDensityKgPerM2 * by }
+          expect(idealModeHz(shape, { ...heavier, tensionNPerM }) / hz).toBeCloseTo(1 / Math.sqrt(by), 11)
+        },
+      ),
     )
   })
 

@@ -3,7 +3,10 @@ import { describe, expect, it } from 'vitest'
 import { AcousticsError } from './acoustics-error'
 import { beatsPerSecond, centsBetween, nearestNote, noteFrequencyHz, shiftByCents } from './note'
 
-const anyNote = fc.record({ semitone: fc.integer({ min: 20, max: 100 }), cents: fc.double({ min: -49, max: 49, noNaN: true }) })
+const anyNote = fc.record({
+  semitone: fc.integer({ min: 20, max: 100 }),
+  cents: fc.double({ min: -49, max: 49, noNaN: true }),
+})
 const anyReference = fc.double({ min: 415, max: 466, noNaN: true })
 
 describe('notes and frequencies', () => {
@@ -49,7 +52,6 @@ describe('notes and frequencies', () => {
     fc.assert(
       fc.property(hz, hz, (from, to) => {
         expect(centsBetween(from, to)).toBeCloseTo(-centsBetween(to, from), 9)
-        fc.pre(Math.abs(centsBetween(from, to)) <= 4800)
         expect(shiftByCents(from, centsBetween(from, to))).toBeCloseTo(to, 8)
       }),
     )

@@ -35,8 +35,7 @@ export function noteFrequencyHz(note: Note, referenceHz: number = STANDARD_REFER
  * @throws AcousticsError frequency outside 1 to 20 000 Hz, reference outside its range
  */
 export function nearestNote(frequencyHz: number, referenceHz: number = STANDARD_REFERENCE_HZ): Note {
-  const pitch =
-    A4_SEMITONE + 12 * Math.log2(requireHz('frequencyHz', frequencyHz) / requireReferenceHz(referenceHz))
+  const pitch = A4_SEMITONE + 12 * Math.log2(requireHz('frequencyHz', frequencyHz) / requireReferenceHz(referenceHz))
   const semitone = Math.round(pitch)
   return { semitone, cents: (pitch - semitone) * 100 }
 }
@@ -49,9 +48,9 @@ export function centsBetween(fromHz: number, toHz: number): number {
   return 1200 * Math.log2(requireHz('toHz', toHz) / requireHz('fromHz', fromHz))
 }
 
-/** A frequency moved by cents: f·2^(cents/1200). @throws AcousticsError */
+/** A frequency moved by cents, at most ten octaves: f·2^(cents/1200). @throws AcousticsError */
 export function shiftByCents(frequencyHz: number, cents: number): number {
-  requireQuantity('cents', cents, { min: -4800, max: 4800, unit: 'cents' })
+  requireQuantity('cents', cents, { min: -12_000, max: 12_000, unit: 'cents' })
   return requireHz('frequencyHz', frequencyHz) * 2 ** (cents / 1200)
 }
 

@@ -16,13 +16,21 @@ describe('a head in the open air', () => {
     // 7.5 mil film is common on timpani (from memory); the paper's ratios hardly depend on it.
     const timpani = { diameterM: 0.65, plyMils: [7.5], coatingKgPerM2: 0 }
     const f11 = openAirModeHz(1, 3000, timpani)
-    for (const [m, ratio] of [[2, 1.48], [3, 1.92], [4, 2.36], [5, 2.78]] as const) {
+    for (const [m, ratio] of [
+      [2, 1.48],
+      [3, 1.92],
+      [4, 2.36],
+      [5, 2.78],
+    ] as const) {
       expect(Math.abs(openAirModeHz(m, 3000, timpani) / f11 / ratio - 1)).toBeLessThan(0.02)
     }
   })
 
   it('12 in, 10 mil, 2000 N/m, 20 °C: note 141.84 Hz (derived: vacuum 189.0208 Hz slowed by 0.35306 + 1.4929·1.2041·0.1524 kg/m²)', () => {
-    expect(openAirModeHz(0, 2000, twelve)).toBeCloseTo(189.0208 * Math.sqrt(0.35306 / (0.35306 + 1.4929 * 1.2041 * 0.1524)), 2)
+    expect(openAirModeHz(0, 2000, twelve)).toBeCloseTo(
+      189.0208 * Math.sqrt(0.35306 / (0.35306 + 1.4929 * 1.2041 * 0.1524)),
+      2,
+    )
   })
 
   it('tap over note lies near 1.8 on a 12 in 10 mil head, not at 1.593 (derived)', () => {
@@ -64,7 +72,9 @@ describe('a head in the open air', () => {
       fc.property(head, tension, (given, tensionNPerM) => {
         const note = openAirModeHz(0, tensionNPerM, given)
         expect(openAirModeHz(0, tensionNPerM, { ...given, diameterM: given.diameterM * 1.1 })).toBeLessThan(note)
-        expect(openAirModeHz(0, tensionNPerM, { ...given, coatingKgPerM2: given.coatingKgPerM2 + 0.02 })).toBeLessThan(note)
+        expect(openAirModeHz(0, tensionNPerM, { ...given, coatingKgPerM2: given.coatingKgPerM2 + 0.02 })).toBeLessThan(
+          note,
+        )
         expect(openAirModeHz(0, tensionNPerM, { ...given, temperatureC: given.temperatureC - 5 })).toBeLessThan(note)
       }),
     )

@@ -19,9 +19,13 @@ describe('rods', () => {
 
   it('rods times pull is the same edge pull for any number of rods', () => {
     fc.assert(
-      fc.property(fc.integer({ min: 4, max: 12 }), fc.double({ min: 100, max: 9000, noNaN: true }), (lugs, tensionNPerM) => {
-        expect((lugs * rodPullN(tensionNPerM, 0.35, lugs)) / (4 * rodPullN(tensionNPerM, 0.35, 4))).toBeCloseTo(1, 12)
-      }),
+      fc.property(
+        fc.integer({ min: 4, max: 12 }),
+        fc.double({ min: 100, max: 9000, noNaN: true }),
+        (lugs, tensionNPerM) => {
+          expect((lugs * rodPullN(tensionNPerM, 0.35, lugs)) / (4 * rodPullN(tensionNPerM, 0.35, 4))).toBeCloseTo(1, 12)
+        },
+      ),
     )
   })
 

@@ -47,7 +47,10 @@ export function rangePosition(tensionNPerM: number, range: TensionRange): RangeP
   requireTensionNPerM(slackNPerM)
   requireTensionNPerM(chokedNPerM)
   if (slackNPerM >= chokedNPerM) {
-    throw new AcousticsError('range', `The slack edge (${slackNPerM} N/m) must lie below the choked edge (${chokedNPerM} N/m).`)
+    throw new AcousticsError(
+      'range',
+      `The slack edge (${slackNPerM} N/m) must lie below the choked edge (${chokedNPerM} N/m).`,
+    )
   }
   const fraction = Math.log(tensionNPerM / slackNPerM) / Math.log(chokedNPerM / slackNPerM)
   return { fraction, zone: zoneOf(fraction) }
