@@ -1,0 +1,339 @@
+import { noteFrequencyHz, STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
+import { noteName } from '@/lib/acoustics/note-name'
+import type { KitPiece } from '@/plots/model/kit-piece'
+import type { StageSize } from '@/plots/model/document'
+import { areaWords, lengthWords } from '@/plots/symbols/length-words'
+import { outputsOf, pieceName } from '@/plots/symbols/piece-kinds'
+import { packCautions } from './cautions'
+import { changeSentences, compareSpecs } from './compare-specs'
+import type { FrozenDrum, FrozenEntry } from './frozen-kit'
+import { entriesInOrder } from './frozen-kit'
+import { typeWords } from './kit-words'
+import { insteadOfWords, lineDetails, lineWords } from './line-content'
+import { noteLocale } from './note-locale'
+import type { Fact, PackAudience, PackChannel, PackContact, PackDocument, PackLine, PackPlot, PackShow } from './pack-document'
+import { PACK_SCHEMA_VERSION } from './pack-document'
+import type { RevisionDocument, RigSpec } from './revision-document'
+import { tuningSheet } from './tuning-sheet'
+import { dateWords, instantWords, whenWords, windowWords } from './when-words'
+
+export interface PackPlace {
+  readonly id: string
+  readonly name: string
+  readonly town: string
+  readonly country: string
+}
+
+export interface PackStage extends StageSize {
+  readonly name: string
+  readonly heightM: number
+  readonly access: readonly string[]
+  readonly volts: number | null
+  readonly mainsHz: number | null
+  readonly inlets: string
+}
+
+export interface PackShowInput {
+  readonly id: string
+  /** YYYY-MM-DD. */
+  readonly date: string
+  readonly name: string
+  readonly venue: PackPlace
+  readonly stage: PackStage
+  readonly zone: string | null
+  readonly loadInTime: string | null
+  readonly showTime: string | null
+  readonly showDayOffset: number
+  readonly answersDueAt: string | null
+  readonly slot: { readonly changeoverMin: number; readonly lineCheckMin: number; readonly riserParking: string } | null
+  readonly sharedKit: { readonly owner: string; readonly mayRetune: boolean; readonly maySwap: string } | null
+  readonly player: { readonly name: string; readonly hand: 'right' | 'left'; readonly throneHeightM: number | null; readonly mixes: string }
+  /** Who brings the rented things to this show; empty when nobody is hired yet. */
+  readonly supplierNames: readonly string[]
+}
+
+export interface PackHireInput {
+  readonly id: string
+  readonly supplier: PackPlace
+  readonly zone: string | null
+  readonly deliveryDate: string | null
+  readonly deliveryFrom: string | null
+  readonly deliveryUntil: string | null
+  readonly collectionDate: string | null
+  readonly collectionFrom: string | null
+  readonly collectionUntil: string | null
+  readonly receiver: string
+  readonly conditionOnReturn: string
+  readonly poNumber: string
+  readonly answersDueAt: string | null
+}
+
+/** Somebody who could stand on a pack; whose contact it is decides who may read of it. */
+export interface PackContactInput {
+  readonly of: { readonly kind: 'party' } | { readonly kind: 'venue' | 'supplier'; readonly id: string }
+  readonly name: string
+  readonly duty: string
+  readonly email: string
+  readonly phone: string
+}
+
+export type PackRecipient =
+  | { readonly kind: 'venue'; readonly locale: string; readonly show: PackShowInput }
+  | { readonly kind: 'supplier'; readonly locale: string; readonly hire: PackHireInput; readonly shows: readonly PackShowInput[] }
+
+export interface PackInput {
+  readonly revision: { readonly number: number; readonly issuedAt: string; readonly note: string; readonly document: RevisionDocument }
+  readonly recipient: PackRecipient
+  readonly contacts: readonly PackContactInput[]
+  /** The revision of the last pack that was sent to this recipient. */
+  readonly previous: { readonly number: number; readonly document: RevisionDocument } | null
+}
+
+/**
+ * What one recipient gets of a revision: a venue the whole of one show, a supplier the lines of one hire. Fields are picked
+ * one by one, so nothing that this reader must not see can ride along. Pure.
+ */
+export function composePack(input: PackInput): PackDocument {
+  const { revision, recipient, previous } = input
+  const document = revision.document
+  const audience = recipient.kind
+  const shows = recipient.kind === 'venue' ? [recipient.show] : recipient.shows
+  const place = recipient.kind === 'venue' ? recipient.show.venue : recipient.hire.supplier
+  return {
+    schemaVersion: PACK_SCHEMA_VERSION,
+    audience,
+    locale: recipient.locale,
+    units: document.party.units,
+    paper: document.party.paper,
+    party: document.party.name,
+    tour: document.tour.name,
+    rig: document.rig.name,
+    revision: { number: revision.number, issued: dateWords(revision.issuedAt.slice(0, 10)), note: revision.note },
+    recipient: { name: place.name, place: [place.town, place.country].filter(Boolean).join(', ') },
+    shows: shows.map(packShow),
+    answersDue: answersDue(recipient),
+    facts: recipient.kind === 'venue' ? venueFacts(recipient.show, document) : hireFacts(recipient.hire),
+    contacts: input.contacts.filter((contact) => maySee(recipient, contact)).map(packContact),
+    changed: previous && {
+      sinceRevision: previous.number,
+      sentences: changeSentences(compareSpecs(seenBy(audience, previous.document), seenBy(audience, document))),
+    },
+    plot: recipient.kind === 'venue' ? packPlot(document, recipient.show, recipient.locale) : null,
+    channels: recipient.kind === 'venue' ? packChannels(document, recipient.locale) : [],
+    lines: packLines(document, recipient),
+    sheets:
+      recipient.kind === 'venue'
+        ? entriesInOrder(document.kit)
+            .filter(isDrum)
+            .map((drum) =>
+              tuningSheet(drum, { locale: recipient.locale, units: document.party.units, referenceHz: document.party.referenceHz }),
+            )
+        : [],
+    cautions: packCautions(audience),
+  }
+}
+
+function isDrum(entry: FrozenEntry): entry is FrozenDrum {
+  return entry.kind === 'drum'
+}
+
+function packShow(show: PackShowInput): PackShow {
+  const times: Fact[] = [
+    ...(show.loadInTime ? [{ label: 'Load-in', words: whenWords(show.date, show.loadInTime, show.zone) }] : []),
+    ...(show.showTime ? [{ label: 'Show', words: whenWords(show.date, show.showTime, show.zone, show.showDayOffset) }] : []),
+  ]
+  const where = [show.venue.name, show.venue.town].filter(Boolean).join(', ')
+  return {
+    showId: show.id,
+    title: show.name === '' ? where : `${show.name}: ${where}`,
+    date: dateWords(show.date),
+    times,
+  }
+}
+
+function answersDue(recipient: PackRecipient): string | null {
+  const { answersDueAt, zone } = recipient.kind === 'venue' ? recipient.show : recipient.hire
+  return answersDueAt ? instantWords(answersDueAt, zone) : null
+}
+
+function venueFacts(show: PackShowInput, document: RevisionDocument): Fact[] {
+  const { stage, player, slot, sharedKit } = show
+  const { units } = document.party
+  const power = [
+    ...(stage.volts === null ? [] : [`${stage.volts} V`]),
+    ...(stage.mainsHz === null ? [] : [`${stage.mainsHz} Hz`]),
+    ...(stage.inlets === '' ? [] : [stage.inlets]),
+  ]
+  return [
+    {
+      label: 'Stage',
+      words: `${stage.name}, ${areaWords(stage.widthM, stage.depthM, units)}, ${lengthWords(stage.heightM, units)} high`,
+    },
+    ...(stage.access.length > 0 ? [{ label: 'Way in', words: stage.access.join(', ') }] : []),
+    { label: 'Power', words: power.length > 0 ? power.join(', ') : 'not known yet: please tell us volts, hertz and inlets' },
+    {
+      label: 'Player',
+      words: [
+        player.name,
+        `${player.hand}-handed`,
+        ...(player.throneHeightM === null ? [] : [`throne at ${lengthWords(player.throneHeightM, units)}`]),
+        ...(player.mixes === '' ? [] : [`mixes: ${player.mixes}`]),
+      ].join(', '),
+    },
+    ...(slot
+      ? [
+          {
+            label: 'Slot',
+            words: [
+              `changeover ${slot.changeoverMin} min`,
+              `line check ${slot.lineCheckMin} min`,
+              ...(slot.riserParking === '' ? [] : [`riser parks: ${slot.riserParking}`]),
+            ].join(', '),
+          },
+        ]
+      : []),
+    ...(sharedKit
+      ? [
+          {
+            label: 'Shared kit',
+            words: [
+              `of ${sharedKit.owner}`,
+              sharedKit.mayRetune ? 'may be retuned' : 'must not be retuned',
+              ...(sharedKit.maySwap === '' ? [] : [`may be swapped: ${sharedKit.maySwap}`]),
+            ].join(', '),
+          },
+        ]
+      : []),
+    ...(show.supplierNames.length > 0 ? [{ label: 'Rented kit comes from', words: show.supplierNames.join(', ') }] : []),
+  ]
+}
+
+function hireFacts(hire: PackHireInput): Fact[] {
+  const window = (date: string | null, from: string | null, until: string | null) =>
+    date ? windowWords(date, from, until, hire.zone) : 'date not set yet'
+  return [
+    { label: 'Delivery', words: window(hire.deliveryDate, hire.deliveryFrom, hire.deliveryUntil) },
+    { label: 'Collection', words: window(hire.collectionDate, hire.collectionFrom, hire.collectionUntil) },
+    ...(hire.receiver === '' ? [] : [{ label: 'Received by', words: hire.receiver }]),
+    ...(hire.conditionOnReturn === '' ? [] : [{ label: 'Condition on return', words: hire.conditionOnReturn }]),
+    ...(hire.poNumber === '' ? [] : [{ label: 'PO number', words: hire.poNumber }]),
+  ]
+}
+
+/** A reader sees the party's contacts and those of its own house. */
+function maySee(recipient: PackRecipient, { of }: PackContactInput): boolean {
+  if (of.kind === 'party') return true
+  const own = recipient.kind === 'venue' ? recipient.show.venue.id : recipient.hire.supplier.id
+  return of.kind === recipient.kind && of.id === own
+}
+
+function packContact({ name, duty, email, phone }: PackContactInput): PackContact {
+  return { name, duty, email, phone }
+}
+
+/** The part of a rig that an audience is told of, for telling it what changed. */
+function seenBy(audience: PackAudience, spec: RigSpec): RigSpec {
+  if (audience === 'venue') return spec
+  return {
+    ...spec,
+    party: { ...spec.party, referenceHz: STANDARD_REFERENCE_HZ },
+    kit: spec.kit.filter((entry) => entry.supply === 'rented').map(untuned),
+    plot: { sequence: 0, document: { ...spec.plot.document, pieces: {} } },
+    channels: [],
+  }
+}
+
+/** A drum without what only its tuner reads. */
+function untuned(entry: FrozenEntry): FrozenEntry {
+  if (entry.kind !== 'drum') return entry
+  const spec = entry.spec
+  return {
+    ...entry,
+    spec: {
+      ...spec,
+      note: null,
+      noteLocked: false,
+      headRelationCents: 0,
+      toleranceCents: 0,
+      muffling: '',
+      batter: { ...spec.batter, gauge: null },
+      resonant: spec.resonant && { ...spec.resonant, gauge: null },
+    },
+  }
+}
+
+function packLines(document: RevisionDocument, recipient: PackRecipient): PackLine[] {
+  // Rented things of a show that nobody is hired for are asked of the house.
+  const houseBrings = recipient.kind === 'venue' && recipient.show.supplierNames.length === 0
+  return document.lines
+    .filter((line) => recipient.kind === 'venue' || line.content.supply === 'rented')
+    .map((line) => {
+      const { supply } = line.content
+      const asked = recipient.kind === 'supplier' || supply === 'venue' || houseBrings
+      return {
+        number: line.position,
+        lineId: line.lineId,
+        hash: line.hash,
+        count: line.content.count,
+        kind: line.content.kind,
+        words: lineWords(line.content, document.party.units),
+        details: lineDetails(line.content),
+        insteadOf: insteadOfWords(line.content),
+        supply,
+        broughtBy: asked ? 'you' : recipient.kind === 'venue' ? recipient.show.supplierNames.join(', ') : '',
+        asked,
+      }
+    })
+}
+
+/** Kit entries as the plot draws them, with notes named for the reader. */
+export function kitPieces(document: Pick<RevisionDocument, 'kit' | 'party'>, locale: string): KitPiece[] {
+  return entriesInOrder(document.kit).map((entry): KitPiece => {
+    const { id, name, count } = entry
+    switch (entry.kind) {
+      case 'drum': {
+        const { role, diameterIn, depthIn, lugs, note } = entry.spec
+        return {
+          ...{ kind: 'drum', id, name, role, diameterIn, depthIn, lugs },
+          noteLabel: note ? noteName(note.semitone, noteLocale(locale)) : null,
+          noteHz: note ? noteFrequencyHz(note, document.party.referenceHz) : null,
+        }
+      }
+      case 'cymbal':
+        return { kind: 'cymbal', id, name, count, type: entry.spec.type, diameterIn: entry.spec.diameterIn }
+      case 'hardware':
+        return { kind: 'hardware', id, name, count, type: entry.spec.type }
+      case 'microphone':
+        return { kind: 'microphone', id, name, count, type: entry.spec.type, phantom: entry.spec.phantom, stand: entry.spec.stand }
+    }
+  })
+}
+
+function packPlot(document: RevisionDocument, show: PackShowInput, locale: string): PackPlot | null {
+  if (Object.keys(document.plot.document.pieces).length === 0) return null
+  return {
+    document: document.plot.document,
+    kit: kitPieces(document, locale),
+    channels: document.channels.flatMap(({ pieceId, output, number }) => (pieceId ? [{ pieceId, output, number }] : [])),
+    stage: { widthM: show.stage.widthM, depthM: show.stage.depthM },
+    stageName: `${show.venue.name}, ${show.stage.name}`,
+  }
+}
+
+function packChannels(document: RevisionDocument, locale: string): PackChannel[] {
+  const kit = new Map(kitPieces(document, locale).map((piece) => [piece.id, piece]))
+  return [...document.channels]
+    .sort((a, b) => a.number - b.number)
+    .map(({ number, name, pieceId, output, stand, phantom }) => {
+      const piece = pieceId ? document.plot.document.pieces[pieceId] : undefined
+      const aimed = piece?.aim ? document.plot.document.pieces[piece.aim.pieceId] : undefined
+      const source = piece
+        ? [
+            pieceName(piece, kit),
+            ...(aimed ? [` on ${pieceName(aimed, kit)}`] : []),
+            ...(outputsOf(piece).length > 1 && output !== '' ? [`, ${output}`] : []),
+          ].join('')
+        : ''
+      return { number, name, source, stand: typeWords(stand), phantom }
+    })
+}
