@@ -107,7 +107,13 @@ function labelOf(piece: Piece, input: SceneInput): Omit<LabelRequest, 'pieceId' 
       ],
     }
   if (entry?.kind === 'cymbal')
-    return { prefer: 'inside', priority: 3, lines: [{ text: name, role: 'small', ink: 'brass' }] }
+    // Clear of the bell.
+    return {
+      prefer: 'inside',
+      shifts: [0.58, -0.58],
+      priority: 3,
+      lines: [{ text: name, role: 'small', ink: 'brass' }],
+    }
   if (entry?.kind === 'hardware' && entry.type !== 'throne' && entry.type !== 'rug') return null
   if (piece.kind === 'riser') {
     const high = lengthWords(piece.heightM ?? pieceKindOf(piece)?.heightM ?? 0, units)

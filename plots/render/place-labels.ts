@@ -11,6 +11,8 @@ export interface LabelRequest {
   readonly footprint: Footprint
   /** `inside` first if it fits, `beside` never inside, `corner` in the upstage stage-right corner of a flat piece. */
   readonly prefer: 'inside' | 'beside' | 'corner'
+  /** Where inside, from the middle (0) to the upstage edge (1), first wish first; the middle when left out. */
+  readonly shifts?: readonly number[]
   /** Low goes first and so gets its place. */
   readonly priority: number
 }
@@ -38,6 +40,7 @@ interface Candidate {
   readonly leaderFrom: PlotPoint | null
 }
 
+const MIDDLE_FIRST = [0, 0.3, -0.3, 0.5, -0.5]
 const LINE_HEIGHT_EM = 1.12
 /** Steps outward when the near places are taken, in ems of a name. */
 const RINGS_EM = [0.5, 1.6, 3, 4.6, 6.4]
@@ -88,7 +91,7 @@ function* candidatesFor(request: LabelRequest, sizes: TextSizes): Generator<Cand
   const versions = lines.length > 1 ? [lines, [first]] : [lines]
   if (request.prefer === 'inside')
     for (const version of versions)
-      for (const shift of [0, 0.3, -0.3, 0.5, -0.5]) {
+      for (const shift of request.shifts ?? MIDDLE_FIRST) {
         const size = sizeOf(version, sizes)
         const half = (footprintBounds(footprint).maxYM - footprintBounds(footprint).minYM) / 2
         const box = boxAbout(plotPoint(footprint.centre.xM, footprint.centre.yM + shift * half), size)
