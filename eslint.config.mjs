@@ -10,7 +10,7 @@ export default defineConfig([
     rules: {
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
       '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'separate-type-imports' }],
-      'no-console': ['error', { allow: [] }],
+      'no-console': 'error',
       'no-warning-comments': ['error', { terms: ['todo', 'fixme', 'xxx'] }],
     },
   },

@@ -3,8 +3,6 @@ import { defineConfig } from 'vitest/config'
 
 const root = fileURLToPath(new URL('.', import.meta.url))
 const alias = [
-  // `server-only` throws outside Next's server graph; tests are server code.
-  { find: /^server-only$/, replacement: `${root}node_modules/server-only/empty.js` },
   { find: /^@\//, replacement: root },
 ]
 
@@ -16,7 +14,7 @@ export default defineConfig({
         resolve: { alias },
         test: {
           name: 'unit',
-          include: ['{lib,plots,components,fonts,app,db,scripts,tests/unit}/**/*.test.{ts,tsx}'],
+          include: ['{lib,plots,components,fonts,app,db,scripts,tests/unit}/**/*.test.{ts,tsx,mjs}'],
           environment: 'node',
         },
       },
