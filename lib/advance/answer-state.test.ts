@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { asAskedAnswer } from './answer'
 import type { Decision, SaidAnswer } from './answer-state'
-import { countStates, deriveLineStates } from './answer-state'
+import { deriveLineStates } from './answer-state'
 
 function said(sequence: number, lineId: string, lineHash: string, more: Partial<SaidAnswer> = {}): SaidAnswer {
   return {
@@ -77,8 +77,6 @@ describe('deriveLineStates', () => {
         const states = deriveLineStates(lines, answers, decisions)
         expect(deriveLineStates(lines, shuffled.map(({ entry }) => entry), [...decisions].reverse())).toEqual(states)
         expect(states.flatMap((state) => state.history)).toHaveLength(answers.length)
-        const counts = countStates(states)
-        expect(counts.settled + counts.waiting + counts.changed).toBe(3)
       }),
     )
   })

@@ -87,16 +87,3 @@ function groupByLine<Event extends { readonly lineId: string; readonly sequence:
   }
   return groups
 }
-
-/** Lines by how they stand, for the bar of a show: answered lines still wait for a decision. */
-export interface StateCounts {
-  readonly settled: number
-  readonly waiting: number
-  readonly changed: number
-}
-
-export function countStates(states: readonly Pick<LineState, 'state'>[]): StateCounts {
-  const settled = states.filter(({ state }) => state === 'settled').length
-  const changed = states.filter(({ state }) => state === 'changed since').length
-  return { settled, changed, waiting: states.length - settled - changed }
-}

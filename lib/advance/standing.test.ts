@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { asAskedAnswer } from './answer'
 import type { Decision, LineState, SaidAnswer } from './answer-state'
 import type { MailFacts, StandingFacts } from './standing'
-import { mailFate, recipientStanding, sameLines } from './standing'
+import { countLines, isAskedOf, mailFate, recipientStanding, sameLines, urgentStanding } from './standing'
 
 const sentAt = '2031-09-01T10:00:00Z'
 const before = '2031-08-31T10:00:00Z'
@@ -148,5 +148,38 @@ describe('sameLines', () => {
     expect(sameLines(lines, lines.slice(1))).toBe(false)
     expect(sameLines(lines.slice(1), lines)).toBe(false)
     expect(sameLines([], [])).toBe(true)
+  })
+})
+
+describe('countLines', () => {
+  it('tells settled, waiting and changed apart', () => {
+    const asked = ['a', 'b', 'c', 'd', 'e'].map((lineId) => ({ lineId, hash: 'h2' }))
+    const sent = [
+      { lineId: 'a', hash: 'h2' },
+      { lineId: 'b', hash: 'h2' },
+      { lineId: 'c', hash: 'h1' },
+      { lineId: 'd', hash: 'h2' },
+    ]
+    const states = [settled('a'), answered('b'), open('c'), changed('d'), open('e')]
+    expect(countLines(asked, sent, states)).toEqual({ settled: 1, waiting: 1, changed: 3 })
+    expect(countLines(asked.slice(0, 1), [{ lineId: 'a', hash: 'h1' }], states)).toEqual({ settled: 1, waiting: 0, changed: 0 })
+  })
+})
+
+describe('urgentStanding', () => {
+  it('puts what needs a hand first', () => {
+    expect(urgentStanding(['settled', 'out', 'not delivered'])).toBe('not delivered')
+    expect(urgentStanding(['settled', 'not sent'])).toBe('settled')
+    expect(urgentStanding([])).toBe('not sent')
+  })
+})
+
+describe('isAskedOf', () => {
+  it('asks a supplier for what is rented only, and a house for that too when nobody is hired', () => {
+    expect(isAskedOf('supplier', 'rented', true)).toBe(true)
+    expect(isAskedOf('supplier', 'venue', true)).toBe(false)
+    expect(isAskedOf('venue', 'venue', true)).toBe(true)
+    expect(isAskedOf('venue', 'rented', true)).toBe(false)
+    expect(isAskedOf('venue', 'rented', false)).toBe(true)
   })
 })

@@ -83,3 +83,43 @@ function lastAsked({ sent, states }: StandingFacts): number {
 function closedSince(facts: StandingFacts, asked: number): boolean {
   return facts.closedAt.some((at) => Date.parse(at) >= asked)
 }
+
+/** Lines by how they stand, for the bar of a show: what is answered still waits for a decision. */
+export interface LineCounts {
+  readonly settled: number
+  readonly waiting: number
+  readonly changed: number
+}
+
+/**
+ * Counts the lines that the newest revision asks for. One is changed when it was not sent as it now reads, or was answered as it
+ * read before; what is settled as it reads now stays settled even while the newest sending does not hold it.
+ * @param statesNow how the lines of `askedNow` stand
+ */
+export function countLines(askedNow: readonly AnsweredLine[], sent: readonly AnsweredLine[], statesNow: readonly LineState[]): LineCounts {
+  const sentHash = new Map(sent.map((line) => [line.lineId, line.hash]))
+  const state = new Map(statesNow.map((line) => [line.lineId, line.state]))
+  const counts = { settled: 0, waiting: 0, changed: 0 }
+  for (const line of askedNow) {
+    const now = state.get(line.lineId)
+    if (now === 'settled') counts.settled += 1
+    else if (now === 'changed since' || sentHash.get(line.lineId) !== line.hash) counts.changed += 1
+    else counts.waiting += 1
+  }
+  return counts
+}
+
+const urgency: readonly Standing[] = ['not delivered', 'changed since', 'overdue', 'part answered', 'out', 'answered', 'settled', 'not sent']
+
+/** The standing of several recipients as one: the most urgent. Nobody at all is not sent. */
+export function urgentStanding(standings: readonly Standing[]): Standing {
+  return urgency.find((standing) => standings.includes(standing)) ?? 'not sent'
+}
+
+/**
+ * Whether a line of a rig is asked of this audience: a supplier brings what is rented, a house what is the venue's, and what is
+ * rented too where nobody was hired.
+ */
+export function isAskedOf(audience: 'venue' | 'supplier', supply: 'rented' | 'venue', someoneIsHired: boolean): boolean {
+  return audience === 'supplier' ? supply === 'rented' : supply === 'venue' || !someoneIsHired
+}
