@@ -3,7 +3,7 @@
 import { createInterface } from 'node:readline'
 import { setTimeout as delay } from 'node:timers/promises'
 
-const GRACE_MS = 10_000
+const GRACE_MS = 8_000
 const groups = new Map()
 
 function signal(pid, name) {

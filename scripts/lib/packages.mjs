@@ -4,24 +4,27 @@ import { Failure } from './failure.mjs'
 import { holderOf, withLock } from './lock.mjs'
 import { npmCommand } from './npm.mjs'
 
+const readJson = (file) => JSON.parse(readFileSync(file, 'utf8'))
+
 /**
- * What of the lock file is not installed as locked: names, at most a few.
- * npm writes its own list last, so that a broken-off installation counts as none.
+ * What is not installed as locked: names, at most all of them.
+ * npm writes its own list of what it installed last of all, so that a broken-off installation counts as none. The lock file also holds packages
+ * that npm rightly leaves out (for other systems, optional peers), so it is asked in two parts: is everything here the locked version,
+ * and is everything here that package.json asks for.
  */
 export function missingPackages(projectRoot) {
   const installedFile = join(projectRoot, 'node_modules', '.package-lock.json')
   if (!existsSync(installedFile)) return ['all of them']
-  const locked = JSON.parse(readFileSync(join(projectRoot, 'package-lock.json'), 'utf8')).packages
-  const installed = JSON.parse(readFileSync(installedFile, 'utf8')).packages
-  return Object.entries(locked)
-    .filter(([path, wanted]) => {
-      if (path === '' || wanted.link) return false
-      const found = installed[path]
-      // Packages for other systems are locked too and rightly not here.
-      if (!found) return !(wanted.optional || wanted.devOptional || wanted.peer)
-      return found.version !== wanted.version || !existsSync(join(projectRoot, path))
-    })
-    .map(([path, wanted]) => `${path.slice(path.lastIndexOf('node_modules/') + 13)} ${wanted.version}`)
+  const locked = readJson(join(projectRoot, 'package-lock.json')).packages
+  const installed = readJson(installedFile).packages
+  const { dependencies = {}, devDependencies = {} } = readJson(join(projectRoot, 'package.json'))
+  const changed = Object.keys(installed).filter(
+    (path) => installed[path].version !== locked[path]?.version || !existsSync(join(projectRoot, path)),
+  )
+  const lacking = Object.keys({ ...dependencies, ...devDependencies })
+    .map((name) => `node_modules/${name}`)
+    .filter((path) => !(path in installed))
+  return [...lacking, ...changed].map((path) => path.slice(path.lastIndexOf('node_modules/') + 'node_modules/'.length))
 }
 
 export async function installPackages({ place, processes, say }) {
