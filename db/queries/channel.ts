@@ -73,6 +73,7 @@ export async function findClashingChannel(
   return rows[0]
 }
 
+/** Undefined when the id is taken by a channel elsewhere. */
 export async function insertChannel(
   db: Db,
   scope: Scope,
@@ -81,10 +82,9 @@ export async function insertChannel(
   const rows = await db
     .insert(channel)
     .values({ ...row, partyId: scope.partyId })
+    .onConflictDoNothing({ target: channel.id })
     .returning(columns)
-  const made = rows[0]
-  if (!made) throw new Error('no channel row came back')
-  return made
+  return rows[0]
 }
 
 /** Undefined when the version is no longer the one that was seen. */

@@ -1,9 +1,9 @@
 import { encode } from 'next-auth/jwt'
 
-/** What a test knows of the running app. */
+/** Where the running app is. Vitest sets BASE_URL to a value of its own, so the app's address is read from APP_URL. */
 export function baseUrl(): string {
-  const url = process.env['BASE_URL']
-  if (!url) throw new Error('BASE_URL is not set: these tests talk to a running app (npm test starts one)')
+  const url = process.env['APP_URL']
+  if (!url) throw new Error('APP_URL is not set: these tests talk to a running app (npm test starts one)')
   return url
 }
 

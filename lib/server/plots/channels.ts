@@ -44,6 +44,7 @@ export async function createChannel(
     }
     await assertFree(tx, actor, { rigId, exceptId: null, channel: input.channel })
     const made = await insertChannel(tx, actor, { ...input.channel, id, rigId })
+    if (!made) throw new AppError('conflict', 'This id is taken. Nothing was changed; send it under a new one.')
     await audit(tx, actor, 'channel.added', { type: 'channel', id: made.id }, { rigId, ...input.channel })
     await notifyLive(tx, actor.partyId, [`patch:${rigId}`])
     return made
