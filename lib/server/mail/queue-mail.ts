@@ -13,6 +13,8 @@ export type OutgoingMail = {
   attachments?: { blobId: string; name: string }[]
   /** Seconds to hold it back; until then it can be stopped. */
   holdSeconds?: number
+  /** A pack's mail is not queued until its PDF is attached: `make-pack-pdf`, told the mail's id, queues it then. */
+  awaitsPdf?: boolean
 }
 
 /** Writes a mail into the outbox and its job into the queue, in the caller's transaction. Returns the mail's id. */
@@ -32,6 +34,11 @@ export async function queueMail(tx: Db, outgoing: OutgoingMail): Promise<string>
     if (!outgoing.partyId) throw new Error('only a party’s mail carries files')
     await insertMailAttachment(tx, { partyId: outgoing.partyId, mailId, ...attachment })
   }
-  await enqueue(tx, 'send-mail', { mailId }, { runAt: sendAfter, key: `mail:${mailId}` })
+  if (!outgoing.awaitsPdf) await enqueueMail(tx, { id: mailId, sendAfter })
   return mailId
+}
+
+/** Queues a mail of the outbox for when it may go, and not before. Queued again, it is still one job. */
+export async function enqueueMail(tx: Db, mail: { id: string; sendAfter: Date }): Promise<void> {
+  await enqueue(tx, 'send-mail', { mailId: mail.id }, { runAt: mail.sendAfter, key: `mail:${mail.id}` })
 }
