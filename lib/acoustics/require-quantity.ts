@@ -27,7 +27,8 @@ export function requireWhole(field: string, value: number, limits: QuantityLimit
 
 const MIN_DIAMETER_M = 0.1
 const MAX_DIAMETER_M = 0.8
-const METRE_PER_INCH = 0.0254
+/** Exact by definition (international yard and pound agreement, 1959). */
+export const METRE_PER_INCH = 0.0254
 
 /**
  * Head diameter in metres, 0.1 to 0.8 (about 4 to 31 in). The commonest slip is to pass nominal inches or

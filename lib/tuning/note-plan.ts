@@ -4,13 +4,12 @@ import { nearestNote, noteFrequencyHz, STANDARD_REFERENCE_HZ } from '@/lib/acous
 import type { Note } from '@/lib/acoustics/note'
 import { openAirModeHz, openAirTensionNPerM } from '@/lib/acoustics/open-air-head'
 import type { Film } from '@/lib/acoustics/film'
+import { METRE_PER_INCH } from '@/lib/acoustics/require-quantity'
 import { defaultTensionRange, middleTensionNPerM, rangePosition } from '@/lib/acoustics/tension-range'
 import type { DrumRole, RangePosition, TensionRange } from '@/lib/acoustics/tension-range'
 import { resonantTargetHz } from './head-relation'
 import { templateInterval } from './note-template'
 import type { NoteTemplate } from './note-template'
-
-const METRE_PER_INCH = 0.0254
 
 export type PlanDrum = {
   id: string
