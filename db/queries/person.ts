@@ -32,6 +32,15 @@ export async function insertPerson(
   return made
 }
 
+/** Makes a person, or answers undefined when somebody has that address: of two at once, one is made. */
+export async function insertPersonUnlessKnown(
+  db: Db,
+  row: { name: string; email: string; passwordHash?: string; emailVerifiedAt?: Date },
+) {
+  const rows = await db.insert(person).values(row).onConflictDoNothing().returning(columns)
+  return rows[0]
+}
+
 export async function setPersonPassword(db: Db, id: string, passwordHash: string): Promise<void> {
   await db.update(person).set({ passwordHash }).where(eq(person.id, id))
 }

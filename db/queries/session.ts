@@ -1,4 +1,4 @@
-import { and, eq, gt, isNull, sql } from 'drizzle-orm'
+import { and, eq, gt, isNull, ne, sql } from 'drizzle-orm'
 import type { Db } from '@/db/client'
 import { membership, party, standIn } from '@/db/schema/party'
 import { person, session } from '@/db/schema/person'
@@ -72,11 +72,14 @@ export async function switchParty(db: Db, input: { sessionId: string; personId: 
   return rows.length === 1
 }
 
-export async function endSession(db: Db, input: { sessionId: string; personId: string }): Promise<void> {
-  await db
+/** False when it was no live session of that person. */
+export async function endSession(db: Db, input: { sessionId: string; personId: string }): Promise<boolean> {
+  const rows = await db
     .update(session)
     .set({ endedAt: sql`now()` })
     .where(and(eq(session.id, input.sessionId), eq(session.personId, input.personId), isNull(session.endedAt)))
+    .returning({ id: session.id })
+  return rows.length === 1
 }
 
 export async function endAllSessions(db: Db, personId: string): Promise<number> {
@@ -95,4 +98,12 @@ export async function listSessions(db: Db, personId: string) {
     .where(and(eq(session.personId, personId), isNull(session.endedAt), gt(session.expiresAt, sql`now()`)))
     .orderBy(sql`${session.lastSeenAt} desc`, session.id)
     .limit(100)
+}
+
+/** Signs a person out everywhere but on one device. */
+export async function endOtherSessions(db: Db, input: { personId: string; sessionId: string }): Promise<void> {
+  await db
+    .update(session)
+    .set({ endedAt: sql`now()` })
+    .where(and(eq(session.personId, input.personId), ne(session.id, input.sessionId), isNull(session.endedAt)))
 }

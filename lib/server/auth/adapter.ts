@@ -38,7 +38,8 @@ export const authAdapter: Adapter = {
   updateSession: () => Promise.resolve(null),
   deleteSession: () => Promise.resolve(null),
   async createVerificationToken(token) {
-    await insertVerificationToken(db(), token)
+    // Nobody is mailed a link to an unknown address, so there is nothing to keep for it.
+    if (await findPersonByEmail(db(), token.identifier)) await insertVerificationToken(db(), token)
     return token
   },
   async useVerificationToken(input) {

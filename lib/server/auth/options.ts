@@ -1,22 +1,31 @@
 import type { NextAuthOptions } from 'next-auth'
 import type { EmailConfig } from 'next-auth/providers/email'
 import Credentials from 'next-auth/providers/credentials'
-import { randomUUID } from 'node:crypto'
+import { headers } from 'next/headers'
+import { sitePath } from '@/lib/contracts/sign-in'
 import { env } from '@/lib/env'
+import { AppError } from '@/lib/errors'
+import { clientAddress } from '@/lib/server/http/client-address'
+import { log } from '@/lib/server/log'
 import { authAdapter } from './adapter'
-import { linkToken } from './link-token'
 import './next-auth-types'
 import { passwordSignIn } from './password-sign-in'
 import { sendSignInMail } from './send-sign-in-mail'
+import { newSignInToken, signInLinkSeconds } from './sign-in-link'
+import { takeFromMailLimits } from './sign-in-limits'
 import { startSession, stopSession } from './start-session'
 
 const sessionSeconds = 30 * 24 * 60 * 60
-const linkSeconds = 20 * 60
 
-/** The token carries the id that its secret is made from, so the outbox can hold the id alone. */
-function newSignInToken(): string {
-  const id = randomUUID()
-  return `${id}.${linkToken('sign-in', id)}`
+/** Before a link is mailed: true, or the page to go to when too many were asked for. */
+async function mayMailLink(email: string): Promise<true | string> {
+  try {
+    await takeFromMailLimits(email, clientAddress(await headers()))
+    return true
+  } catch (refusal) {
+    if (refusal instanceof AppError) return new URL('/sign-in?error=RateLimited', env().APP_URL).href
+    throw refusal
+  }
 }
 
 const emailLink: EmailConfig = {
@@ -25,7 +34,7 @@ const emailLink: EmailConfig = {
   name: 'Email',
   server: '',
   from: '',
-  maxAge: linkSeconds,
+  maxAge: signInLinkSeconds,
   options: {},
   generateVerificationToken: newSignInToken,
   sendVerificationRequest: sendSignInMail,
@@ -35,7 +44,7 @@ export const authOptions: NextAuthOptions = {
   secret: env().NEXTAUTH_SECRET,
   adapter: authAdapter,
   session: { strategy: 'jwt', maxAge: sessionSeconds },
-  pages: { signIn: '/sign-in', verifyRequest: '/sign-in/sent', error: '/sign-in' },
+  pages: { signIn: '/sign-in', signOut: '/sign-in', verifyRequest: '/sign-in/sent', error: '/sign-in' },
   providers: [
     Credentials({
       name: 'Password',
@@ -46,7 +55,9 @@ export const authOptions: NextAuthOptions = {
   ],
   callbacks: {
     // next-auth invents a person for an unknown address (its id is the address); those are let go without a word.
-    signIn: ({ user, email }) => Boolean(email?.verificationRequest) || user.id !== user.email,
+    signIn: ({ user, email }) =>
+      email?.verificationRequest ? mayMailLink(user.email ?? '') : Promise.resolve(user.id !== user.email),
+    redirect: ({ url, baseUrl }) => `${baseUrl}${sitePath(url, baseUrl) ?? '/tours'}`,
     async jwt({ token, user }) {
       if (user) token.sessionId = await startSession(user.id, sessionSeconds)
       return token
@@ -55,6 +66,12 @@ export const authOptions: NextAuthOptions = {
       if (token.sessionId) session.sessionId = token.sessionId
       return session
     },
+  },
+  // What its errors carry beside their kind can name a person.
+  logger: {
+    error: (code, metadata) => log.error({ error: metadata instanceof Error ? metadata : metadata.error }, `next-auth: ${code}`),
+    warn: (code) => log.warn(`next-auth: ${code}`),
+    debug: () => undefined,
   },
   events: {
     async signOut({ token }) {
