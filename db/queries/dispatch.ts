@@ -257,33 +257,6 @@ export async function insertDispatch(db: Db, scope: Scope, row: Omit<typeof disp
   return rows.length === 1
 }
 
-/** The revision of the last sending to a contact for a show or hire and rig that was not stopped. */
-export async function findLastSentRevision(
-  db: Db,
-  scope: Scope,
-  input: { contactId: string; showId: string | null; hireId: string | null; rigId: string },
-): Promise<string | undefined> {
-  const rows = await db
-    .select({ revisionId: pack.revisionId })
-    .from(dispatch)
-    .innerJoin(pack, and(eq(pack.partyId, dispatch.partyId), eq(pack.id, dispatch.packId)))
-    .innerJoin(revision, and(eq(revision.partyId, pack.partyId), eq(revision.id, pack.revisionId)))
-    .innerJoin(mail, and(eq(mail.partyId, dispatch.partyId), eq(mail.id, dispatch.mailId)))
-    .where(
-      and(
-        eq(dispatch.partyId, scope.partyId),
-        eq(dispatch.contactId, input.contactId),
-        input.showId === null ? isNull(pack.showId) : eq(pack.showId, input.showId),
-        input.hireId === null ? isNull(pack.hireId) : eq(pack.hireId, input.hireId),
-        eq(revision.rigId, input.rigId),
-        isNull(mail.cancelledAt),
-      ),
-    )
-    .orderBy(desc(dispatch.createdAt), desc(dispatch.id))
-    .limit(1)
-  return rows[0]?.revisionId
-}
-
 /** The packs behind a link: of each rig the newest that was not stopped and is no longer held back. */
 export async function listPacksOfGrant(db: Db, scope: Scope, grantId: string) {
   return db

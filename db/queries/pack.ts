@@ -1,10 +1,10 @@
-import { and, arrayOverlaps, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm'
+import { and, arrayOverlaps, asc, desc, eq, inArray, isNull, notExists, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { dispatch, pack } from '@/db/schema/advance'
 import { contact, stage, supplier, venue } from '@/db/schema/directory'
 import { blob } from '@/db/schema/file'
 import { hire, hireShow } from '@/db/schema/hire'
-import { mail } from '@/db/schema/mail'
+import { mail, mailEvent } from '@/db/schema/mail'
 import { membership, player } from '@/db/schema/party'
 import { person } from '@/db/schema/person'
 import { revision } from '@/db/schema/revision'
@@ -134,15 +134,34 @@ export async function listPartyCrew(db: Db, scope: Scope) {
     .limit(12)
 }
 
-/** The revision in the last pack that went out to a recipient; a mail that was stopped or failed told nobody anything. */
-export async function findLastSentRevision(db: Db, scope: Scope, of: PackOf) {
+/** The revision of a rig in the last pack that went out to a recipient; a mail that was stopped or came back told nobody anything. */
+export async function findLastSentRevision(
+  db: Db,
+  scope: Scope,
+  { of, rigId, contactId }: { of: PackOf; rigId: string; contactId?: string | undefined },
+) {
   const rows = await db
     .select({ number: revision.number, document: revision.document })
     .from(dispatch)
     .innerJoin(pack, and(eq(pack.partyId, dispatch.partyId), eq(pack.id, dispatch.packId)))
     .innerJoin(revision, and(eq(revision.partyId, pack.partyId), eq(revision.id, pack.revisionId)))
     .innerJoin(mail, and(eq(mail.partyId, dispatch.partyId), eq(mail.id, dispatch.mailId)))
-    .where(and(eq(dispatch.partyId, scope.partyId), ofThis(of), isNull(mail.cancelledAt), isNull(mail.failedAt)))
+    .where(
+      and(
+        eq(dispatch.partyId, scope.partyId),
+        ofThis(of),
+        eq(revision.rigId, rigId),
+        contactId === undefined ? undefined : eq(dispatch.contactId, contactId),
+        isNull(mail.cancelledAt),
+        isNull(mail.failedAt),
+        notExists(
+          db
+            .select({ one: sql`1` })
+            .from(mailEvent)
+            .where(and(eq(mailEvent.mailId, mail.id), inArray(mailEvent.kind, ['bounced', 'failed']))),
+        ),
+      ),
+    )
     .orderBy(desc(dispatch.createdAt), desc(dispatch.id))
     .limit(1)
   return rows[0]

@@ -14,6 +14,7 @@ import { noteLocale } from './note-locale'
 import type { Fact, PackAudience, PackChannel, PackContact, PackDocument, PackLine, PackPlot, PackShow } from './pack-document'
 import { PACK_SCHEMA_VERSION } from './pack-document'
 import type { RevisionDocument, RigSpec } from './revision-document'
+import { isAskedOf } from './standing'
 import { tuningSheet } from './tuning-sheet'
 import { dateWords, instantWords, whenWords, windowWords } from './when-words'
 
@@ -263,13 +264,12 @@ function untuned(entry: FrozenEntry): FrozenEntry {
 }
 
 function packLines(document: RevisionDocument, recipient: PackRecipient): PackLine[] {
-  // Rented things of a show that nobody is hired for are asked of the house.
-  const houseBrings = recipient.kind === 'venue' && recipient.show.supplierNames.length === 0
+  const someoneIsHired = recipient.kind === 'supplier' || recipient.show.supplierNames.length > 0
   return document.lines
     .filter((line) => recipient.kind === 'venue' || line.content.supply === 'rented')
     .map((line) => {
       const { supply } = line.content
-      const asked = recipient.kind === 'supplier' || supply === 'venue' || houseBrings
+      const asked = isAskedOf(recipient.kind, supply, someoneIsHired)
       return {
         number: line.position,
         lineId: line.lineId,

@@ -28,6 +28,8 @@ export type StorePackInput = {
   revisionId?: string | undefined
   /** Of a hire over shows of several rigs: which one is packed. */
   rigId?: string | undefined
+  /** Whom it goes to: what changed is told against what this reader had. Anybody's last pack unless given. */
+  contactId?: string | undefined
   /** The reader's language; the party's unless given. */
   locale?: string | undefined
 }
@@ -44,7 +46,7 @@ export async function storePack(tx: Db, actor: MemberActor, input: StorePackInpu
   const revision = await revisionFor(tx, actor, target, input.revisionId)
   const frozen = upgradeRevisionDocument(revision.document)
   const locale = input.locale ?? frozen.party.locale
-  const sent = await findLastSentRevision(tx, actor, of)
+  const sent = await findLastSentRevision(tx, actor, { of, rigId: target.rigId, contactId: input.contactId })
   const document = composePack({
     revision: { number: revision.number, issuedAt: revision.issuedAt.toISOString(), note: revision.note, document: frozen },
     recipient: { ...target.recipient, locale },
