@@ -43,3 +43,6 @@ export const roleWords: Record<Role, string> = {
   'tour-manager': 'tour manager',
   viewer: 'production viewer',
 }
+
+/** Taking away a row needs the version that was seen, as changing it does. */
+export const removeSchema = z.object({ version: versionSchema })
