@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto'
 import { existsSync, readFileSync, readdirSync, writeFileSync } from 'node:fs'
-import { join } from 'node:path'
+import { dirname, join, relative } from 'node:path'
 
 const FOLDERS = ['app', 'components', 'db', 'lib', 'plots', 'public', 'fonts']
 const ROOT_FILES = /^(next\.config|postcss\.config|tsconfig|package|package-lock|auth|proxy|instrumentation|mdx-components)[.\w-]*$/
@@ -32,14 +32,32 @@ export function sourcesHash(projectRoot, env = process.env) {
   return hash.digest('hex')
 }
 
+/** What tells Next where a place's build goes. */
+export function buildSettings(place) {
+  return { NEXT_DIST_DIR: place.distDir, ...(place.tsconfig && { NEXT_TSCONFIG: relative(place.root, place.tsconfig) }) }
+}
+
+function writeTsconfig({ root, tsconfig, distDir }) {
+  const up = (path) => join(relative(dirname(tsconfig), root), path)
+  writeFileSync(
+    tsconfig,
+    JSON.stringify({
+      extends: up('tsconfig.json'),
+      include: ['next-env.d.ts', '**/*.ts', '**/*.tsx', `${distDir}/types/**/*.ts`].map(up),
+      exclude: ['node_modules', '.local', '.next'].map(up),
+    }),
+  )
+}
+
 /** Builds the app unless the last build was of these very sources. */
 export async function buildApp({ place, processes, env, say }) {
   const hash = sourcesHash(place.root, { ...processes.env, ...env })
   // Kept inside the build, so that whoever deletes the one deletes the other.
   const note = join(place.root, place.distDir, 'hoopwright-sources')
   if (existsSync(note) && readFileSync(note, 'utf8') === hash) return say('sources unchanged')
+  if (place.tsconfig) writeTsconfig(place)
   await processes.run('build', process.execPath, [join('node_modules', 'next', 'dist', 'bin', 'next'), 'build'], {
-    env: { ...env, NODE_ENV: 'production', NEXT_DIST_DIR: place.distDir },
+    env: { ...env, ...buildSettings(place), NODE_ENV: 'production' },
     failure: 'The app could not be built.',
     todo: 'Mend what the lines above name and run this again.',
   })

@@ -2,7 +2,8 @@ import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterEach, beforeEach, expect, it } from 'vitest'
-import { builtFiles, sourcesHash } from './build.mjs'
+import { buildSettings, builtFiles, sourcesHash } from './build.mjs'
+import { placeOf } from './place.mjs'
 
 let folder
 
@@ -37,4 +38,9 @@ it('stays the same when only a test or an unrelated setting changes', () => {
   const before = sourcesHash(folder, {})
   writeFileSync(join(folder, 'app', 'page.test.tsx'), 'changed')
   expect(sourcesHash(folder, { PORT: '3001' })).toBe(before)
+})
+
+it('gives a test build a folder and a tsconfig of its own, and leaves the project’s alone', () => {
+  expect(buildSettings(placeOf('start', folder))).toEqual({ NEXT_DIST_DIR: '.next' })
+  expect(buildSettings(placeOf('test', folder))).toEqual({ NEXT_DIST_DIR: '.next-test', NEXT_TSCONFIG: '.local/test/tsconfig.json' })
 })

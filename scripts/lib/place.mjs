@@ -24,6 +24,8 @@ export function placeOf(kind, projectRoot = root) {
     processesFile: join(shared, `${kind}.processes.json`),
     lockFile: join(shared, `${kind}.lock`),
     distDir: kind === 'start' ? '.next' : '.next-test',
+    /** Null: the project's own. Next writes its build folder into the one it uses, so a test build has one of its own. */
+    tsconfig: kind === 'start' ? null : join(local, 'tsconfig.json'),
   }
   mkdirSync(place.logs, { recursive: true })
   return place

@@ -2,6 +2,7 @@ import { join } from 'node:path'
 import { setTimeout as delay } from 'node:timers/promises'
 import { Failure } from './failure.mjs'
 import { mailWebhookUrl } from './app-env.mjs'
+import { buildSettings } from './build.mjs'
 import { typescriptCommand } from './typescript.mjs'
 
 const HEALTHY_WITHIN_MS = 120_000
@@ -49,7 +50,7 @@ export async function startMailbox({ processes, place, secrets, port, appUrl }) 
 export async function startApp({ processes, place, env, port, dev = false }) {
   const next = join('node_modules', 'next', 'dist', 'bin', 'next')
   const service = processes.start('app', process.execPath, [next, dev ? 'dev' : 'start', '-H', '127.0.0.1', '-p', String(port)], {
-    env: { ...env, NODE_ENV: dev ? 'development' : 'production', NEXT_DIST_DIR: place.distDir },
+    env: { ...env, ...buildSettings(place), NODE_ENV: dev ? 'development' : 'production' },
     show: dev,
   })
   await untilHealthy(`http://127.0.0.1:${port}/api/health`, service)
