@@ -48,7 +48,7 @@ export const pdfFaces: readonly PdfFace[] = [
     weight: 700,
     style: 'normal',
   },
-  { family: 'Accidentals', file: 'noto-music-accidentals.woff', weight: 400, style: 'normal' },
+  { family: 'Accidentals', file: 'accidentals.woff', weight: 400, style: 'normal' },
   { family: 'Signs', file: 'noto-sans-math-signs.woff', weight: 400, style: 'normal' },
   { family: 'Latin rest', file: 'noto-sans-latin-rest.woff', weight: 400, style: 'normal' },
   { family: 'Latin-1 rest', file: 'noto-sans-latin-1-rest.woff', weight: 400, style: 'normal' },

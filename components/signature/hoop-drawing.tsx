@@ -36,6 +36,14 @@ function fitted(text: string, usualPx: number, widthEm: number, roomPx: number):
   return Math.min(usualPx, roomPx / Math.max(1, text.length * widthEm))
 }
 
+/** A name parted at the space nearest its middle; a name of one word stays whole. */
+function inTwo(name: string): string[] {
+  const spaces = [...name].flatMap((letter, index) => (letter === ' ' ? [index] : []))
+  const middle = (name.length - 1) / 2
+  const [at] = spaces.sort((a, b) => Math.abs(a - middle) - Math.abs(b - middle))
+  return at === undefined ? [name] : [name.slice(0, at), name.slice(at + 1)]
+}
+
 /**
  * A drum to scale about its own centre, one unit a millimetre: the plot's own drawing of it (a double line, one tick for
  * each real lug) with its name and note inside. Stands inside any SVG; `Hoop` is the same as a picture of its own.
@@ -45,7 +53,9 @@ export function HoopDrawing(props: HoopDrawingProps) {
   const lying = liesDown(props)
   const shapes = lying ? kick(diameterIn * inchM, depthIn * inchM, lugs) : hoop(diameterIn * inchM, lugs)
   const roomPx = diameterIn * pxPerInch * (lying ? 0.86 : 0.76)
-  const namePx = fitted(name, Math.max(11, Math.min(17, diameterIn * pxPerInch * 0.17)), nameWidthEm, roomPx)
+  const usualPx = Math.max(11, Math.min(17, diameterIn * pxPerInch * 0.17))
+  const lines = fitted(name, usualPx, nameWidthEm, roomPx) < 10 ? inTwo(name) : [name]
+  const namePx = Math.min(...lines.map((line) => fitted(line, usualPx, nameWidthEm, roomPx)))
   const notePx = note ? fitted(note, Math.max(10, namePx * 0.82), noteWidthEm, roomPx) : 0
   const px = inchMm / pxPerInch
 
@@ -55,13 +65,16 @@ export function HoopDrawing(props: HoopDrawingProps) {
         <ShapeDrawing key={index} item={{ ...shape, pieceId: null }} />
       ))}
       <g textAnchor="middle">
-        <text
-          className="text-name fill-ink"
-          fontSize={round(namePx * px)}
-          y={round((note ? -0.1 : 0.34) * namePx * px)}
-        >
-          {name}
-        </text>
+        {lines.map((line, index) => (
+          <text
+            key={line}
+            className="text-name fill-ink"
+            fontSize={round(namePx * px)}
+            y={round((index - (lines.length - 1) + (note ? -0.1 : lines.length > 1 ? 0.9 : 0.34)) * namePx * px)}
+          >
+            {line}
+          </text>
+        ))}
         {note && (
           <text className="text-note fill-soft" fontSize={round(notePx * px)} y={round(1.15 * namePx * px)}>
             {note}

@@ -1,4 +1,5 @@
 import { Fragment } from 'react'
+import { classes } from '@/components/ui/classes'
 import { RangeBar, scalePercent } from './range-bar'
 import type { RangeBarProps, RangeScale } from './range-bar'
 
@@ -9,11 +10,18 @@ export interface RangeChartRow extends Omit<RangeBarProps, 'scale' | 'className'
   interval: string | null
 }
 
+export interface RangeMark {
+  at: number
+  name: string
+  /** Left out where there is little room. */
+  minor?: boolean
+}
+
 export interface RangeChartProps {
   scale: RangeScale
   rows: readonly RangeChartRow[]
   /** Named places on the scale, drawn as hairlines behind the bars. */
-  marks: readonly { at: number; name: string }[]
+  marks: readonly RangeMark[]
 }
 
 const rowHeightPx = 56
@@ -34,14 +42,17 @@ export function RangeChart({ scale, rows, marks }: RangeChartProps) {
         {marks.map((mark) => (
           <Fragment key={mark.name}>
             <span
-              className="figures absolute top-0 -translate-x-1/2 text-[0.75rem] text-soft"
+              className={classes(
+                'figures absolute top-0 -translate-x-1/2 text-[0.75rem] text-soft',
+                mark.minor && 'max-sm:hidden',
+              )}
               style={{ left: `${scalePercent(scale, mark.at)}%` }}
             >
               {mark.name}
             </span>
             <span
               aria-hidden
-              className="absolute top-6 bottom-0 w-px bg-line"
+              className={classes('absolute top-6 bottom-0 w-px bg-line', mark.minor && 'max-sm:hidden')}
               style={{ left: `${scalePercent(scale, mark.at)}%` }}
             />
           </Fragment>

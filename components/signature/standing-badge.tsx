@@ -1,9 +1,6 @@
 import type { ReactNode } from 'react'
 import { classes } from '@/components/ui/classes'
-
-/** Where a recipient stands with one sending. */
-export type Standing =
-  'not sent' | 'out' | 'not delivered' | 'overdue' | 'part answered' | 'answered' | 'settled' | 'changed since'
+import type { Standing } from '@/lib/advance/standing'
 
 /** Colour and shape; the shapes differ each from each, so that print and every eye can tell them apart. */
 const looks: Record<Standing, { text: string; shape: ReactNode }> = {

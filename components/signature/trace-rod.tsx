@@ -16,32 +16,30 @@ function lugWord(lug: TraceLug): string | null {
 }
 
 /**
- * One claw with its rod and number. Filled: within tolerance. Hollow: not read yet. A wedge pointing out (high) or in
- * (low), with the word: out of tolerance. A key on the rod: turn it now, the way its arrow goes.
+ * One claw with its rod and number. Filled: read. Hollow: not read yet. A wedge pointing out (high) or in (low),
+ * with the word: out of tolerance. A key on the rod: turn it now, the way its arrow goes.
  */
 export function TraceRod({ lug, hoopRadius, move }: TraceRodProps) {
   const word = lugWord(lug)
   const turnDeg = round((lug.angleRad * 180) / Math.PI)
-  const label = clockPoint(lug.angleRad, move ? 111 : 95)
-  const sideways = Math.abs(Math.sin(lug.angleRad)) > 0.35
+  const label = clockPoint(lug.angleRad, move ? 116 : word ? 106 : 94)
   return (
     <g data-lug={lug.number} data-out={lug.out || undefined}>
       <g transform={`rotate(${turnDeg})`} className={word || move ? 'text-spike' : 'text-ink'}>
         <rect x={-2} y={-hoopRadius - 12} width={4} height={7} fill="currentColor" />
-        {word ? (
+        <rect
+          x={-5}
+          y={-hoopRadius - 5}
+          width={10}
+          height={9}
+          strokeWidth={1.6}
+          stroke="currentColor"
+          className={lug.offset === null ? 'fill-paper' : 'fill-current'}
+        />
+        {word && !move && (
           <path
-            d={word === 'high' ? `M0 ${-hoopRadius - 9}l6 11h-12Z` : `M0 ${-hoopRadius + 6}l6 -12h-12Z`}
+            d={`M0 ${-hoopRadius - (word === 'high' ? 24 : 15)}l6 ${word === 'high' ? 8 : -8}h-12Z`}
             fill="currentColor"
-          />
-        ) : (
-          <rect
-            x={-5}
-            y={-hoopRadius - 5}
-            width={10}
-            height={9}
-            strokeWidth={1.6}
-            stroke="currentColor"
-            className={lug.offset === null ? 'fill-paper' : 'fill-current'}
           />
         )}
         {move && <Key turn={move} y={-hoopRadius - 12} />}
@@ -58,7 +56,7 @@ export function TraceRod({ lug, hoopRadius, move }: TraceRodProps) {
       {word && (
         <text
           x={label.x}
-          y={round(label.y + (sideways || label.y > 0 ? 12 : -7))}
+          y={round(label.y + (label.y < -20 ? -7 : 13))}
           textAnchor="middle"
           fontSize={8.5}
           className="fill-spike-text font-bold"

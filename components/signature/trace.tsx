@@ -44,82 +44,88 @@ export function Trace(props: TraceProps) {
   const steps =
     outline === null && order ? order.flatMap((number) => lugs.find((lug) => lug.number === number) ?? []) : []
   return (
-    <figure data-theme={mode} className={classes('relative mx-auto w-full max-w-md', className)}>
-      <svg role="img" aria-label={label} viewBox="-120 -120 240 240" className="block w-full">
-        <g fill="none" stroke="currentColor" className="text-ink">
-          <circle r={hoopRadius} strokeWidth={1.6} />
-          <circle r={hoopRadius - 4} strokeWidth={1.6} />
-          <circle r={headRadius - 2} strokeWidth={0.5} className="fill-sheet stroke-line" />
-        </g>
-        <circle
-          r={round((inner + outer) / 2)}
-          strokeWidth={round(Math.max(1, outer - inner))}
-          fill="none"
-          className="stroke-reed opacity-30"
-          data-part="band"
-        />
-        <circle r={targetRadius} strokeWidth={0.7} strokeDasharray="2 2" fill="none" className="stroke-soft" />
-        {steps.length > 1 && (
-          <polyline
-            data-part="order"
-            points={steps
-              .map((lug) => clockPoint(lug.angleRad, headRadius - 5))
-              .map((point) => `${point.x},${point.y}`)
-              .join(' ')}
-            fill="none"
-            strokeWidth={0.7}
-            className="stroke-soft"
-          />
-        )}
-        {steps.map((lug, index) => {
-          const at = clockPoint(lug.angleRad, headRadius - 9)
-          return (
-            <g key={lug.number}>
-              <circle cx={at.x} cy={at.y} r={7} className="fill-sheet" />
-              <text
-                x={at.x}
-                y={round(at.y + 2.6)}
-                textAnchor="middle"
-                fontSize={7.5}
-                className="figures fill-ink"
-              >{`${index + 1}${ordinal(index + 1)}`}</text>
-            </g>
-          )
-        })}
-        {outline && (
-          <g className="stroke-spike" fill="none" strokeWidth={2.4} strokeLinejoin="round" strokeLinecap="round">
-            {outline.segments.map((segment, index) =>
-              outline.closed ? (
-                <polygon key={index} data-part="curve" points={points(segment)} />
-              ) : (
-                <polyline key={index} data-part="curve" points={points(segment)} />
-              ),
-            )}
-            {outline.lugs.map((lug, index) => (
-              <circle
-                key={index}
-                data-part="reading"
-                cx={round(lug.x * targetRadius)}
-                cy={round(lug.y * targetRadius)}
-                r={2}
-                className="fill-spike"
-              />
-            ))}
+    <div data-theme={mode} className={classes('mx-auto w-full max-w-md', className)}>
+      <div className="relative aspect-square">
+        <svg role="img" aria-label={label} viewBox="-134 -134 268 268" className="block w-full">
+          <g fill="none" stroke="currentColor" className="text-ink">
+            <circle r={hoopRadius} strokeWidth={1.6} />
+            <circle r={hoopRadius - 4} strokeWidth={1.6} />
+            <circle r={headRadius - 2} strokeWidth={0.5} className="fill-sheet stroke-line" />
           </g>
-        )}
-        {lugs.map((lug) => (
-          <TraceRod
-            key={lug.number}
-            lug={lug}
-            hoopRadius={hoopRadius}
-            move={highlightLugs.find((move) => move.number === lug.number)?.turn ?? null}
+          <circle
+            r={round((inner + outer) / 2)}
+            strokeWidth={round(Math.max(1, outer - inner))}
+            fill="none"
+            className="stroke-reed opacity-30"
+            data-part="band"
           />
-        ))}
-      </svg>
-      <figcaption className="pointer-events-none absolute inset-0 m-auto flex size-[32%] flex-col items-center justify-center text-center leading-tight">
-        {centre}
-      </figcaption>
-    </figure>
+          <circle r={targetRadius} strokeWidth={0.7} strokeDasharray="2 2" fill="none" className="stroke-soft" />
+          {steps.length > 1 && (
+            <polyline
+              data-part="order"
+              points={steps
+                .map((lug) => clockPoint(lug.angleRad, headRadius - 5))
+                .map((point) => `${point.x},${point.y}`)
+                .join(' ')}
+              fill="none"
+              strokeWidth={0.7}
+              className="stroke-soft"
+            />
+          )}
+          {steps.length > 1 && <circle r={headRadius / 2} className="fill-sheet" />}
+          {steps.map((lug, index) => {
+            const at = clockPoint(lug.angleRad, headRadius - 9)
+            return (
+              <g key={lug.number}>
+                <circle cx={at.x} cy={at.y} r={7} className="fill-sheet" />
+                <text
+                  x={at.x}
+                  y={round(at.y + 2.6)}
+                  textAnchor="middle"
+                  fontSize={7.5}
+                  className="figures fill-ink"
+                >{`${index + 1}${ordinal(index + 1)}`}</text>
+              </g>
+            )
+          })}
+          {outline && (
+            <g className="stroke-spike" fill="none" strokeWidth={2.4} strokeLinejoin="round" strokeLinecap="round">
+              {outline.segments.map((segment, index) =>
+                outline.closed ? (
+                  <polygon key={index} data-part="curve" points={points(segment)} />
+                ) : (
+                  <polyline key={index} data-part="curve" points={points(segment)} />
+                ),
+              )}
+              {outline.lugs.map((lug, index) => (
+                <circle
+                  key={index}
+                  data-part="reading"
+                  cx={round(lug.x * targetRadius)}
+                  cy={round(lug.y * targetRadius)}
+                  r={2}
+                  className="fill-spike"
+                />
+              ))}
+            </g>
+          )}
+          {lugs.map((lug) => (
+            <TraceRod
+              key={lug.number}
+              lug={lug}
+              hoopRadius={hoopRadius}
+              move={highlightLugs.find((move) => move.number === lug.number)?.turn ?? null}
+            />
+          ))}
+        </svg>
+        <div
+          data-part="centre"
+          className="pointer-events-none absolute inset-0 m-auto flex size-[32%] flex-col items-center justify-center text-center leading-tight"
+        >
+          {centre}
+        </div>
+      </div>
+    </div>
   )
 }
 

@@ -4,7 +4,7 @@ import { classes } from './classes'
 export function controlClasses(className?: string): string {
   return classes(
     'min-h-control w-full border border-ink bg-sheet px-2.5 py-1 text-base text-ink sm:text-[0.9375rem]',
-    'aria-invalid:border-2 aria-invalid:border-spike disabled:border-line disabled:bg-wash disabled:text-soft read-only:bg-wash',
+    'aria-invalid:border-2 aria-invalid:border-spike disabled:border-line disabled:bg-wash disabled:text-soft [&[readonly]]:bg-wash',
     className,
   )
 }
