@@ -43,12 +43,18 @@ export const headSchema = z.object({
     .max(3, 'at most three plies'),
   film: z.enum(['clear', 'coated', 'other'], 'choose a film'),
   /** Mass the coating adds, g/m². */
-  coatingGPerM2: z.number().min(0).max(300, 'at most 300 g/m²'),
+  coatingGPerM2: z.number('write a mass in g/m²').min(0, 'at least 0 g/m²').max(300, 'at most 300 g/m²'),
   damping: z.enum(['none', 'ring', 'dot', 'gel', 'felt'], 'choose a damping'),
   /** The drum tech's own noted gauge reading, relative to that gauge. */
   gauge: z.number().min(0, 'at least 0').max(120, 'at most 120').nullable(),
 })
 export type Head = z.infer<typeof headSchema>
+
+/** C0 to C7: wider than any drum, narrow enough to catch a slip. */
+const drumNoteSchema = z.object({
+  semitone: z.number().int('a whole semitone').min(12, 'at least C0, 16.4 Hz').max(96, 'at most C7, 2093 Hz'),
+  cents: z.number().min(-50, 'at least -50 cents').max(50, 'at most 50 cents'),
+})
 
 export const drumSpecSchema = z.object({
   role: z.enum(drumRoles, 'choose what the drum is'),
@@ -60,7 +66,7 @@ export const drumSpecSchema = z.object({
   batter: headSchema,
   resonant: headSchema.nullable(),
   /** Target note: semitone on the A4 = 69 count, with cents beside it. Null until a note is set. */
-  note: z.object({ semitone: z.number().int().min(12).max(96), cents: z.number().min(-50).max(50) }).nullable(),
+  note: drumNoteSchema.nullable(),
   /** A locked note is left alone when a template plans the others. */
   noteLocked: z.boolean(),
   /** How far the resonant head's pitch stands above the batter's, cents. */
@@ -131,7 +137,37 @@ export type EntryInput = z.infer<typeof entryInputSchema>
 
 export const createEntrySchema = z.object({ id: idSchema.optional(), entry: entryInputSchema })
 export const updateEntrySchema = z.object({ version: versionSchema, entry: entryInputSchema })
+/** Taking an entry out of the kit, and putting it back. */
 export const removeEntrySchema = z.object({ version: versionSchema })
+
+/** What a kit holds at most: beyond it something has gone wrong. */
+export const kitLimit = 200
+
+/** Several new entries in one step, all or none. */
+export const addEntriesSchema = z.object({
+  entries: z
+    .array(z.object({ id: idSchema, entry: entryInputSchema }))
+    .min(1, 'at least one entry')
+    .max(60, 'at most 60 entries at once')
+    .refine((entries) => new Set(entries.map(({ id }) => id)).size === entries.length, 'each id once'),
+})
+
+/** Every entry of the kit, each once, in the order wanted. */
+export const orderEntriesSchema = z.object({
+  entryIds: z
+    .array(idSchema)
+    .min(1, 'at least one entry')
+    .max(kitLimit, `at most ${kitLimit} entries`)
+    .refine((ids) => new Set(ids).size === ids.length, 'each entry once'),
+})
+
+/** Copies another rig's kit into this one. The same copyId again is the same request. */
+export const copyKitSchema = z.object({ copyId: idSchema, fromRigId: z.uuid('choose a rig to copy from') })
+
+export const kitQuerySchema = z.object({
+  /** `true` reads entries that were taken out, too. */
+  removed: z.enum(['true', 'false'], 'true or false').default('false'),
+})
 
 const row = { id: idSchema, rigId: idSchema, position: z.number().int(), version: versionSchema, removed: z.boolean() }
 /** A kit entry as the routes answer it. */
@@ -149,10 +185,12 @@ export const setNotesSchema = z.object({
       z.object({
         entryId: idSchema,
         version: versionSchema,
-        note: z.object({ semitone: z.number().int().min(12).max(96), cents: z.number().min(-50).max(50) }).nullable(),
+        note: drumNoteSchema.nullable(),
         noteLocked: z.boolean(),
       }),
     )
-    .min(1)
-    .max(60),
+    .min(1, 'at least one note')
+    .max(60, 'at most 60 notes at once')
+    .refine((notes) => new Set(notes.map(({ entryId }) => entryId)).size === notes.length, 'each drum once'),
 })
+export type SetNotes = z.infer<typeof setNotesSchema>
