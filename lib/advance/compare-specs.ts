@@ -3,7 +3,7 @@ import { piecesInOrder } from '@/plots/model/document'
 import { canonicalJson } from './canonical-json'
 import type { FrozenDrum, FrozenEntry } from './frozen-kit'
 import { entriesInOrder } from './frozen-kit'
-import { headWords } from './kit-words'
+import { cymbalSizeWords, cymbalTypeWord, drumSizeWords, headWords, typeWords } from './kit-words'
 import type { Units } from './kit-words'
 import type { LineContent } from './line-content'
 import { insteadOfWords, linesOfKit, lineWords } from './line-content'
@@ -66,15 +66,19 @@ export function changeSentences(changes: SpecChanges): string[] {
   ]
 }
 
-function lineDifferences(before: LineContent, after: LineContent, units: Units): string[] {
+/** What differs between two states of one line, each difference in words. */
+export function lineDifferences(before: LineContent, after: LineContent, units: Units): string[] {
   if (before.kind !== after.kind) return [`${lineWords(before, units)} → ${lineWords(after, units)}`]
   const differences: string[] = []
   const say = (label: string, was: string, is: string) => {
-    if (was !== is) differences.push(`${label === '' ? '' : `${label} `}${was} → ${is}`)
+    if (was !== is) differences.push(`${label} ${was} → ${is}`)
   }
-  say('', lineWords(before, units), lineWords(after, units))
+  say('called', before.name, after.name)
+  say('count', String(before.count), String(after.count))
   say('brought by', supplyWords(before.supply), supplyWords(after.supply))
   if (before.kind === 'drum' && after.kind === 'drum') {
+    say('size', drumSizeWords(before.spec, units), drumSizeWords(after.spec, units))
+    say('lugs', String(before.spec.lugs), String(after.spec.lugs))
     say('drum', before.spec.role.replace('-', ' '), after.spec.role.replace('-', ' '))
     say('shell', before.spec.shell || 'any', after.spec.shell || 'any')
     say('port', before.spec.ported ? 'yes' : 'no', after.spec.ported ? 'yes' : 'no')
@@ -82,7 +86,16 @@ function lineDifferences(before: LineContent, after: LineContent, units: Units):
     say('resonant head', headInFull(before.spec.resonant), headInFull(after.spec.resonant))
     say('instead', insteadOfWords(before) ?? 'only by asking', insteadOfWords(after) ?? 'only by asking')
   }
+  if (before.kind === 'cymbal' && after.kind === 'cymbal') {
+    say('cymbal', cymbalTypeWord(before.spec.type), cymbalTypeWord(after.spec.type))
+    say('size', cymbalSizeWords(before.spec.diameterIn, units), cymbalSizeWords(after.spec.diameterIn, units))
+  }
+  if (before.kind === 'hardware' && after.kind === 'hardware') {
+    say('kind', typeWords(before.spec.type), typeWords(after.spec.type))
+  }
   if (before.kind === 'microphone' && after.kind === 'microphone') {
+    say('kind', typeWords(before.spec.type), typeWords(after.spec.type))
+    say('stand', typeWords(before.spec.stand), typeWords(after.spec.stand))
     say('phantom', before.spec.phantom ? 'yes' : 'no', after.spec.phantom ? 'yes' : 'no')
   }
   say('remark', before.remark || 'none', after.remark || 'none')

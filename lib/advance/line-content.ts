@@ -89,7 +89,12 @@ function askedHead({ plyMils, film, coatingGPerM2, damping }: FrozenHead): Asked
 /** A line as it is read out: "Rack tom, 12 in across, 8 deep, 6 lugs"; two or more of a thing as "2 × …". */
 export function lineWords(content: LineContent, units: Units): string {
   const many = content.count > 1 ? `${content.count} × ` : ''
-  return `${many}${[content.name, ...essentials(content, units)].join(', ')}`
+  return `${many}${[content.name, ...unsaid(content, essentials(content, units))].join(', ')}`
+}
+
+/** Leaves out what the name says already: a "Throne" need not be called a throne again. */
+function unsaid({ name }: LineContent, phrases: readonly string[]): string[] {
+  return phrases.filter((phrase) => !name.toLowerCase().includes(phrase))
 }
 
 function essentials(content: LineContent, units: Units): string[] {
