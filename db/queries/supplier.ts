@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, ilike, isNull, or, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, ilike, inArray, isNull, notExists, or, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { physicalDrum } from '@/db/schema/bench'
 import { contact, supplier } from '@/db/schema/directory'
@@ -130,4 +130,27 @@ export async function supplierIsNamed(db: Db, scope: Scope, supplierId: string):
     .where(and(eq(physicalDrum.partyId, scope.partyId), eq(physicalDrum.supplierId, supplierId)))
     .limit(1)
   return drums.length > 0
+}
+
+/** The suppliers of these that have nobody to write to. */
+export async function listSuppliersWithoutContact(db: Db, scope: Scope, supplierIds: readonly string[]): Promise<string[]> {
+  if (supplierIds.length === 0) return []
+  const rows = await db
+    .select({ id: supplier.id })
+    .from(supplier)
+    .where(
+      and(
+        eq(supplier.partyId, scope.partyId),
+        inArray(supplier.id, [...supplierIds]),
+        notExists(
+          db
+            .select({ id: contact.id })
+            .from(contact)
+            .where(and(eq(contact.partyId, scope.partyId), eq(contact.supplierId, supplier.id))),
+        ),
+      ),
+    )
+    .orderBy(asc(supplier.id))
+    .limit(1000)
+  return rows.map((row) => row.id)
 }

@@ -20,12 +20,19 @@ export const dateSchema = z.iso.date('write a date as YYYY-MM-DD')
 /** A wall-clock time without a zone, HH:MM. */
 export const wallTimeSchema = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'write a time as HH:MM')
 
-const zones = new Set([...Intl.supportedValuesOf('timeZone'), 'UTC'])
+/** Whether the runtime knows a zone by this name; old and new names of a place both count (Asia/Calcutta, Asia/Kolkata). */
+function isZone(name: string): boolean {
+  if (name !== 'UTC' && !/^[A-Z][A-Za-z_]+\/[A-Za-z_+\-/0-9]+$/.test(name)) return false
+  try {
+    new Intl.DateTimeFormat('en', { timeZone: name })
+    return true
+  } catch {
+    return false
+  }
+}
 
 /** An IANA time zone name. */
-export const zoneSchema = z
-  .string()
-  .refine((zone) => zones.has(zone), 'choose a time zone from the list, such as Europe/Oslo')
+export const zoneSchema = z.string().refine(isZone, 'choose a time zone from the list, such as Europe/Oslo')
 
 /** An ISO 4217 currency code. */
 export const currencySchema = z.string().regex(/^[A-Z]{3}$/, 'write a currency such as EUR')
