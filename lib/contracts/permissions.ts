@@ -12,6 +12,7 @@ const table = {
   'plot:edit': ['drum-tech'],
   'patch:edit': ['drum-tech'],
   'revision:issue': ['drum-tech'],
+  'pack:preview': ['drum-tech', 'tour-manager'],
   'tour:edit': ['tour-manager'],
   'rig:edit': ['drum-tech', 'tour-manager'],
   'show:edit': ['tour-manager'],
