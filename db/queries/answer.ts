@@ -1,8 +1,8 @@
-import { and, asc, eq, inArray, or, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, or, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { answerEvent, settlement } from '@/db/schema/advance'
 import { person } from '@/db/schema/person'
-import { revisionLine } from '@/db/schema/revision'
+import { revision, revisionLine } from '@/db/schema/revision'
 
 /** The shows and hires whose advance is read. */
 export type Subjects = { readonly showIds: readonly string[]; readonly hireIds: readonly string[] }
@@ -129,4 +129,16 @@ export async function listLineContents(db: Db, scope: Scope, wanted: { lineIds: 
     )
     .orderBy(asc(revisionLine.lineId), asc(revisionLine.hash))
     .limit(2000)
+}
+
+/** A line as some revision asked for it in these very words: the newest such revision, and the words. */
+export async function findAskedLine(db: Db, scope: Scope, input: { lineId: string; hash: string }) {
+  const rows = await db
+    .select({ revisionId: revisionLine.revisionId, content: revisionLine.content })
+    .from(revisionLine)
+    .innerJoin(revision, and(eq(revision.partyId, revisionLine.partyId), eq(revision.id, revisionLine.revisionId)))
+    .where(and(eq(revisionLine.partyId, scope.partyId), eq(revisionLine.lineId, input.lineId), eq(revisionLine.hash, input.hash)))
+    .orderBy(desc(revision.number))
+    .limit(1)
+  return rows[0]
 }

@@ -124,6 +124,7 @@ export async function findRecipient(db: Db, scope: Scope, contactId: string) {
       name: contact.name,
       email: contact.email,
       duties: contact.duties,
+      locale: contact.locale,
     })
     .from(contact)
     .where(and(eq(contact.partyId, scope.partyId), eq(contact.id, contactId)))

@@ -103,6 +103,7 @@ export async function findGrant(db: Db, scope: Scope, grantId: string) {
       purpose: grant.purpose,
       showId: grant.showId,
       hireId: grant.hireId,
+      contactId: grant.contactId,
       recipientName: grant.recipientName,
       recipientEmail: grant.recipientEmail,
       expiresAt: grant.expiresAt,

@@ -111,3 +111,22 @@ export async function insertMailEvent(db: Db, row: typeof mailEvent.$inferInsert
     .returning({ id: mailEvent.id })
   return rows.length === 1
 }
+
+export async function findMailState(db: Db, scope: Scope, mailId: string) {
+  const rows = await db
+    .select({ sentAt: mail.sentAt, cancelledAt: mail.cancelledAt, failedAt: mail.failedAt })
+    .from(mail)
+    .where(and(eq(mail.partyId, scope.partyId), eq(mail.id, mailId)))
+    .limit(1)
+  return rows[0]
+}
+
+/** A mail by our own id, as the tag that went out with it says. Mail stands above parties because sign-in mail belongs to none. */
+export async function findMail(db: Db, mailId: string) {
+  const rows = await db
+    .select({ id: mail.id, partyId: mail.partyId })
+    .from(mail)
+    .where(eq(mail.id, mailId))
+    .limit(1)
+  return rows[0]
+}

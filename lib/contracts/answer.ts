@@ -110,7 +110,8 @@ export const replySchema = z.object({
   shows: z.array(z.object({ title: z.string(), date: z.string() })),
   lines: z.array(replyLineSchema),
   closed: z.object({ byName: z.string(), at: z.string() }).nullable(),
-  pdf: z.object({ pages: z.number().int().nullable() }).nullable(),
+  /** The packs whose PDF is made; several where the shows play several rigs. */
+  pdfs: z.array(z.object({ packId: idSchema, name: z.string(), pages: z.number().int().nullable() })),
 })
 export type Reply = z.infer<typeof replySchema>
 

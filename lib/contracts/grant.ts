@@ -1,5 +1,4 @@
 import { z } from 'zod'
-import { idSchema } from './common'
 
 /** A link shown once: its secret is not stored, so it cannot be shown again. */
 export const printedLinkSchema = z.object({
@@ -9,9 +8,6 @@ export const printedLinkSchema = z.object({
   expiresAt: z.string(),
 })
 export type PrintedLink = z.infer<typeof printedLinkSchema>
-
-/** Prints another key to a link that was made before, or the first to a bench of a show. */
-export const printBenchSchema = z.object({ showId: idSchema })
 
 export const withdrawnSchema = z.object({ withdrawn: z.literal(true) })
 
