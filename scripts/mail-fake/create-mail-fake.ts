@@ -15,7 +15,8 @@ import { FATES } from './stored-mail'
 
 const MOST_FORM_BYTES = 1000
 const PAGE_POLICY = "default-src 'none'; style-src 'unsafe-inline'; script-src 'self'; connect-src 'self'; frame-src 'self'; form-action 'self'; base-uri 'none'; frame-ancestors 'none'"
-const MAIL_POLICY = "sandbox allow-popups allow-popups-to-escape-sandbox; default-src 'none'; style-src 'unsafe-inline'; img-src data: http: https:; font-src data: http: https:"
+/** Scripts are allowed by the sandbox for browser tests, which reach into a frame by them, and forbidden to the mail itself by default-src. */
+const MAIL_POLICY = "sandbox allow-scripts allow-popups allow-popups-to-escape-sandbox; default-src 'none'; style-src 'unsafe-inline'; img-src data: http: https:; font-src data: http: https:"
 /** Shown in the browser; anything else a mail brings is only to be saved. */
 const OPENED_TYPES = /^(application\/pdf|image\/(png|jpeg|gif|webp)|text\/plain)$/
 

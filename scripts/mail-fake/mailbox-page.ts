@@ -85,7 +85,7 @@ ${attachments.length > 0 ? `<h2>Attachments</h2><ul class="plain">${attachments.
 ${
   mail.html === null
     ? ''
-    : `<h2>The mail</h2><iframe title="The mail as its reader sees it" sandbox="allow-popups allow-popups-to-escape-sandbox" src="/mail/${mail.id}/html"></iframe>`
+    : `<h2>The mail</h2><iframe title="The mail as its reader sees it" sandbox="allow-scripts allow-popups allow-popups-to-escape-sandbox" src="/mail/${mail.id}/html"></iframe>`
 }
 ${mail.text === null ? '' : `<h2>As plain text</h2><pre>${escape(mail.text)}</pre>`}
 <h2>What became of it</h2>
