@@ -1,4 +1,4 @@
-/** The one door to the plots: pure geometry, model and drawing. */
+/** The one door to the plots: pure geometry, model and drawing, and the editor, which is fetched when it is shown. */
 export * from './geometry/angle'
 export * from './geometry/bounds'
 export * from './geometry/footprint'
@@ -28,3 +28,5 @@ export * from './render/kit-inset'
 export * from './render/scene-svg'
 export * from './render/stage-frame'
 export * from './render/text-size'
+export * from './editor/plot-desk'
+export * from './editor/shape-drawing'

@@ -3,8 +3,8 @@ import { missedCommandsSchema } from '@/lib/contracts/plot'
 import type { MissedCommand, PlotAnswer } from '@/lib/contracts/plot'
 import { AppError } from '@/lib/errors'
 import { apply } from '@/plots/model/apply'
-import type { PlotAction, PlotCommand } from '@/plots/model/command'
-import type { PlotDocument } from '@/plots/model/document'
+import { piecesOf, type PlotAction, type PlotCommand } from '@/plots/model/command'
+import type { Piece, PlotDocument } from '@/plots/model/document'
 import { emptyHistory, record, redo, undo, type HistoryStep, type PlotHistory } from '@/plots/model/history'
 import { PlotCommandError } from '@/plots/model/plot-command-error'
 import { rebase, type RebaseOutcome } from '@/plots/model/rebase'
@@ -15,10 +15,20 @@ import type { UnsentStore } from './unsent-store'
 const BATCH = 100
 const RETRY_MS = [1_000, 2_000, 5_000, 10_000, 30_000] as const
 
-/** Something of ours that did not come out as it was made, to be told. */
+/** Something of ours that did not come out as it was made, to be told. `pieces`: as they were, to name them by. */
 export type PlotNews =
-  | { readonly kind: 'outcome'; readonly outcome: RebaseOutcome; readonly by: readonly string[] }
-  | { readonly kind: 'refused'; readonly command: PlotCommand; readonly message: string }
+  | {
+      readonly kind: 'outcome'
+      readonly outcome: RebaseOutcome
+      readonly by: readonly string[]
+      readonly pieces: readonly Piece[]
+    }
+  | {
+      readonly kind: 'refused'
+      readonly command: PlotCommand
+      readonly message: string
+      readonly pieces: readonly Piece[]
+    }
   | { readonly kind: 'recovered'; readonly count: number }
   | { readonly kind: 'not kept' }
 
@@ -105,9 +115,12 @@ export function createPlotSession(input: {
     return queue
   }
 
-  function tell(outcomes: readonly RebaseOutcome[], by: readonly string[]) {
+  function tell(outcomes: readonly RebaseOutcome[], by: readonly string[], before: PlotDocument) {
     const told = outcomes.filter((outcome) => outcome.became !== 'kept' && outcome.became !== 'arrived')
-    news = [...news, ...told.map((outcome): PlotNews => ({ kind: 'outcome', outcome, by }))]
+    news = [
+      ...news,
+      ...told.map((outcome): PlotNews => ({ kind: 'outcome', outcome, by, pieces: named(outcome.command, before) })),
+    ]
   }
 
   function takeRemote(sequence: number, missed: readonly MissedCommand[]) {
@@ -118,10 +131,10 @@ export function createPlotSession(input: {
     )
     const ours = new Set(unsent.map((command) => command.clientId))
     const others = missed.filter((entry) => !ours.has(entry.command.clientId))
+    tell(next.outcomes, [...new Set(others.map((entry) => entry.by))], document)
     base = { sequence, document: missed.reduce((at, entry) => apply(at, entry.command), base.document) }
     unsent = next.commands
     document = next.document
-    tell(next.outcomes, [...new Set(others.map((entry) => entry.by))])
   }
 
   /** Too far behind to be told command by command: the whole document, and ours on top. */
@@ -132,10 +145,10 @@ export function createPlotSession(input: {
       [],
       unsent.filter((command) => !arrived.includes(command.clientId)),
     )
+    tell(next.outcomes, [], document)
     base = whole
     unsent = next.commands
     document = next.document
-    tell(next.outcomes, [])
   }
 
   async function bringIn() {
@@ -178,10 +191,10 @@ export function createPlotSession(input: {
     if (!command) return
     const rest = unsent.filter((other) => other.clientId !== command.clientId)
     const next = rebase(base.document, [], rest)
+    news = [...news, { kind: 'refused', command, message: message ?? error.message, pieces: named(command, document) }]
+    tell(next.outcomes, [], document)
     unsent = next.commands
     document = next.document
-    news = [...news, { kind: 'refused', command, message: message ?? error.message }]
-    tell(next.outcomes, [])
   }
 
   async function pump() {
@@ -224,9 +237,9 @@ export function createPlotSession(input: {
       if (waiting.length === 0) continue
       const next = rebase(document, [], waiting)
       unsent = [...unsent, ...next.commands]
-      document = next.document
       news = [...news, { kind: 'recovered', count: waiting.length }]
-      tell(next.outcomes, [])
+      tell(next.outcomes, [], document)
+      document = next.document
     }
     keep()
     clear()
@@ -291,6 +304,11 @@ export function createPlotSession(input: {
       cancelRetry()
     },
   }
+}
+
+function named(command: PlotCommand, { pieces }: PlotDocument): Piece[] {
+  if (command.type === 'place') return [...command.pieces]
+  return piecesOf(command).flatMap((pieceId) => pieces[pieceId] ?? [])
 }
 
 function laterByTimer(run: () => void, ms: number): () => void {
