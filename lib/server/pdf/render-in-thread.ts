@@ -22,10 +22,8 @@ export class PackTooLarge extends Error {
  */
 export async function renderInThread(input: PdfThreadInput): Promise<PdfThreadAnswer> {
   if (JSON.stringify(input.pack).length > maxInputBytes) throw new PackTooLarge()
-  // The thread runs TypeScript as the job process itself does.
-  const thread = new Worker(new URL('./pdf-thread.ts', import.meta.url), {
+  const thread = new Worker(new URL('./pdf-thread-start.mjs', import.meta.url), {
     workerData: input,
-    execArgv: ['--import', 'tsx'],
     resourceLimits: { maxOldGenerationSizeMb: memoryMb },
   })
   let timer: NodeJS.Timeout | undefined

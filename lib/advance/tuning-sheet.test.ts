@@ -1,0 +1,66 @@
+import { describe, expect, it } from 'vitest'
+import { sampleDrum } from './sample-revision'
+import { tuningSheet } from './tuning-sheet'
+
+const reader = { locale: 'en', units: 'imperial', referenceHz: 440 } as const
+const size = { role: 'tom', diameterIn: 12, depthIn: 8, lugs: 6 } as const
+const drum = (spec: Partial<Parameters<typeof sampleDrum>[1]>) => sampleDrum({ id: 'd', name: 'Tom 12', position: 0 }, { ...size, ...spec })
+const D3 = { semitone: 50, cents: 0 }
+
+describe('a tuning sheet', () => {
+  // Equal temperament from A4 = 440 Hz (ISO 16:1975): D3 is 146.83 Hz.
+  it('names the note in Hz, whatever the reference', () => {
+    expect(tuningSheet(drum({ note: D3 }), reader).heads[0]?.note?.hz).toBeCloseTo(146.83, 2)
+    expect(tuningSheet(drum({ note: D3 }), { ...reader, referenceHz: 442 }).heads[0]?.note?.hz).toBeCloseTo((146.832 * 442) / 440, 2)
+  })
+
+  it('stands the resonant head over the batter by the drum’s relation', () => {
+    const [batter, resonant] = tuningSheet(drum({ note: D3, headRelationCents: 1200 }), reader).heads
+    expect(resonant?.note?.hz).toBeCloseTo(2 * (batter?.note?.hz ?? 0), 6)
+    expect(resonant?.note?.name).toBe('D4')
+  })
+
+  it('names notes in the reader’s language', () => {
+    const name = (locale: string) => tuningSheet(drum({ note: { semitone: 59, cents: 0 } }), { ...reader, locale }).heads[0]?.note?.name
+    expect([name('en-GB'), name('de'), name('fr-CA'), name('pt')]).toEqual(['B3', 'H3', 'si3', 'B3'])
+  })
+
+  // A tap is sharper than the note: at least by the ideal membrane's 1.593 (ACOUSTICS: Abramowitz & Stegun, zeros of J1 and J0).
+  it('gives the tap inside its bounds, and the bounds over the membrane’s ratio', () => {
+    const head = tuningSheet(drum({ note: D3 }), reader).heads[0]
+    if (!head?.tap || !head.note) throw new Error('no tap')
+    expect(head.tap.lowHz / head.note.hz).toBeCloseTo(1.593, 3)
+    expect(head.tap.hz).toBeGreaterThan(head.tap.lowHz)
+    expect(head.tap.highHz).toBeGreaterThan(head.tap.hz)
+  })
+
+  it('crosses over from lug to lug and counts from the badge on each head', () => {
+    const [batter, resonant] = tuningSheet(drum({ note: D3 }), reader).heads
+    expect(batter?.order).toEqual([1, 4, 2, 5, 3, 6])
+    expect(batter?.lugs.map(({ lug, turn }) => [lug, turn])).toEqual([[1, 1], [2, 3], [3, 5], [4, 2], [5, 4], [6, 6]])
+    // Badge at the top: lug 1 is to the right of it on both heads, and above the middle.
+    for (const head of [batter, resonant]) {
+      expect(head?.lugs[0]?.x).toBeCloseTo(0.5, 6)
+      expect(head?.lugs[0]?.y).toBeCloseTo(-Math.sqrt(3) / 2, 6)
+    }
+  })
+
+  it('has no figure without a note, and says whom to ask', () => {
+    const [batter] = tuningSheet(drum({}), reader).heads
+    expect(batter).toMatchObject({ note: null, tap: null, rodPullN: null, gauge: 75 })
+    expect(batter?.without).toContain('ask the drum tech')
+  })
+
+  it('has no figure where the head cannot be estimated, and keeps the note', () => {
+    const [batter] = tuningSheet(drum({ note: { semitone: 96, cents: 0 }, diameterIn: 26 }), reader).heads
+    expect(batter).toMatchObject({ tap: null, rodPullN: null })
+    expect(batter?.note?.hz).toBeCloseTo(2093, 0)
+    expect(batter?.without).toContain('cannot be estimated')
+  })
+
+  it('has one head when there is no resonant one', () => {
+    const sheet = tuningSheet(drum({ note: D3, resonant: null }), reader)
+    expect(sheet.heads.map(({ side }) => side)).toEqual(['batter'])
+    expect(sheet.relationWords).toBeNull()
+  })
+})
