@@ -3,8 +3,10 @@ import { listMailAttachments, lockMail, markMailFailed, markMailSent, markMailTr
 import { env } from '@/lib/env'
 import { log } from '@/lib/server/log'
 import { fillLinkPlaces } from '@/lib/server/mail/link-place'
-import { mailService } from '@/lib/server/mail/mail-service'
+import { mailService, mailTag } from '@/lib/server/mail/mail-service'
 import { notifyMailChanged } from '@/lib/server/mail/notify-mail-changed'
+import type { SendError } from '@/lib/server/mail/send-refusal'
+import { readRefusal } from '@/lib/server/mail/send-refusal'
 import { blobStore } from '@/lib/server/storage/blob-store'
 
 /**
@@ -12,6 +14,8 @@ import { blobStore } from '@/lib/server/storage/blob-store'
  * doubt near that age could go out twice if tried again, so a person decides.
  */
 const keyMemoryMs = 23 * 60 * 60 * 1000
+/** The SDK itself waits for ever. */
+const answerWithinMs = 60_000
 
 type Claimed = NonNullable<Awaited<ReturnType<typeof claim>>>
 
@@ -27,18 +31,17 @@ export async function sendMail(payload: { mailId: string }): Promise<void> {
       text: fillLinkPlaces(mail.textBody),
       html: fillLinkPlaces(mail.htmlBody),
       attachments: mail.attachments,
+      tags: [{ name: mailTag, value: mail.id }],
     },
-    { idempotencyKey: mail.idempotencyKey },
+    { idempotencyKey: mail.idempotencyKey, signal: AbortSignal.timeout(answerWithinMs) },
   )
-  if (answer.data) {
-    const providerId = answer.data.id
-    await db().transaction(async (tx) => {
-      await markMailSent(tx, mail.id, providerId)
-      await notifyMailChanged(tx, mail)
-    })
-    return
-  }
-  await refused(mail, answer.error)
+  // An answer of 200 that names no mail proves nothing; the key makes trying again safe.
+  const providerId: unknown = answer.data?.id
+  if (typeof providerId !== 'string') return refused(mail, answer.error)
+  await db().transaction(async (tx) => {
+    await markMailSent(tx, mail.id, providerId)
+    await notifyMailChanged(tx, mail)
+  })
 }
 
 /** Takes the mail for one try and says so before the call goes out; undefined when it must not be sent (any more). */
@@ -52,6 +55,7 @@ async function claim(mailId: string) {
       return undefined
     }
     await markMailTried(tx, mailId)
+    await notifyMailChanged(tx, found)
     return found
   })
   if (!row) return undefined
@@ -66,15 +70,13 @@ async function claim(mailId: string) {
   return { ...row, attachments }
 }
 
-type Refusal = { name: string; message: string; statusCode?: number | null } | null
-
-async function refused(mail: Claimed, error: Refusal): Promise<void> {
+async function refused(mail: Claimed, error: SendError): Promise<void> {
+  const refusal = readRefusal(error)
   const status = error?.statusCode ?? null
-  const passing = status === null || status === 408 || status === 409 || status === 429 || status >= 500
   log.warn({ mailId: mail.id, status, kind: error?.name }, 'the mail service refused')
-  if (passing) throw new Error(`the mail service answered ${status ?? 'nothing'}; trying again later`)
+  if (refusal.passing) throw new Error(`the mail service answered ${status ?? 'nothing'}; trying again later`)
   await db().transaction(async (tx) => {
-    await markMailFailed(tx, mail.id, `The mail service refused it: ${error?.message ?? 'no reason given'}`)
+    await markMailFailed(tx, mail.id, refusal.words)
     await notifyMailChanged(tx, mail)
   })
 }
