@@ -5,7 +5,7 @@ import { Failure } from './failure.mjs'
 
 const ENV_FILES = ['.env.local', '.env']
 /** The mail service calls this route of the app about each mail's fate. */
-const MAIL_WEBHOOK_PATH = '/api/mail/webhook'
+const MAIL_WEBHOOK_PATH = '/api/webhooks/mail'
 const OWN_SERVICES = /^(DATABASE_URL|APP_URL|PORT|NEXTAUTH_|LINK_SECRET|RESEND_|MAIL_FROM|MAILBOX_URL|BLOB_DIR|S3_|HOOPWRIGHT_)/
 
 /** The settings in .env.local and .env; what the shell sets comes before them. */

@@ -100,7 +100,8 @@ export class Processes {
     const out = show ? 'inherit' : openSync(log, append ? 'a' : 'w')
     const child = spawn(command, args, {
       cwd,
-      env: { ...this.env, ...env },
+      // What goes to a log is read as plain text.
+      env: { ...this.env, ...(show ? {} : { NO_COLOR: '1', FORCE_COLOR: undefined }), ...env },
       uid,
       gid,
       detached: true,
