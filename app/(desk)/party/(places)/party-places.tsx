@@ -1,0 +1,22 @@
+'use client'
+
+import type { Route } from 'next'
+import { usePathname } from 'next/navigation'
+import { NavLinks } from '@/components/ui/nav-links'
+
+export function PartyPlaces({ seesAudit }: { seesAudit: boolean }) {
+  const path = usePathname()
+  const places = [
+    { href: '/party', label: 'Members' },
+    { href: '/party/settings', label: 'Settings' },
+    ...(seesAudit ? [{ href: '/party/audit', label: 'Audit trail' }] : []),
+    { href: '/party/you', label: 'You' },
+  ]
+  return (
+    <NavLinks
+      label="Party"
+      className="mb-6"
+      links={places.map((place) => ({ ...place, href: place.href as Route, current: path === place.href }))}
+    />
+  )
+}
