@@ -1,5 +1,5 @@
 import { db } from '@/db/client'
-import { deleteStage, findStage, insertStage, stageHasShows, updateStage } from '@/db/queries/stage'
+import { deleteStage, findStage, insertStage, listStageChoices, stageHasShows, updateStage } from '@/db/queries/stage'
 import { findVenue } from '@/db/queries/venue'
 import type { Stage, StageInput } from '@/lib/contracts/directory'
 import { audit } from '@/lib/server/audit/audit'
@@ -7,6 +7,12 @@ import type { Actor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
 import { notifyLive } from '@/lib/server/live/notify-live'
 import { changedOr, notThere, stillInUse, thereAlready } from '@/lib/server/refusals'
+
+/** Every stage of the party with its venue, for a choice. */
+export async function readStageChoices(actor: Actor) {
+  assertCan(actor, 'party:read')
+  return listStageChoices(db(), actor)
+}
 
 export async function createStage(
   actor: Actor,

@@ -1,0 +1,26 @@
+import type { Route } from 'next'
+import type { RunStripHire } from '@/components/signature/run-strip'
+import type { RunHire } from '@/lib/server/tours/read-run'
+
+const states: Partial<Record<string, RunStripHire['state']>> = {
+  'not sent': 'none',
+  settled: 'settled',
+  'changed since': 'changed',
+}
+
+/** A hire as tape beneath the days it covers; none while nobody knows its days. */
+export function hireTape(tourId: string, hire: RunHire): RunStripHire[] {
+  if (!hire.firstDate || !hire.lastDate) return []
+  const standing = hire.standing?.standing ?? 'not sent'
+  const words = hire.confirmedAt ? 'confirmed' : standing
+  return [
+    {
+      id: hire.id,
+      label: [`${hire.supplierName} hire`, hire.name, words].filter(Boolean).join(', '),
+      firstDate: hire.firstDate,
+      lastDate: hire.lastDate,
+      state: hire.confirmedAt && standing !== 'changed since' ? 'settled' : (states[standing] ?? 'waiting'),
+      href: `/tours/${tourId}/run#hire-${hire.id}` as Route,
+    },
+  ]
+}
