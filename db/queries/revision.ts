@@ -128,26 +128,16 @@ export async function findNewestRevision(db: Db, scope: Scope, input: { rigId: s
   return rows[0]
 }
 
-/** Revisions of a tour or of one of its rigs, newest first, each with how many lines it asks. */
-export async function listRevisions(
-  db: Db,
-  scope: Scope,
-  input: { tourId: string; rigId?: string | undefined } | { tourId?: undefined; rigId: string },
-) {
+/** Revisions of a rig, newest first, each with how many lines it asks. */
+export async function listRevisions(db: Db, scope: Scope, input: { rigId: string }) {
   return db
     .select({ ...summary, lines: count(revisionLine.lineId) })
     .from(revision)
     .innerJoin(rig, and(eq(rig.partyId, revision.partyId), eq(rig.id, revision.rigId)))
     .innerJoin(person, eq(person.id, revision.issuedBy))
     .leftJoin(revisionLine, and(eq(revisionLine.partyId, revision.partyId), eq(revisionLine.revisionId, revision.id)))
-    .where(
-      and(
-        eq(revision.partyId, scope.partyId),
-        input.tourId === undefined ? undefined : eq(rig.tourId, input.tourId),
-        input.rigId === undefined ? undefined : eq(revision.rigId, input.rigId),
-      ),
-    )
+    .where(and(eq(revision.partyId, scope.partyId), eq(revision.rigId, input.rigId)))
     .groupBy(revision.id, rig.id, person.id)
-    .orderBy(desc(revision.issuedAt), desc(revision.number), asc(revision.id))
+    .orderBy(desc(revision.number))
     .limit(500)
 }

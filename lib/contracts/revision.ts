@@ -61,7 +61,7 @@ export type RevisionPreview = {
   rigId: string
   rigName: string
   shows: number
-  nextNumber: number
+  number: number
   state: 'ready' | 'same' | 'empty'
   lines: number
   changes: z.infer<typeof specChangesSchema> | null
