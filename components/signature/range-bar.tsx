@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import { classes } from '@/components/ui/classes'
 import { round } from './round'
 
@@ -19,6 +20,8 @@ export interface RangeBarProps {
   note: { at: number; name: string } | null
   /** The bar in words ("Tom 12: D3, in the middle of its range, A2 to F3"). */
   label: string
+  /** Stands in place of the bead, where the note can be moved; it places itself by `scalePercent`. */
+  bead?: ReactNode
   /** Writes "slack" and "choked" under the two ends. */
   ends?: boolean
   className?: string
@@ -29,25 +32,31 @@ export function scalePercent(scale: RangeScale, at: number): number {
   return round(Math.min(100, Math.max(0, ((at - scale.from) / (scale.to - scale.from)) * 100)))
 }
 
+/** The look of a note on its range: round inside it, square and spike outside. */
+export function beadClasses(out: boolean): string {
+  return classes(
+    'figures absolute top-1/2 flex h-7 min-w-7 -translate-x-1/2 -translate-y-1/2 items-center justify-center px-1 text-[0.6875rem] font-bold',
+    out ? 'bg-spike-text text-paper' : 'rounded-full bg-ink text-paper',
+  )
+}
+
 /** A drum's playable range with its middle shaded and the note as a bead. A bead outside the range is square and spike. */
-export function RangeBar({ scale, low, high, middleLow, middleHigh, note, label, ends, className }: RangeBarProps) {
+export function RangeBar({ scale, low, high, middleLow, middleHigh, note, label, bead, ends, className }: RangeBarProps) {
   const place = (from: number, to: number) => ({
     left: `${scalePercent(scale, from)}%`,
     width: `${round(scalePercent(scale, to) - scalePercent(scale, from))}%`,
   })
   const out = note !== null && (note.at < low || note.at > high)
   return (
-    <div role="img" aria-label={label} className={className}>
+    <div role={bead ? 'group' : 'img'} aria-label={label} className={className}>
       <div className="relative h-8">
         <div className="absolute inset-y-2 border border-line bg-wash" style={place(low, high)} data-part="range" />
         <div className="absolute inset-y-2 bg-reed/35" style={place(middleLow, middleHigh)} data-part="middle" />
-        {note && (
+        {bead}
+        {note && !bead && (
           <span
             data-part="note"
-            className={classes(
-              'figures absolute top-1/2 flex h-7 min-w-7 -translate-x-1/2 -translate-y-1/2 items-center justify-center px-1 text-[0.6875rem] font-bold',
-              out ? 'bg-spike-text text-paper' : 'rounded-full bg-ink text-paper',
-            )}
+            className={beadClasses(out)}
             style={{ left: `${scalePercent(scale, note.at)}%` }}
           >
             {note.name}

@@ -1,0 +1,77 @@
+import type { Metadata, Route } from 'next'
+import { KitList } from '@/components/kit/kit-list'
+import { NotePlanner } from '@/components/kit/note-planner'
+import { EmptyState } from '@/components/ui/empty-state'
+import { NavLinks } from '@/components/ui/nav-links'
+import { noteLocale } from '@/lib/advance/note-locale'
+import { idSchema } from '@/lib/contracts/common'
+import { rolesMay } from '@/lib/contracts/permissions'
+import { pageActor } from '@/lib/server/auth/page-actor'
+import { pageAnswer } from '@/lib/server/auth/page-answer'
+import { readKitPage } from '@/lib/server/kit/read-kit'
+import { notFound } from 'next/navigation'
+
+export const metadata: Metadata = { title: 'Kit' }
+
+type Props = {
+  params: Promise<{ tourId: string }>
+  searchParams: Promise<Record<string, string | string[] | undefined>>
+}
+
+/** The kit of one of the tour's rigs, and the plan of its notes. Rig and view stand in the address. */
+export default async function KitPage({ params, searchParams }: Props) {
+  const actor = await pageActor()
+  const tourId = idSchema.safeParse((await params).tourId)
+  const query = await searchParams
+  const rigId = idSchema.optional().safeParse(query['rig'])
+  if (!tourId.success || !rigId.success) notFound()
+  const view = query['view'] === 'notes' ? 'notes' : 'kit'
+  const { tour, rigs, rig } = await pageAnswer(readKitPage(actor, { tourId: tourId.data, rigId: rigId.data }))
+  const href = (rigTo: string, viewTo: 'kit' | 'notes') =>
+    `/tours/${tour.id}/kit?rig=${rigTo}${viewTo === 'notes' ? '&view=notes' : ''}` as Route
+  const mayEdit = rolesMay(actor.roles, 'kit:edit')
+
+  if (!rig) {
+    return (
+      <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
+        <h1 className="text-4xl">Kit</h1>
+        <div className="mt-6">
+          <EmptyState title="This tour has no rig yet">
+            A kit belongs to a rig: full, fly, acoustic. Add the first rig on the tour’s own page, then come back here.
+          </EmptyState>
+        </div>
+      </main>
+    )
+  }
+  const reader = { ...rig.reader, locale: noteLocale(rig.reader.locale) }
+  const shared = { rigId: rig.id, initial: rig.entries, reader, mayEdit }
+  return (
+    <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-24 sm:px-6">
+      <div className="flex flex-wrap items-end justify-between gap-x-8 gap-y-1">
+        <h1 className="text-4xl">
+          {view === 'kit' ? 'Kit' : 'Notes'} <span className="text-soft">{rig.name}</span>
+        </h1>
+        <div className="flex flex-wrap gap-x-8">
+          {rigs.length > 1 && (
+            <NavLinks
+              label="Rigs of this tour"
+              links={rigs.map(({ id, name }) => ({ href: href(id, view), label: name, current: id === rig.id }))}
+            />
+          )}
+          <NavLinks
+            label="This kit"
+            links={[
+              { href: href(rig.id, 'kit'), label: 'Kit', current: view === 'kit' },
+              { href: href(rig.id, 'notes'), label: 'Notes', current: view === 'notes' },
+            ]}
+          />
+        </div>
+      </div>
+      {view === 'kit' ? (
+        <KitList key={rig.id} {...shared} sources={rig.sources} />
+      ) : (
+        <NotePlanner key={rig.id} {...shared} kitHref={href(rig.id, 'kit')} />
+      )}
+    </main>
+  )
+}

@@ -1,0 +1,36 @@
+import { Button } from '@/components/ui/button'
+import { Menu } from '@/components/ui/menu'
+
+export interface EntryActionsProps {
+  name: string
+  /** Null at the end where it cannot move further. */
+  onUp: (() => void) | null
+  onDown: (() => void) | null
+  onEdit: () => void
+  onRemove: () => void
+}
+
+/** What can be done with an entry. */
+export function EntryActions({ name, onUp, onDown, onEdit, onRemove }: EntryActionsProps) {
+  return (
+    <div className="flex flex-wrap gap-2">
+      <Button onClick={onEdit}>
+        Edit<span className="sr-only"> {name}</span>
+      </Button>
+      <Menu
+        kind="quiet"
+        align="end"
+        label={
+          <>
+            More<span className="sr-only"> for {name}</span>
+          </>
+        }
+        items={[
+          { key: 'up', label: 'Move up', disabled: !onUp, onSelect: () => onUp?.() },
+          { key: 'down', label: 'Move down', disabled: !onDown, onSelect: () => onDown?.() },
+          { key: 'remove', label: 'Take out of the kit', onSelect: onRemove },
+        ]}
+      />
+    </div>
+  )
+}

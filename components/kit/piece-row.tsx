@@ -1,0 +1,39 @@
+import type { ReactNode } from 'react'
+import { cymbalSizeWords, cymbalTypeWord, typeWords } from '@/lib/advance/kit-words'
+import type { Entry, EntryInput } from '@/lib/contracts/kit'
+import { supplyWords } from '@/lib/contracts/kit'
+import type { KitReader } from './kit-reader'
+
+/** A cymbal, a piece of hardware or a microphone in the list of the kit. */
+export function PieceRow({ entry, reader, actions }: { entry: Entry; reader: KitReader; actions: ReactNode }) {
+  return (
+    <div className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 gap-y-1 py-1.5 lg:grid-cols-[minmax(10rem,1fr)_minmax(12rem,1.4fr)_3rem_8rem_minmax(0,1fr)_auto]">
+      <h3 className="text-lg">{entry.name}</h3>
+      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{pieceWords(entry, reader)}</p>
+      <p className="figures text-right max-lg:col-start-2 max-lg:row-start-1">
+        <span aria-hidden>×</span>
+        <span className="sr-only">count </span>
+        {entry.count}
+      </p>
+      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{supplyWords[entry.supply]}</p>
+      <p className="min-w-0 text-sm text-soft max-lg:col-start-1">{entry.remark}</p>
+      <div className="max-lg:col-span-2">{actions}</div>
+    </div>
+  )
+}
+
+function pieceWords(entry: EntryInput, reader: KitReader): string {
+  switch (entry.kind) {
+    case 'drum':
+      return ''
+    case 'cymbal':
+      return `${cymbalTypeWord(entry.spec.type)}, ${cymbalSizeWords(entry.spec.diameterIn, reader.units)}`
+    case 'hardware':
+      return typeWords(entry.spec.type)
+    case 'microphone': {
+      const { type, stand, phantom } = entry.spec
+      const held = stand === 'none' ? 'no stand' : stand === 'clip' ? 'on a clip' : `${typeWords(stand)} stand`
+      return [typeWords(type), held, phantom ? 'phantom power' : null].filter(Boolean).join(', ')
+    }
+  }
+}
