@@ -24,6 +24,7 @@ const rigPlaces = [
   { segment: 'kit', label: 'Kit' },
   { segment: 'plot', label: 'Plot' },
   { segment: 'patch', label: 'Patch' },
+  { segment: 'revisions', label: 'Revisions' },
 ] as const
 
 /** Over every page of a tour: its name, the rig in hand, the places, and the run. What is chosen is read from the address. */
