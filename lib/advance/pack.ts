@@ -1,6 +1,4 @@
-import { noteFrequencyHz, STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
-import { noteName } from '@/lib/acoustics/note-name'
-import type { KitPiece } from '@/plots/model/kit-piece'
+import { STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
 import type { StageSize } from '@/plots/model/document'
 import { areaWords, lengthWords } from '@/plots/symbols/length-words'
 import { outputsOf, pieceName } from '@/plots/symbols/piece-kinds'
@@ -8,9 +6,9 @@ import { packCautions } from './cautions'
 import { changeSentences, compareSpecs } from './compare-specs'
 import type { FrozenDrum, FrozenEntry } from './frozen-kit'
 import { entriesInOrder } from './frozen-kit'
+import { kitPieces } from './kit-pieces'
 import { typeWords } from './kit-words'
 import { insteadOfWords, lineDetails, lineWords } from './line-content'
-import { noteLocale } from './note-locale'
 import type { Fact, PackAudience, PackChannel, PackContact, PackDocument, PackLine, PackPlot, PackShow } from './pack-document'
 import { PACK_SCHEMA_VERSION } from './pack-document'
 import type { RevisionDocument, RigSpec } from './revision-document'
@@ -284,29 +282,6 @@ function packLines(document: RevisionDocument, recipient: PackRecipient): PackLi
         asked,
       }
     })
-}
-
-/** Kit entries as the plot draws them, with notes named for the reader. */
-export function kitPieces(document: Pick<RevisionDocument, 'kit' | 'party'>, locale: string): KitPiece[] {
-  return entriesInOrder(document.kit).map((entry): KitPiece => {
-    const { id, name, count } = entry
-    switch (entry.kind) {
-      case 'drum': {
-        const { role, diameterIn, depthIn, lugs, note } = entry.spec
-        return {
-          ...{ kind: 'drum', id, name, role, diameterIn, depthIn, lugs },
-          noteLabel: note ? noteName(note.semitone, noteLocale(locale)) : null,
-          noteHz: note ? noteFrequencyHz(note, document.party.referenceHz) : null,
-        }
-      }
-      case 'cymbal':
-        return { kind: 'cymbal', id, name, count, type: entry.spec.type, diameterIn: entry.spec.diameterIn }
-      case 'hardware':
-        return { kind: 'hardware', id, name, count, type: entry.spec.type }
-      case 'microphone':
-        return { kind: 'microphone', id, name, count, type: entry.spec.type, phantom: entry.spec.phantom, stand: entry.spec.stand }
-    }
-  })
 }
 
 function packPlot(document: RevisionDocument, show: PackShowInput, locale: string): PackPlot | null {

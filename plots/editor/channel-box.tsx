@@ -3,6 +3,7 @@
 import { useChangeChannel } from '@/lib/client/channels'
 import { AppError } from '@/lib/errors'
 import type { Piece } from '../model/document'
+import { channelDefaults } from '../symbols/channel-defaults'
 import { CommitInput } from './commit-input'
 import type { EditorParts } from './editor-context'
 
@@ -18,7 +19,7 @@ export function ChannelBox({
   output: string
   isLabelHidden?: boolean
 }) {
-  const { rigId, channels, kit, mayPatch, nameOf, document } = parts
+  const { rigId, channels, kit, mayPatch, document } = parts
   const change = useChangeChannel(rigId)
   const was = channels.find((channel) => channel.pieceId === piece.id && channel.output === output)
 
@@ -37,19 +38,14 @@ export function ChannelBox({
           channel: { number, name, pieceId: piece.id, output, stand, phantom },
         })
       } else {
-        const entry = piece.kitEntryId === null ? undefined : kit.get(piece.kitEntryId)
-        const aimed = piece.aim ? document.pieces[piece.aim.pieceId] : undefined
-        const name = aimed ? nameOf(aimed) : output === 'mic' ? nameOf(piece) : `${nameOf(piece)} ${output}`
         await change.mutateAsync({
           do: 'add',
           id: crypto.randomUUID(),
           channel: {
             number,
-            name: name.slice(0, 60),
             pieceId: piece.id,
             output,
-            stand: entry?.kind === 'microphone' && entry.stand !== 'none' ? entry.stand : '',
-            phantom: entry?.kind === 'microphone' && entry.phantom,
+            ...channelDefaults(document, kit, piece, output),
           },
         })
       }

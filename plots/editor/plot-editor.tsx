@@ -4,15 +4,17 @@ import { DndContext, DragOverlay } from '@dnd-kit/core'
 import { useCallback, useMemo, useState, type KeyboardEvent } from 'react'
 import { LiveRegion } from '@/components/ui/live-region'
 import { showToast } from '@/components/ui/toast'
+import { kitPieces } from '@/lib/advance/kit-pieces'
 import { useChannels } from '@/lib/client/channels'
+import { useKit } from '@/lib/client/kit'
 import { usePlot } from '@/lib/client/plot/use-plot'
 import type { Channel } from '@/lib/contracts/channel'
+import type { Entry } from '@/lib/contracts/kit'
 import type { PlotAnswer } from '@/lib/contracts/plot'
 import type { PlotPoint } from '../geometry/point'
 import { toPlot } from '../geometry/view'
 import type { PlotAction } from '../model/command'
 import type { Piece } from '../model/document'
-import type { KitPiece } from '../model/kit-piece'
 import { channelKey } from '../render/build-scene'
 import type { LengthUnits } from '../symbols/length-words'
 import { pieceName } from '../symbols/piece-kinds'
@@ -31,9 +33,9 @@ import { useView } from './use-view'
 
 export interface PlotEditorProps {
   plot: PlotAnswer
-  kit: readonly KitPiece[]
+  entries: readonly Entry[]
   channels: readonly Channel[]
-  units: LengthUnits
+  reader: { readonly units: LengthUnits; readonly locale: string; readonly referenceHz: number }
   personId: string
   mayEdit: boolean
   mayPatch: boolean
@@ -43,11 +45,16 @@ const none: ReadonlySet<string> = new Set()
 
 /** The plot of a rig, in hand: shelf, sheet, margin note and list over one document. */
 export function PlotEditor(props: PlotEditorProps) {
-  const { units, mayEdit, mayPatch, personId } = props
+  const { mayEdit, mayPatch, personId } = props
+  const { units, locale, referenceHz } = props.reader
   const { rigId } = props.plot
   const { state, session } = usePlot({ initial: props.plot, personId })
   const { document } = state
-  const kit = useMemo(() => new Map(props.kit.map((entry) => [entry.id, entry])), [props.kit])
+  const { data: entries } = useKit(rigId, props.entries)
+  const kit = useMemo(() => {
+    const inKit = entries.filter((entry) => !entry.removed)
+    return new Map(kitPieces({ kit: inKit, party: { referenceHz } }, locale).map((piece) => [piece.id, piece]))
+  }, [entries, referenceHz, locale])
   const { data: channels } = useChannels(rigId, props.channels)
   const channelNumbers = useMemo(
     () =>

@@ -26,9 +26,7 @@ export default async function PatchPage({ params, searchParams }: Props) {
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
       <div className="mb-6 flex flex-wrap items-end justify-between gap-x-8 gap-y-1">
-        <h1 className="text-4xl">
-          Patch {rig && <span className="text-soft">{rig.name}</span>}
-        </h1>
+        <h1 className="text-4xl">Patch {rig && <span className="text-soft">{rig.name}</span>}</h1>
         {rigs.length > 1 && (
           <NavLinks
             label="Rigs of this tour"
