@@ -25,15 +25,19 @@ function checkNode() {
   })
 }
 
+function table(rows) {
+  const widths = rows[0].map((_, column) => Math.max(...rows.map((row) => row[column].length)))
+  return rows.map((row) => row.map((cell, column) => cell.padEnd(widths[column])).join('   ').trimEnd())
+}
+
 function tellWhere({ appUrl, mailboxUrl, own, logs }) {
   const lines = ['', `  Hoopwright   ${appUrl}`]
   if (mailboxUrl) lines.push(`  Mailbox      ${mailboxUrl}   (every mail it sends lands here)`)
   const peopleFile = join(root, 'db', 'seed', 'demo-people.json')
   if (!own.database && existsSync(peopleFile)) {
-    lines.push('', '  Demo sign-ins')
-    for (const { name, email, password, roles } of JSON.parse(readFileSync(peopleFile, 'utf8'))) {
-      lines.push(`    ${email.padEnd(34)} ${password.padEnd(22)} ${name}, ${roles.join(' and ')}`)
-    }
+    const people = JSON.parse(readFileSync(peopleFile, 'utf8'))
+    const rows = people.map(({ name, email, password, roles }) => [email, password, `${name}, ${roles.join(' and ')}`])
+    lines.push('', ...table([['Demo sign-in', 'Password', 'Who'], ...rows]).map((row) => `  ${row}`))
   }
   lines.push('', `  Logs in ${fromRoot(logs)}. Ctrl-C stops everything; what you did is kept.`, '')
   process.stdout.write(`${lines.join('\n')}\n`)

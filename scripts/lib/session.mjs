@@ -2,6 +2,7 @@ import { existsSync } from 'node:fs'
 import { Failure } from './failure.mjs'
 import { takeLock } from './lock.mjs'
 import { fromRoot } from './place.mjs'
+import { identityOf, isAlive, parentOf } from './process-identity.mjs'
 import { Processes, lastLines, sweepLeftovers } from './processes.mjs'
 import { createSteps } from './steps.mjs'
 
@@ -88,12 +89,12 @@ export async function runSession({ place, what, env = process.env }, work, onFai
 /** npm can be killed outright; then nobody is left to pass Ctrl-C on, and we stop by ourselves. */
 function watchParent(stop) {
   if (!process.env['npm_lifecycle_event']) return
-  const parent = process.ppid
+  // npm runs its scripts through a shell, which would go on waiting without it.
+  const above = [process.ppid, parentOf(process.ppid)].filter((pid) => pid > 1).map(identityOf)
   const timer = setInterval(() => {
-    if (process.ppid !== parent) {
-      clearInterval(timer)
-      void stop()
-    }
+    if (above.every(isAlive)) return
+    clearInterval(timer)
+    void stop()
   }, PARENT_CHECK_MS)
   timer.unref()
 }

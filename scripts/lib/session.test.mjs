@@ -15,8 +15,12 @@ let folder
 beforeEach(() => (folder = mkdtempSync(join(tmpdir(), 'session-'))))
 afterEach(() => rmSync(folder, { recursive: true, force: true }))
 
+const STAYS = `run.running = true
+run.lock.note({ running: true, address: 'http://127.0.0.1:3000' })
+await new Promise(() => setInterval(() => {}, 1000))`
+
 /** A run that starts one service and stays, or does what `work` says. */
-function session(work = "run.running = true\nrun.lock.note({ running: true, address: 'http://127.0.0.1:3000' })\nawait new Promise(() => setInterval(() => {}, 1000))") {
+function session(work = STAYS, { throughNpm = false } = {}) {
   const file = join(folder, `run-${Math.random()}.mjs`)
   writeFileSync(
     file,
@@ -28,8 +32,12 @@ await runSession({ place: placeOf('start', ${JSON.stringify(folder)}), what: 'Ho
   ${work}
 })`,
   )
+  // Two commands, so that the shell stays between npm and the run, as some shells do anyway.
+  writeFileSync(join(folder, 'package.json'), JSON.stringify({ scripts: { start: `node ${file}; exit $?` } }))
   const { npm_lifecycle_event: _, ...env } = process.env
-  const child = spawn(process.execPath, [file], { stdio: ['ignore', 'pipe', 'pipe'], env })
+  const child = throughNpm
+    ? spawn('npm', ['start', '--silent'], { cwd: folder, stdio: ['ignore', 'pipe', 'pipe'], env })
+    : spawn(process.execPath, [file], { stdio: ['ignore', 'pipe', 'pipe'], env })
   let said = ''
   for (const stream of [child.stdout, child.stderr]) stream.setEncoding('utf8').on('data', (text) => (said += text))
   return { child, said: () => said, ended: once(child, 'close').then(([code]) => code) }
@@ -82,4 +90,12 @@ it('tells a failure in one sentence with what to do, and stops what it had start
   expect(await ended).toBe(1)
   expect(said()).toBe('\nThe port is taken.\nSet PORT.\n')
   expect(existsSync(lockFile())).toBe(false)
+})
+
+it('stops everything when npm, which started it, is killed outright', { timeout: SLOW }, async () => {
+  const { child } = session(STAYS, { throughNpm: true })
+  const service = await runningService()
+  child.kill('SIGKILL')
+  await vi.waitFor(() => expect(isAlive(service)).toBe(false), { timeout: SLOW, interval: 20 })
+  await vi.waitFor(() => expect(existsSync(lockFile())).toBe(false), { timeout: SLOW, interval: 20 })
 })
