@@ -14,10 +14,16 @@ export type Scope = { readonly partyId: string }
 const kept = globalThis as typeof globalThis & { hoopwrightPool?: pg.Pool }
 
 export function pool(): pg.Pool {
-  kept.hoopwrightPool ??= new pg.Pool({ connectionString: env().DATABASE_URL, max: 12, idleTimeoutMillis: 30_000 })
-  // Without a listener an idle connection that the server closes would end the process.
-  if (kept.hoopwrightPool.listenerCount('error') === 0) kept.hoopwrightPool.on('error', () => undefined)
+  kept.hoopwrightPool ??= openPool()
   return kept.hoopwrightPool
+}
+
+function openPool(): pg.Pool {
+  const made = new pg.Pool({ connectionString: env().DATABASE_URL, max: 12, idleTimeoutMillis: 30_000 })
+  // Without listeners a connection that the server closes would end the process; whoever uses it is told by its query.
+  made.on('error', () => undefined)
+  made.on('connect', (client) => client.on('error', () => undefined))
+  return made
 }
 
 let opened: NodePgDatabase<Record<string, never>> | undefined

@@ -25,14 +25,23 @@ async function send(team: Team, house: string, of: AnswersOf, revisionId: string
   const { outcomes } = await sendPacks(team['tour-manager'], {
     revisionId,
     holdBack: false,
-    recipients: [{ dispatchId: demoId('dispatch', house, revisionId), contactId: demoContactId(house), ...subjectIds(of) }],
+    recipients: [
+      { dispatchId: demoId('dispatch', house, revisionId), contactId: demoContactId(house), ...subjectIds(of) },
+    ],
   })
   const refused = outcomes.find(({ outcome }) => outcome === 'refused')
   if (refused) throw new Error(`${house}: ${refused.message}`)
 }
 
 /** Answers through the link that was mailed, as its reader would. */
-async function answer(team: Team, house: string, of: AnswersOf, byName: string, say: Say, close: boolean): Promise<string[]> {
+async function answer(
+  team: Team,
+  house: string,
+  of: AnswersOf,
+  byName: string,
+  say: Say,
+  close: boolean,
+): Promise<string[]> {
   const subject = 'showId' in of ? eq(grant.showId, of.showId) : eq(grant.hireId, of.hireId)
   const [token] = await db()
     .select({ id: grantToken.id })
@@ -51,7 +60,15 @@ async function answer(team: Team, house: string, of: AnswersOf, byName: string, 
     const id = demoId('answer', house, line.lineId)
     answered.push(line.lineId)
     if (line.state === 'unanswered')
-      await recordReply(reader, { kind: 'answer', id, lineId: line.lineId, lineHash: line.hash, content, remark: '', byName })
+      await recordReply(reader, {
+        kind: 'answer',
+        id,
+        lineId: line.lineId,
+        lineHash: line.hash,
+        content,
+        remark: '',
+        byName,
+      })
   }
   if (close) await recordReply(reader, { kind: 'close', id: demoId('close', house), byName })
   return answered
@@ -74,10 +91,17 @@ function mostly(today: string): Say {
   let drums = 0
   return (line) => {
     if (line.kind === 'drum' && line.size?.lugs && line.size.depthIn && drums++ === 1) {
-      const what = { kind: 'drum', diameterIn: line.size.diameterIn + 1, depthIn: line.size.depthIn + 1, lugs: 6, words: 'birch, in good order' } as const
+      const what = {
+        kind: 'drum',
+        diameterIn: line.size.diameterIn + 1,
+        depthIn: line.size.depthIn + 1,
+        lugs: 6,
+        words: 'birch, in good order',
+      } as const
       return { asAsked: 0, instead: [{ n: 1, what }], notYet: [], cant: 0 }
     }
-    if (line.kind === 'microphone' && line.number % 4 === 0) return { asAsked: 0, instead: [], notYet: [{ n: line.count, by: dateAfter(today, 1) }], cant: 0 }
+    if (line.kind === 'microphone' && line.number % 4 === 0)
+      return { asAsked: 0, instead: [], notYet: [{ n: line.count, by: dateAfter(today, 1) }], cant: 0 }
     if (line.words.toLowerCase().includes('rug')) return { asAsked: 0, instead: [], notYet: [], cant: line.count }
     return asAskedAnswer(line.count)
   }
@@ -90,7 +114,8 @@ export async function makeAdvance(team: Team, today: string): Promise<void> {
   for (const { venue, rig } of demoShows) {
     if (venue === 'Lakeside') continue
     // One venue answered the revision before: it stands as changed since.
-    const revision = venue === 'Palais Est' ? demoRevisionId('full rig', 1) : rig === 'full rig' ? full : demoRevisionId('fly rig', 1)
+    const revision =
+      venue === 'Palais Est' ? demoRevisionId('full rig', 1) : rig === 'full rig' ? full : demoRevisionId('fly rig', 1)
     await send(team, venue, show(venue), revision)
   }
   for (const { key } of demoHires) {
@@ -101,7 +126,21 @@ export async function makeAdvance(team: Team, today: string): Promise<void> {
     await settleAnswers(team, venue, show(venue), answered)
   }
   await answer(team, 'Salle Nord', show('Salle Nord'), 'Odile', mostly(today), true)
-  await answer(team, 'The Tannery', show('The Tannery'), 'Wren', (line, index) => (index < 2 ? asAskedAnswer(line.count) : null), false)
+  await answer(
+    team,
+    'The Tannery',
+    show('The Tannery'),
+    'Wren',
+    (line, index) => (index < 2 ? asAskedAnswer(line.count) : null),
+    false,
+  )
   await answer(team, 'Palais Est', show('Palais Est'), 'Basile', asAsked, true)
-  await answer(team, 'Northline hire', { hireId: demoHireId('Northline hire') }, 'Runa', (line, index) => (index < 3 ? asAskedAnswer(line.count) : null), false)
+  await answer(
+    team,
+    'Northline hire',
+    { hireId: demoHireId('Northline hire') },
+    'Runa',
+    (line, index) => (index < 3 ? asAskedAnswer(line.count) : null),
+    false,
+  )
 }

@@ -26,10 +26,21 @@ async function readHead(team: Team, venue: string, drum: string, at: string, cen
       ...{ deviceId, deviceSequence: index + 1, deviceAt: new Date(Date.parse(at) + index * 20_000).toISOString() },
       ...{ method: 'tap-typed' as const, unit: 'Hz' as const, targetHz: target },
       value: Math.round(shiftByCents(target, cents[(lug - 1) % cents.length] ?? 0) * 10) / 10,
-      ...{ otherHead: 'damped' as const, onStand: false, gauge: '', temperatureC: 19, pass: 1, strikes: null, byName: '' },
+      ...{
+        otherHead: 'damped' as const,
+        onStand: false,
+        gauge: '',
+        temperatureC: 19,
+        pass: 1,
+        strikes: null,
+        byName: '',
+      },
     })),
   })
 }
+
+/** The last row that the demo makes: where it stands, all the others do. */
+export const lastDemoReadingId = demoId('reading', 'Salle Nord', 'tom 12', String(lugOrder(6).at(-1)))
 
 /** One bench done and signed, one under way today. */
 export async function makeBench(team: Team, today: string, firstDate: string): Promise<void> {
@@ -37,7 +48,13 @@ export async function makeBench(team: Team, today: string, firstDate: string): P
     await readHead(team, 'Harbour Hall', drum, `${firstDate}T13:40:00Z`, even)
     await signOffDrum(team['drum-tech'], {
       showId: demoShowId('Harbour Hall'),
-      signOff: { id: demoId('sign-off', drum), entryId: demoEntryId('full rig', drum), decision: 'signed', byName: 'Jory Pell', remark: '' },
+      signOff: {
+        id: demoId('sign-off', drum),
+        entryId: demoEntryId('full rig', drum),
+        decision: 'signed',
+        byName: 'Jory Pell',
+        remark: '',
+      },
     })
   }
   await readHead(team, 'Salle Nord', 'tom 12', `${today}T09:10:00Z`, facingPairHigh)

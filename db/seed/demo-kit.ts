@@ -11,7 +11,14 @@ type KitThing = { key: string; entry: EntryInput; at?: Placed; aimsAt?: string; 
 /** Noted on the party's own gauge, relative to it; notes on the A4 = 69 count. */
 function drum(
   base: Drum,
-  say: { name?: string; semitone: number; gauge: number; muffling?: string; supply?: Drum['supply']; spec?: Partial<DrumSpec> },
+  say: {
+    name?: string
+    semitone: number
+    gauge: number
+    muffling?: string
+    supply?: Drum['supply']
+    spec?: Partial<DrumSpec>
+  },
 ): Drum {
   const { diameterIn, depthIn } = { ...base.spec, ...say.spec }
   const resonant = say.spec?.resonant === undefined ? base.spec.resonant : say.spec.resonant
@@ -42,7 +49,12 @@ function cymbal(name: string, type: 'hats' | 'crash' | 'ride', diameterIn: numbe
   return { kind: 'cymbal', name, supply: 'carried', count: 1, remark: '', spec: { type, diameterIn } }
 }
 
-function hardware(name: string, type: Extract<EntryInput, { kind: 'hardware' }>['spec']['type'], count: number, supply: EntryInput['supply'] = 'rented'): EntryInput {
+function hardware(
+  name: string,
+  type: Extract<EntryInput, { kind: 'hardware' }>['spec']['type'],
+  count: number,
+  supply: EntryInput['supply'] = 'rented',
+): EntryInput {
   return { kind: 'hardware', name, supply, count, remark: '', spec: { type } }
 }
 
@@ -69,7 +81,10 @@ const fullRig: KitThing[] = [
   { key: 'floor 16', entry: drum(newDrum('floor-tom'), { semitone: 40, gauge: 72 }), at: { xM: -0.6, yM: 5.5 } },
   {
     key: 'spare snare',
-    entry: { ...drum(newDrum('snare', { depthIn: 5.5 }), { name: 'Spare snare 14', semitone: 57, gauge: 88 }), remark: 'stays in its case, side stage' },
+    entry: {
+      ...drum(newDrum('snare', { depthIn: 5.5 }), { name: 'Spare snare 14', semitone: 57, gauge: 88 }),
+      remark: 'stays in its case, side stage',
+    },
   },
   { key: 'hats', entry: cymbal('Hats 14', 'hats', 14), at: { xM: 0.62, yM: 5.46 } },
   { key: 'crash 17', entry: cymbal('Crash 17', 'crash', 17), at: { xM: 0.64, yM: 4.94 } },
@@ -124,8 +139,20 @@ const fullRig: KitThing[] = [
     channel: 6,
   },
   { key: 'floor mic', entry: microphone('Clip-on, floor 16', clipOn) },
-  { key: 'overhead right', entry: microphone('Overhead, stage right', overhead), at: { xM: -0.95, yM: 5.5, zM: 1.9 }, aimsAt: 'snare', channel: 8 },
-  { key: 'overhead left', entry: microphone('Overhead, stage left', overhead), at: { xM: 1.0, yM: 5.2, zM: 1.9 }, aimsAt: 'snare', channel: 9 },
+  {
+    key: 'overhead right',
+    entry: microphone('Overhead, stage right', overhead),
+    at: { xM: -0.95, yM: 5.5, zM: 1.9 },
+    aimsAt: 'snare',
+    channel: 8,
+  },
+  {
+    key: 'overhead left',
+    entry: microphone('Overhead, stage left', overhead),
+    at: { xM: 1.0, yM: 5.2, zM: 1.9 },
+    aimsAt: 'snare',
+    channel: 9,
+  },
 ]
 
 const flyRig: KitThing[] = [
@@ -153,7 +180,13 @@ const flyRig: KitThing[] = [
     aimsAt: 'kick',
     channel: 1,
   },
-  { key: 'overhead', entry: microphone('Overhead', overhead), at: { xM: 0, yM: 6.1, zM: 2 }, aimsAt: 'snare', channel: 2 },
+  {
+    key: 'overhead',
+    entry: microphone('Overhead', overhead),
+    at: { xM: 0, yM: 6.1, zM: 2 },
+    aimsAt: 'snare',
+    channel: 2,
+  },
 ]
 
 export const demoRigs = [

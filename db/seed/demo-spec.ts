@@ -51,7 +51,11 @@ async function swapFloorTom(team: Team): Promise<void> {
     version: floor.version,
     entry: {
       ...{ kind, name, supply, count, remark },
-      spec: { ...spec, depthIn: 16, insteadOf: { diameterMinIn: 16, diameterMaxIn: 16, depthMinIn: 14, depthMaxIn: 16 } },
+      spec: {
+        ...spec,
+        depthIn: 16,
+        insteadOf: { diameterMinIn: 16, diameterMaxIn: 16, depthMinIn: 14, depthMaxIn: 16 },
+      },
     },
   })
 }

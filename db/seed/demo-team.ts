@@ -13,7 +13,9 @@ import { demoId } from './demo-id'
 type DemoPerson = { name: string; email: string; password: string; roles: Role[] }
 export type Team = Record<Role, MemberActor>
 
-export const demoPeople = JSON.parse(readFileSync(new URL('./demo-people.json', import.meta.url), 'utf8')) as DemoPerson[]
+export const demoPeople = JSON.parse(
+  readFileSync(new URL('./demo-people.json', import.meta.url), 'utf8'),
+) as DemoPerson[]
 export const demoPartyId = demoId('party')
 
 /** The party and its four people: the owner makes it, the others are invited and come. */
@@ -33,12 +35,23 @@ export async function makeTeam(): Promise<Team> {
           passwordHash: await hashPassword(person.password),
           emailVerifiedAt: new Date(),
         }))
-      const signedIn = { personId: owner.id, name: owner.name, email: owner.email, sessionId: demoId('no session'), partyId: null, address: '' }
+      const signedIn = {
+        personId: owner.id,
+        name: owner.name,
+        email: owner.email,
+        sessionId: demoId('no session'),
+        partyId: null,
+        address: '',
+      }
       await createParty(signedIn, { id: demoPartyId, name: 'Saltmarsh Radio' })
     } else if (!known) {
       const owner = made.owner
       if (!owner) throw new Error('the owner comes first')
-      const invitation = await invite(owner, { id: demoId('invitation', person.email), email: person.email, roles: person.roles })
+      const invitation = await invite(owner, {
+        id: demoId('invitation', person.email),
+        email: person.email,
+        roles: person.roles,
+      })
       await acceptInvitation(
         { token: linkToken('invitation', invitation.id), newcomer: { name: person.name, password: person.password } },
         undefined,

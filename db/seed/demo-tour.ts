@@ -50,7 +50,8 @@ export async function makeTour(team: Team, today: string): Promise<void> {
   const dayOf = new Map(days.flatMap(({ date, day }) => (day ? [[date, day] as const] : [])))
   for (const offset of demoTravels) {
     const day = dayOf.get(dateOf(offset))
-    if (day?.kind === 'off') await changeDay(manager, { dayId: day.id, version: day.version, day: { kind: 'travel', remark: '' } })
+    if (day?.kind === 'off')
+      await changeDay(manager, { dayId: day.id, version: day.version, day: { kind: 'travel', remark: '' } })
   }
   for (const show of demoShows) {
     const dayId = dayOf.get(dateOf(show.offset))?.id
@@ -62,7 +63,13 @@ export async function makeTour(team: Team, today: string): Promise<void> {
     await createStage(manager, {
       venueId,
       id: stageId,
-      stage: { name: 'Main stage', ...show.stage, volts: 230, mainsHz: 50, inlets: 'blue 16 A, upstage left and right' },
+      stage: {
+        name: 'Main stage',
+        ...show.stage,
+        volts: 230,
+        mainsHz: 50,
+        inlets: 'blue 16 A, upstage left and right',
+      },
     })
     await createContact(manager, { of: { venueId }, id: demoContactId(venue), contact: houseCrew(show) })
     await createShow(manager, {
@@ -75,7 +82,9 @@ export async function makeTour(team: Team, today: string): Promise<void> {
         showTime: show.festival ? '00:30' : '20:30',
         showDayOffset: show.festival ? 1 : 0,
         answersDue: { date: dateAfter(today, dueAfterToday[venue] ?? 0), time: '18:00' },
-        slot: show.festival ? { changeoverMin: 25, lineCheckMin: 10, riserParking: 'upstage right, behind the black' } : null,
+        slot: show.festival
+          ? { changeoverMin: 25, lineCheckMin: 10, riserParking: 'upstage right, behind the black' }
+          : null,
         sharedKit: show.festival ? { owner: 'the festival', mayRetune: true, maySwap: 'snare, cymbals, pedal' } : null,
       },
     })
@@ -83,11 +92,19 @@ export async function makeTour(team: Team, today: string): Promise<void> {
   for (const hire of demoHires) {
     const supplierId = demoId('supplier', hire.key)
     const { town, country, zone, currency } = hire
-    await createSupplier(manager, { id: supplierId, supplier: { name: hire.key, town, country, zone, currency, remark: '' } })
+    await createSupplier(manager, {
+      id: supplierId,
+      supplier: { name: hire.key, town, country, zone, currency, remark: '' },
+    })
     await createContact(manager, {
       of: { supplierId },
       id: demoContactId(hire.key),
-      contact: { name: `${hire.key} desk`, email: `desk@${mailDomain(hire.key)}`, phone: '', duties: ['backline', 'delivery'] },
+      contact: {
+        name: `${hire.key} desk`,
+        email: `desk@${mailDomain(hire.key)}`,
+        phone: '',
+        duties: ['backline', 'delivery'],
+      },
     })
     await createHire(manager, {
       tourId: demoTourId,
@@ -95,7 +112,9 @@ export async function makeTour(team: Team, today: string): Promise<void> {
       hire: {
         supplierId,
         name: 'One van',
-        showIds: demoShows.filter(({ offset }) => offset >= hire.from && offset <= hire.to).map(({ venue }) => demoShowId(venue)),
+        showIds: demoShows
+          .filter(({ offset }) => offset >= hire.from && offset <= hire.to)
+          .map(({ venue }) => demoShowId(venue)),
         zone,
         ...{ deliveryDate: dateOf(hire.from), deliveryFrom: '09:00', deliveryUntil: '11:00' },
         ...{ collectionDate: dateOf(hire.to + 1), collectionFrom: '08:00', collectionUntil: '12:00' },
