@@ -5,6 +5,8 @@ import type { TraceLug, TraceMove } from './trace-lug'
 export interface TraceRodProps {
   lug: TraceLug
   hoopRadius: number
+  /** To be read now: its number is ringed. */
+  now?: boolean
   /** Which way this rod is to be turned now, if it is. */
   move: TraceMove['turn'] | null
 }
@@ -19,7 +21,7 @@ function lugWord(lug: TraceLug): string | null {
  * One claw with its rod and number. Filled: read. Hollow: not read yet. A wedge pointing out (high) or in (low),
  * with the word: out of tolerance. A key on the rod: turn it now, the way its arrow goes.
  */
-export function TraceRod({ lug, hoopRadius, move }: TraceRodProps) {
+export function TraceRod({ lug, hoopRadius, now, move }: TraceRodProps) {
   const word = lugWord(lug)
   const turnDeg = round((lug.angleRad * 180) / Math.PI)
   const label = clockPoint(lug.angleRad, move ? 116 : word ? 106 : 94)
@@ -44,19 +46,20 @@ export function TraceRod({ lug, hoopRadius, move }: TraceRodProps) {
         )}
         {move && <Key turn={move} y={-hoopRadius - 12} />}
       </g>
+      {now && <circle cx={label.x} cy={label.y} r={9.5} strokeWidth={1.8} className="fill-none stroke-spike" />}
       <text
         x={label.x}
         y={round(label.y + 3.5)}
         textAnchor="middle"
         fontSize={10}
-        className={word || move ? 'figures fill-spike-text font-bold' : 'figures fill-soft'}
+        className={word || move || now ? 'figures fill-spike-text font-bold' : 'figures fill-soft'}
       >
         {lug.number}
       </text>
       {word && (
         <text
           x={label.x}
-          y={round(label.y + (label.y < -20 ? -7 : 13))}
+          y={round(label.y + (label.y < -20 ? -7 : 13) + (now ? (label.y < -20 ? -5 : 5) : 0))}
           textAnchor="middle"
           fontSize={8.5}
           className="fill-spike-text font-bold"

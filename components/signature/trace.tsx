@@ -18,6 +18,10 @@ export interface TraceProps {
   centre: ReactNode
   /** Lugs whose rods are to be turned now: a key is drawn on each. */
   highlightLugs?: readonly TraceMove[]
+  /** The lug to read now: its number is ringed. */
+  nowLug?: number | undefined
+  /** Marks the badge, from which lugs are counted, at twelve o'clock. */
+  badge?: boolean
   /** Lug numbers in the order in which they are gone round; drawn as steps from lug to lug while nothing was read. */
   order?: readonly number[]
   /** Paper prints in black and white; stage is for the dark. Inherits the page's theme if not given. */
@@ -38,7 +42,7 @@ function points(line: readonly { x: number; y: number }[]): string {
  * outside it is marked by its shape and by a word.
  */
 export function Trace(props: TraceProps) {
-  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], order, mode, className } = props
+  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], nowLug, badge, order, mode, className } = props
   const inner = round(bandInner * targetRadius)
   const outer = round(Math.min(bandOuter * targetRadius, headRadius))
   const steps =
@@ -109,10 +113,19 @@ export function Trace(props: TraceProps) {
               ))}
             </g>
           )}
+          {badge && (
+            <g data-part="badge" className="fill-soft">
+              <path d={`M-5 ${-hoopRadius - 2}h10l-5 7Z`} />
+              <text y={-hoopRadius - 6} textAnchor="middle" fontSize={8.5}>
+                badge
+              </text>
+            </g>
+          )}
           {lugs.map((lug) => (
             <TraceRod
               key={lug.number}
               lug={lug}
+              now={lug.number === nowLug}
               hoopRadius={hoopRadius}
               move={highlightLugs.find((move) => move.number === lug.number)?.turn ?? null}
             />

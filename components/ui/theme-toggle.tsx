@@ -29,7 +29,8 @@ export interface ThemeToggleProps {
 
 /** Changes between the paper theme for daylight and the stage theme for the dark; the device keeps the choice. */
 export function ThemeToggle({ place = 'desk' }: ThemeToggleProps) {
-  const theme = useSyncExternalStore<Theme | null>(watchTheme, currentTheme, () => null)
+  // The bench starts on the stage theme, so the server can say so before the page has woken up.
+  const theme = useSyncExternalStore<Theme | null>(watchTheme, currentTheme, () => (place === 'bench' ? 'stage' : null))
   const other: Theme = theme === 'stage' ? 'paper' : 'stage'
   return (
     <Button

@@ -38,7 +38,10 @@ export async function listBenchDrums(db: Db, scope: Scope, showId: string) {
       lugs: physicalDrum.lugs,
     })
     .from(benchDrum)
-    .innerJoin(physicalDrum, and(eq(physicalDrum.partyId, benchDrum.partyId), eq(physicalDrum.id, benchDrum.physicalDrumId)))
+    .innerJoin(
+      physicalDrum,
+      and(eq(physicalDrum.partyId, benchDrum.partyId), eq(physicalDrum.id, benchDrum.physicalDrumId)),
+    )
     .where(and(eq(benchDrum.partyId, scope.partyId), eq(benchDrum.showId, showId)))
     .orderBy(asc(benchDrum.kitEntryId))
     .limit(1000)
@@ -61,7 +64,10 @@ export async function setBenchDrum(
   await db
     .insert(benchDrum)
     .values({ ...row, partyId: scope.partyId })
-    .onConflictDoUpdate({ target: [benchDrum.showId, benchDrum.kitEntryId], set: { physicalDrumId: row.physicalDrumId } })
+    .onConflictDoUpdate({
+      target: [benchDrum.showId, benchDrum.kitEntryId],
+      set: { physicalDrumId: row.physicalDrumId },
+    })
 }
 
 const readingColumns = {
@@ -123,7 +129,11 @@ export async function findDeviceNumbers(
     .where(
       and(
         eq(reading.partyId, scope.partyId),
-        or(...numbers.map((number) => and(eq(reading.deviceId, number.deviceId), eq(reading.deviceSequence, number.deviceSequence)))),
+        or(
+          ...numbers.map((number) =>
+            and(eq(reading.deviceId, number.deviceId), eq(reading.deviceSequence, number.deviceSequence)),
+          ),
+        ),
       ),
     )
     .orderBy(asc(reading.sequence))

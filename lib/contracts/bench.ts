@@ -19,7 +19,11 @@ export const readingInputSchema = z
     id: idSchema,
     entryId: z.uuid('choose a drum of this sheet'),
     side: z.enum(headSides, 'batter or resonant'),
-    lug: z.number('write a lug number').int('a whole lug number').min(1, 'lugs count from 1').max(12, 'at most 12 lugs'),
+    lug: z
+      .number('write a lug number')
+      .int('a whole lug number')
+      .min(1, 'lugs count from 1')
+      .max(12, 'at most 12 lugs'),
     deviceId: idSchema,
     deviceSequence: z.number().int('a whole number').min(1, 'at least 1').max(2_147_483_647, 'at most 2147483647'),
     /** The device's clock. */
@@ -46,7 +50,8 @@ export const readingInputSchema = z
     if ((reading.method === 'gauge') !== (reading.unit === 'gauge')) {
       fault('unit', reading.method === 'gauge' ? 'a gauge reads in its own units' : 'a tap is in Hz or cents')
     }
-    if (reading.unit === 'cents' && reading.targetHz === null) fault('targetHz', 'cents need the pitch they are counted from')
+    if (reading.unit === 'cents' && reading.targetHz === null)
+      fault('targetHz', 'cents need the pitch they are counted from')
     if (reading.strikes === reading.id) fault('strikes', 'a reading cannot strike itself')
   })
 export type ReadingInput = z.infer<typeof readingInputSchema>
@@ -60,7 +65,8 @@ export const addReadingsSchema = z.object({
       const seen = { id: new Set<string>(), number: new Set<string>(), strikes: new Set<string>() }
       const once = (kind: keyof typeof seen, key: string | null, index: number, field: string) => {
         if (key === null) return
-        if (seen[kind].has(key)) context.addIssue({ code: 'custom', path: [index, field], message: 'stands twice in this request' })
+        if (seen[kind].has(key))
+          context.addIssue({ code: 'custom', path: [index, field], message: 'stands twice in this request' })
         seen[kind].add(key)
       }
       readings.forEach((reading, index) => {

@@ -11,7 +11,9 @@ const read = (unit: Reading['unit'], values: readonly number[]): Reading[] =>
 
 describe('outWords', () => {
   const taps = (values: readonly number[]) =>
-    outWords(headState({ readings: read('cents', values), basis: 'tap', lugs: values.length, targetHz: 250, tolerance: 6 }))
+    outWords(
+      headState({ readings: read('cents', values), basis: 'tap', lugs: values.length, targetHz: 250, tolerance: 6 }),
+    )
 
   it('names each lug that is out, the low ones first, with how far', () => {
     expect(taps([0, -12, 3, 0, -9, 14])).toBe('Lugs 2 and 5 are low by 12 and 9 cents; lug 6 is high by 14 cents')
@@ -26,12 +28,19 @@ describe('outWords', () => {
   it('speaks of gauge readings against their own mean, in tenths', () => {
     // Mean 75.5; the last stands 2.5 over it, the others within 1.
     const readings = read('gauge', [74.5, 75, 74.5, 78])
-    expect(outWords(headState({ readings, basis: 'gauge', lugs: 4, tolerance: 1 }))).toBe('Lug 4 is high by 2.5 on the gauge')
+    expect(outWords(headState({ readings, basis: 'gauge', lugs: 4, tolerance: 1 }))).toBe(
+      'Lug 4 is high by 2.5 on the gauge',
+    )
   })
 })
 
 describe('listed', () => {
   it('joins words as they are read out', () => {
-    expect([listed([]), listed(['2']), listed(['2', '5']), listed(['1', '2', '5'])]).toEqual(['', '2', '2 and 5', '1, 2 and 5'])
+    expect([listed([]), listed(['2']), listed(['2', '5']), listed(['1', '2', '5'])]).toEqual([
+      '',
+      '2',
+      '2 and 5',
+      '1, 2 and 5',
+    ])
   })
 })

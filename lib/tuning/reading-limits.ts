@@ -8,12 +8,16 @@ export const readingLimits = {
 } as const satisfies Record<ReadingUnit, { min: number; max: number; unit: string }>
 
 /** A reading as it was typed, with a comma or a point; or the sentence that says what is allowed. */
-export function parseReading(typed: string, unit: ReadingUnit): { value: number; fault: null } | { value: null; fault: string } {
+export function parseReading(
+  typed: string,
+  unit: ReadingUnit,
+): { value: number; fault: null } | { value: null; fault: string } {
   const { min, max, unit: word } = readingLimits[unit]
   const text = typed.trim().replace(',', '.').replace('−', '-')
   const value = /^[+-]?(\d+\.?\d*|\.\d+)$/.test(text) ? Number(text) : Number.NaN
   if (Number.isNaN(value)) return { value: null, fault: `Write a number, such as ${examples[unit]}.` }
-  if (value < min || value > max) return { value: null, fault: `${typed.trim()} cannot be: from ${min} to ${max} ${word}.` }
+  if (value < min || value > max)
+    return { value: null, fault: `${typed.trim()} cannot be: from ${min} to ${max} ${word}.` }
   return { value, fault: null }
 }
 

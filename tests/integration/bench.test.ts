@@ -15,7 +15,9 @@ import { baseUrl, stranger } from '../helpers/http-client'
 import { makeParty, type PartyFixture } from '../helpers/party-fixture'
 import { makeTour, type TourFixture, tomSpec } from '../helpers/tour-fixture'
 
-type Refusal = { error: { code: string; message: string; details: { fields?: Record<string, string>; reason?: string } } }
+type Refusal = {
+  error: { code: string; message: string; details: { fields?: Record<string, string>; reason?: string } }
+}
 const refusal = (answer: Answer) => (answer.body as Refusal).error
 const fields = (answer: Answer) => refusal(answer).details.fields
 
@@ -52,8 +54,23 @@ beforeEach(async () => {
 const read = (lug: number, value: number, more: Partial<ReadingInput> = {}): ReadingInput => {
   sequence += 1
   return {
-    ...{ id: randomUUID(), entryId: tour.tomId, side: 'batter', lug, value, unit: 'Hz', method: 'tap-typed', targetHz: 256 },
-    ...{ deviceId, deviceSequence: sequence, deviceAt: '2031-10-14T16:00:00.000Z', otherHead: 'damped', onStand: false },
+    ...{
+      id: randomUUID(),
+      entryId: tour.tomId,
+      side: 'batter',
+      lug,
+      value,
+      unit: 'Hz',
+      method: 'tap-typed',
+      targetHz: 256,
+    },
+    ...{
+      deviceId,
+      deviceSequence: sequence,
+      deviceAt: '2031-10-14T16:00:00.000Z',
+      otherHead: 'damped',
+      onStand: false,
+    },
     ...{ gauge: '', temperatureC: null, pass: 1, strikes: null, byName: 'Local hand' },
     ...more,
   }
@@ -66,7 +83,14 @@ describe('opening a bench', () => {
   it('shows the drums of the night with targets, lugs, tolerance and the noted gauge', async () => {
     const answer = await bench()
     expect(answer).toMatchObject({
-      show: { id: tour.showId, title: 'Test Hall', town: 'Arvic', date: '2031-10-14', zone: 'Europe/Paris', mustNotRetune: null },
+      show: {
+        id: tour.showId,
+        title: 'Test Hall',
+        town: 'Arvic',
+        date: '2031-10-14',
+        zone: 'Europe/Paris',
+        mustNotRetune: null,
+      },
       sheet: { number: 1, from: 'issued', newestNumber: 1 },
       drums: [{ entryId: tour.tomId, name: 'Tom 12', lugCount: 6, toleranceCents: 10, instead: null, missing: false }],
       ...{ readings: [], signOffs: [] },
@@ -85,23 +109,31 @@ describe('opening a bench', () => {
 
   it('holds nothing that is not the bench’s: no price, no contact, no other show', async () => {
     const text = JSON.stringify(await bench())
-    for (const secret of ['.example', 'House crew', 'Hire desk', 'Test Backline', tour.hireId, tour.contactId, 'EUR']) expect(text).not.toContain(secret)
+    for (const secret of ['.example', 'House crew', 'Hire desk', 'Test Backline', tour.hireId, tour.contactId, 'EUR'])
+      expect(text).not.toContain(secret)
   })
 
   it('changes nothing, however often it is opened', async () => {
-    const drums = () => db().select({ id: physicalDrum.id }).from(physicalDrum).where(eq(physicalDrum.partyId, party.partyId))
+    const drums = () =>
+      db().select({ id: physicalDrum.id }).from(physicalDrum).where(eq(physicalDrum.partyId, party.partyId))
     const before = (await drums()).length
     await bench()
     const page = await fetch(new URL(`/b/${token}`, baseUrl()))
     expect(page.status).toBe(200)
-    const rows = await db().select({ used: grantToken.lastUsedAt, uses: grantToken.useCount }).from(grantToken).where(eq(grantToken.tokenHash, hashToken(token)))
+    const rows = await db()
+      .select({ used: grantToken.lastUsedAt, uses: grantToken.useCount })
+      .from(grantToken)
+      .where(eq(grantToken.tokenHash, hashToken(token)))
     expect(rows).toEqual([{ used: null, uses: 0 }])
     expect(await drums()).toHaveLength(before)
     expect(await stored()).toEqual([])
   })
 
   it('takes the revision that was issued; a kit that changes later changes no sheet', async () => {
-    await db().update(kitEntry).set({ spec: { ...tomSpec, lugs: 8 } }).where(eq(kitEntry.id, tour.tomId))
+    await db()
+      .update(kitEntry)
+      .set({ spec: { ...tomSpec, lugs: 8 } })
+      .where(eq(kitEntry.id, tour.tomId))
     expect((await bench()).drums[0]?.lugCount).toBe(6)
     await issue(party, tour.rigId)
     expect(await bench()).toMatchObject({ sheet: { number: 2 }, drums: [{ lugCount: 8 }] })
@@ -117,7 +149,10 @@ describe('opening a bench', () => {
   })
 
   it('warns when the kit is shared and must stay as it is', async () => {
-    await db().update(show).set({ sharedKit: { owner: 'the festival', mayRetune: false, maySwap: '' } }).where(eq(show.id, tour.showId))
+    await db()
+      .update(show)
+      .set({ sharedKit: { owner: 'the festival', mayRetune: false, maySwap: '' } })
+      .where(eq(show.id, tour.showId))
     expect((await bench()).show.mustNotRetune).toBe('the festival')
   })
 
@@ -126,18 +161,31 @@ describe('opening a bench', () => {
     const line = await lineOf(tour.tomId)
     const what = { kind: 'drum', diameterIn: 13, depthIn: 9, lugs: 8, words: 'birch' }
     const answerId = randomUUID()
-    await db().insert(answerEvent).values({
-      ...{ id: answerId, partyId: party.partyId, hireId: tour.hireId, kind: 'answer', lineId: line.lineId, lineHash: line.hash },
-      ...{ revisionId: line.revisionId, content: { asAsked: 0, instead: [{ n: 1, what }], notYet: [], cant: 0 } },
-      ...{ byName: 'Hire desk', personId: party.tourManager.personId, takenFrom: 'Hire desk', takenHow: 'phone' },
-    })
+    await db()
+      .insert(answerEvent)
+      .values({
+        ...{
+          id: answerId,
+          partyId: party.partyId,
+          hireId: tour.hireId,
+          kind: 'answer',
+          lineId: line.lineId,
+          lineHash: line.hash,
+        },
+        ...{ revisionId: line.revisionId, content: { asAsked: 0, instead: [{ n: 1, what }], notYet: [], cant: 0 } },
+        ...{ byName: 'Hire desk', personId: party.tourManager.personId, takenFrom: 'Hire desk', takenHow: 'phone' },
+      })
     expect((await bench()).drums[0]).toMatchObject({ lugCount: 6, instead: null })
     await db().execute(
       `insert into settlement (id, party_id, hire_id, line_id, line_hash, answer_event_id, decision, person_id)
        values ('${randomUUID()}', '${party.partyId}', '${tour.hireId}', '${line.lineId}', '${line.hash}', '${answerId}', 'accept', '${party.tourManager.personId}')`,
     )
     const now = await bench()
-    expect(now.drums[0]).toMatchObject({ lugCount: 8, instead: { words: 'birch' }, heads: [{ note: { name: 'D3' } }, {}] })
+    expect(now.drums[0]).toMatchObject({
+      lugCount: 8,
+      instead: { words: 'birch' },
+      heads: [{ note: { name: 'D3' } }, {}],
+    })
     expect(now.readings).toEqual([])
     expect((await send([read(8, 240)])).status).toBe(200)
     expect((await bench()).readings.map(({ lug }) => lug)).toEqual([8])
@@ -160,17 +208,34 @@ describe('logging readings', () => {
     await send([read(2, 249)])
     const { readings } = await bench()
     expect(readings).toHaveLength(3)
-    expect(readings[0]).toMatchObject({ id: first.id, lug: 1, value: 251.5, unit: 'Hz', byName: 'Local hand', via: 'link', deviceAt: first.deviceAt })
+    expect(readings[0]).toMatchObject({
+      id: first.id,
+      lug: 1,
+      value: 251.5,
+      unit: 'Hz',
+      byName: 'Local hand',
+      via: 'link',
+      deviceAt: first.deviceAt,
+    })
     // The device's clock stands in 2031; the server's own stands beside it.
     expect(Math.abs(Date.parse(readings[0]?.serverAt ?? '') - Date.now())).toBeLessThan(60_000)
     expect(readings[1]).toMatchObject({ method: 'gauge', gauge: 'dial', targetHz: null })
     const rows = await stored()
     expect(new Set(rows.map(({ physicalDrumId }) => physicalDrumId)).size).toBe(1)
-    const drums = await db().select().from(physicalDrum).where(eq(physicalDrum.id, rows[0]?.physicalDrumId ?? ''))
+    const drums = await db()
+      .select()
+      .from(physicalDrum)
+      .where(eq(physicalDrum.id, rows[0]?.physicalDrumId ?? ''))
     expect(drums).toMatchObject([{ diameterIn: 12, depthIn: 8, lugs: 6, supplierId: tour.supplierId }])
-    const used = await db().select({ uses: grantToken.useCount }).from(grantToken).where(eq(grantToken.tokenHash, hashToken(token)))
+    const used = await db()
+      .select({ uses: grantToken.useCount })
+      .from(grantToken)
+      .where(eq(grantToken.tokenHash, hashToken(token)))
     expect(used).toEqual([{ uses: 2 }])
-    const trail = await db().select({ action: auditEvent.action }).from(auditEvent).where(eq(auditEvent.subjectId, tour.showId))
+    const trail = await db()
+      .select({ action: auditEvent.action })
+      .from(auditEvent)
+      .where(eq(auditEvent.subjectId, tour.showId))
     expect(trail.filter(({ action }) => action === 'bench.read')).toHaveLength(2)
   })
 
@@ -223,7 +288,10 @@ describe('logging readings', () => {
     const elsewhere = await makeTour(party)
     await issue(party, elsewhere.rigId)
     expect(fields(await send([read(1, 250, { entryId: elsewhere.tomId })]))).toHaveProperty(['readings.0.entryId'])
-    await db().update(kitEntry).set({ spec: { ...tomSpec, resonant: null } }).where(eq(kitEntry.id, tour.tomId))
+    await db()
+      .update(kitEntry)
+      .set({ spec: { ...tomSpec, resonant: null } })
+      .where(eq(kitEntry.id, tour.tomId))
     await issue(party, tour.rigId)
     expect(fields(await send([read(1, 250, { side: 'resonant' })]))).toHaveProperty(['readings.0.side'])
     expect(await stored()).toEqual([])
@@ -232,7 +300,9 @@ describe('logging readings', () => {
   it('refuses two of one id, two of one device number, none, and too many at once', async () => {
     const one = read(1, 250)
     expect(fields(await send([one, { ...read(2, 250), id: one.id }]))).toHaveProperty(['readings.1.id'])
-    expect(fields(await send([one, read(2, 250, { deviceSequence: one.deviceSequence })]))).toHaveProperty(['readings.1.deviceSequence'])
+    expect(fields(await send([one, read(2, 250, { deviceSequence: one.deviceSequence })]))).toHaveProperty([
+      'readings.1.deviceSequence',
+    ])
     expect(fields(await send([]))).toHaveProperty('readings')
     expect(fields(await send(Array.from({ length: 201 }, () => read(1, 250))))).toHaveProperty('readings')
     expect((await send([read(1, 250, { gauge: 'x'.repeat(300_000) })])).status).toBe(413)
@@ -245,7 +315,9 @@ describe('logging readings', () => {
   it('refuses a number and an id that other readings have', async () => {
     const one = read(1, 250)
     await send([one])
-    expect(fields(await send([read(2, 250, { deviceSequence: one.deviceSequence })]))).toHaveProperty(['readings.0.deviceSequence'])
+    expect(fields(await send([read(2, 250, { deviceSequence: one.deviceSequence })]))).toHaveProperty([
+      'readings.0.deviceSequence',
+    ])
     expect(fields(await send([{ ...one, value: 260 }]))).toHaveProperty(['readings.0.id'])
     expect((await stored()).map(({ value }) => value)).toEqual([250])
   })
@@ -288,10 +360,15 @@ describe('correcting a reading', () => {
     await send([batter, resonant])
     expect(fields(await send([read(1, 252, { strikes: resonant.id })]))).toHaveProperty(['readings.0.strikes'])
     expect((await send([read(1, 252, { strikes: batter.id })])).status).toBe(200)
-    expect(fields(await send([read(1, 253, { strikes: batter.id })]))).toEqual({ 'readings.0.strikes': 'this reading was struck already' })
+    expect(fields(await send([read(1, 253, { strikes: batter.id })]))).toEqual({
+      'readings.0.strikes': 'this reading was struck already',
+    })
     const two = [read(2, 250), read(2, 251)]
     await send(two)
-    const [first, second] = [read(2, 252, { strikes: two[0]?.id ?? null }), read(2, 253, { strikes: two[0]?.id ?? null })]
+    const [first, second] = [
+      read(2, 252, { strikes: two[0]?.id ?? null }),
+      read(2, 253, { strikes: two[0]?.id ?? null }),
+    ]
     expect(fields(await send([first, second]))).toHaveProperty(['readings.1.strikes'])
     const self = read(3, 250)
     expect(fields(await send([{ ...self, strikes: self.id }]))).toHaveProperty(['readings.0.strikes'])
@@ -301,7 +378,14 @@ describe('correcting a reading', () => {
 
 describe('signing off', () => {
   const sign = (more: Record<string, unknown> = {}, at = token) =>
-    stranger('POST', `/api/b/${at}/sign-offs`, { id: randomUUID(), entryId: tour.tomId, decision: 'signed', byName: 'Local hand', remark: '', ...more })
+    stranger('POST', `/api/b/${at}/sign-offs`, {
+      id: randomUUID(),
+      entryId: tour.tomId,
+      decision: 'signed',
+      byName: 'Local hand',
+      remark: '',
+      ...more,
+    })
 
   it('keeps name and remark, can be taken back, and the same request twice is one', async () => {
     const id = randomUUID()
@@ -313,7 +397,10 @@ describe('signing off', () => {
       { id, decision: 'signed', byName: 'Local hand', remark: 'new batter head' },
       { decision: 'taken-back' },
     ])
-    const trail = await db().select({ action: auditEvent.action }).from(auditEvent).where(eq(auditEvent.subjectId, tour.showId))
+    const trail = await db()
+      .select({ action: auditEvent.action })
+      .from(auditEvent)
+      .where(eq(auditEvent.subjectId, tour.showId))
     expect(trail.map(({ action }) => action)).toEqual(expect.arrayContaining(['bench.sign-off', 'bench.take-back']))
   })
 
@@ -338,7 +425,11 @@ describe('a bench link', () => {
     ['GET', `/api/b/${at}`, undefined],
     ['GET', `/api/b/${at}/live`, undefined],
     ['POST', `/api/b/${at}/readings`, { readings: [read(1, 250)] }],
-    ['POST', `/api/b/${at}/sign-offs`, { id: randomUUID(), entryId: tour.tomId, decision: 'signed', byName: 'x', remark: '' }],
+    [
+      'POST',
+      `/api/b/${at}/sign-offs`,
+      { id: randomUUID(), entryId: tour.tomId, decision: 'signed', byName: 'x', remark: '' },
+    ],
   ]
   const statuses = async (at: string) => {
     const got: number[] = []
@@ -347,13 +438,17 @@ describe('a bench link', () => {
   }
   const key = async (values: Partial<typeof grant.$inferInsert>) => {
     const [grantId, tokenId] = [randomUUID(), randomUUID()]
-    await db().insert(grant).values({
-      ...{ id: grantId, partyId: party.partyId, purpose: 'bench', showId: tour.showId, recipientName: 'Bench' },
-      ...{ createdBy: party.drumTech.personId, expiresAt: new Date(Date.now() + 60_000) },
-      ...values,
-    })
+    await db()
+      .insert(grant)
+      .values({
+        ...{ id: grantId, partyId: party.partyId, purpose: 'bench', showId: tour.showId, recipientName: 'Bench' },
+        ...{ createdBy: party.drumTech.personId, expiresAt: new Date(Date.now() + 60_000) },
+        ...values,
+      })
     const secret = linkToken('grant', tokenId)
-    await db().insert(grantToken).values({ id: tokenId, partyId: party.partyId, grantId, tokenHash: hashToken(secret), madeFor: 'print' })
+    await db()
+      .insert(grantToken)
+      .values({ id: tokenId, partyId: party.partyId, grantId, tokenHash: hashToken(secret), madeFor: 'print' })
     return secret
   }
 
@@ -368,7 +463,10 @@ describe('a bench link', () => {
   })
 
   it('says plainly that it was withdrawn or has run out, and takes nothing', async () => {
-    const [withdrawn, expired] = [await key({ withdrawnAt: new Date() }), await key({ expiresAt: new Date(Date.now() - 1000) })]
+    const [withdrawn, expired] = [
+      await key({ withdrawnAt: new Date() }),
+      await key({ expiresAt: new Date(Date.now() - 1000) }),
+    ]
     expect(await statuses(withdrawn)).toEqual([410, 410, 410, 410])
     expect(await statuses(expired)).toEqual([410, 410, 410, 410])
     expect(await (await fetch(new URL(`/b/${withdrawn}`, baseUrl()))).text()).toContain('was withdrawn')
@@ -407,13 +505,19 @@ describe('a bench link', () => {
 
   it('is withdrawn at its own show’s address, never a reply’s link there', async () => {
     const elsewhere = await makeTour(party)
-    const links = ((await party.viewer.call('GET', `/api/shows/${tour.showId}/bench-links`)).body as { links: BenchLink[] }).links
-    expect((await party.drumTech.call('DELETE', `/api/shows/${elsewhere.showId}/bench-links/${links[0]?.grantId}`)).status).toBe(404)
+    const links = (
+      (await party.viewer.call('GET', `/api/shows/${tour.showId}/bench-links`)).body as { links: BenchLink[] }
+    ).links
+    expect(
+      (await party.drumTech.call('DELETE', `/api/shows/${elsewhere.showId}/bench-links/${links[0]?.grantId}`)).status,
+    ).toBe(404)
     const replyId = randomUUID()
-    await db().insert(grant).values({
-      ...{ id: replyId, partyId: party.partyId, purpose: 'reply', showId: tour.showId, recipientName: 'House crew' },
-      ...{ createdBy: party.tourManager.personId, expiresAt: new Date(Date.now() + 60_000) },
-    })
+    await db()
+      .insert(grant)
+      .values({
+        ...{ id: replyId, partyId: party.partyId, purpose: 'reply', showId: tour.showId, recipientName: 'House crew' },
+        ...{ createdBy: party.tourManager.personId, expiresAt: new Date(Date.now() + 60_000) },
+      })
     expect((await party.drumTech.call('DELETE', `/api/shows/${tour.showId}/bench-links/${replyId}`)).status).toBe(404)
     expect((await stranger('GET', `/api/b/${token}`)).status).toBe(200)
   })
@@ -449,7 +553,7 @@ describe('the desk’s bench', () => {
     const reader = response.body?.pipeThrough(new TextDecoderStream()).getReader()
     if (!reader) throw new Error('no stream')
     const hear = async (wanted: string) => {
-      for (let text = ''; !text.includes(wanted); ) {
+      for (let text = ''; !text.includes(wanted);) {
         const { done, value } = await reader.read()
         if (done) throw new Error(`the stream ended without ${wanted}`)
         text += value

@@ -49,11 +49,19 @@ export async function addReadings(
     const fresh = input.readings.flatMap((reading, index) => (known.has(reading.id) ? [] : [{ reading, index }]))
     if (fresh.length > 0) {
       const sheet = await readNightSheet(tx, actor, show)
-      if (!sheet) throw new AppError('conflict', 'No revision was issued for this show yet, so there is no drum to read. Nothing was kept.')
+      if (!sheet)
+        throw new AppError(
+          'conflict',
+          'No revision was issued for this show yet, so there is no drum to read. Nothing was kept.',
+        )
       checkAgainstSheet(fresh, sheet, faults)
       await checkNumbers(tx, actor, fresh, faults)
       refuseAny(faults)
-      const drums = await physicalDrums(tx, actor, { showId: show.id, sheet, entryIds: fresh.map(({ reading }) => reading.entryId) })
+      const drums = await physicalDrums(tx, actor, {
+        showId: show.id,
+        sheet,
+        entryIds: fresh.map(({ reading }) => reading.entryId),
+      })
       await checkStrikes(tx, actor, { showId: show.id, fresh, drums }, faults)
       refuseAny(faults)
       const stored = await insertReadings(
@@ -80,7 +88,9 @@ type Fresh = readonly { readonly reading: ReadingInput; readonly index: number }
 function refuseAny(faults: Faults): void {
   const first = Object.entries(faults)[0]
   if (!first) return
-  throw new AppError('invalid', `Please check ${first[0]}: ${first[1]}. Nothing of this batch was kept.`, { details: { fields: faults } })
+  throw new AppError('invalid', `Please check ${first[0]}: ${first[1]}. Nothing of this batch was kept.`, {
+    details: { fields: faults },
+  })
 }
 
 function isSame(row: ReadingRow, reading: ReadingInput, showId: string): boolean {
@@ -104,13 +114,18 @@ function checkAgainstSheet(fresh: Fresh, sheet: NightSheet, faults: Faults): voi
   for (const { reading, index } of fresh) {
     const spec = drums.get(reading.entryId)?.spec
     if (!spec) faults[`readings.${index}.entryId`] = 'this drum is not on the sheet of this show'
-    else if (reading.side === 'resonant' && !spec.resonant) faults[`readings.${index}.side`] = 'this drum has no resonant head'
+    else if (reading.side === 'resonant' && !spec.resonant)
+      faults[`readings.${index}.side`] = 'this drum has no resonant head'
     else if (reading.lug > spec.lugs) faults[`readings.${index}.lug`] = `this head has ${spec.lugs} lugs`
   }
 }
 
 async function checkNumbers(tx: Db, actor: Actor, fresh: Fresh, faults: Faults): Promise<void> {
-  const taken = await findDeviceNumbers(tx, actor, fresh.map(({ reading }) => reading))
+  const taken = await findDeviceNumbers(
+    tx,
+    actor,
+    fresh.map(({ reading }) => reading),
+  )
   for (const { reading, index } of fresh) {
     if (taken.some((row) => row.deviceId === reading.deviceId && row.deviceSequence === reading.deviceSequence)) {
       faults[`readings.${index}.deviceSequence`] = 'another reading of this device has this number'
@@ -134,7 +149,10 @@ async function checkStrikes(
     const row = kept.get(reading.strikes)
     const before = fresh.find((other) => other.index < index && other.reading.id === reading.strikes)?.reading
     const sameHead = row
-      ? row.showId === showId && row.side === reading.side && row.kitEntryId === reading.entryId && row.physicalDrumId === drums.get(reading.entryId)
+      ? row.showId === showId &&
+        row.side === reading.side &&
+        row.kitEntryId === reading.entryId &&
+        row.physicalDrumId === drums.get(reading.entryId)
       : before?.side === reading.side && before.entryId === reading.entryId
     if (!sameHead) faults[field] = 'a correction strikes an earlier reading of the same head'
     else if (struck.has(reading.strikes)) faults[field] = 'this reading was struck already'
@@ -152,7 +170,8 @@ async function physicalDrums(
   for (const drum of sheet.drums.filter(({ id }) => entryIds.includes(id))) {
     const { diameterIn, depthIn, lugs } = drum.spec
     const same = there.find(
-      (row) => row.kitEntryId === drum.id && row.diameterIn === diameterIn && row.depthIn === depthIn && row.lugs === lugs,
+      (row) =>
+        row.kitEntryId === drum.id && row.diameterIn === diameterIn && row.depthIn === depthIn && row.lugs === lugs,
     )
     const physicalDrumId = same?.physicalDrumId ?? randomUUID()
     found.set(drum.id, physicalDrumId)
@@ -164,7 +183,12 @@ async function physicalDrums(
   return found
 }
 
-function readingRow(actor: Exclude<Actor, { kind: 'job' }>, showId: string, reading: ReadingInput, physicalDrumId: string) {
+function readingRow(
+  actor: Exclude<Actor, { kind: 'job' }>,
+  showId: string,
+  reading: ReadingInput,
+  physicalDrumId: string,
+) {
   const { entryId, deviceAt, strikes, byName, targetHz, ...same } = reading
   return {
     ...same,

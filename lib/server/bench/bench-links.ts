@@ -17,7 +17,13 @@ export async function listBenchLinks(actor: Actor, input: { showId: string }): P
     links: grants
       .filter(({ purpose }) => purpose === 'bench')
       .map((grant) => ({
-        ...{ grantId: grant.id, name: grant.recipientName, prints: grant.tokens, uses: grant.uses, lastUsedAt: grant.lastUsedAt },
+        ...{
+          grantId: grant.id,
+          name: grant.recipientName,
+          prints: grant.tokens,
+          uses: grant.uses,
+          lastUsedAt: grant.lastUsedAt,
+        },
         ...{ madeAt: grant.createdAt.toISOString(), expiresAt: grant.expiresAt.toISOString() },
         state: grant.withdrawnAt ? 'withdrawn' : grant.expiresAt.getTime() <= now ? 'expired' : 'works',
       })),
@@ -25,7 +31,10 @@ export async function listBenchLinks(actor: Actor, input: { showId: string }): P
 }
 
 /** Ends a bench link of this show, with every print of it. What was read through it stays. */
-export async function withdrawBenchLink(actor: Actor, input: { showId: string; grantId: string }): Promise<{ withdrawn: true }> {
+export async function withdrawBenchLink(
+  actor: Actor,
+  input: { showId: string; grantId: string },
+): Promise<{ withdrawn: true }> {
   assertCan(actor, 'link:withdraw')
   const found = await findGrant(db(), actor, input.grantId)
   if (found?.purpose !== 'bench' || found.showId !== input.showId) throw notThere('bench link')

@@ -26,7 +26,11 @@ export type NightSheet = {
 }
 
 /** The drums that are true for one show tonight: its revision with what was settled. Null while none was issued. */
-export async function readNightSheet(db: Db, scope: Scope, show: { id: string; rigId: string }): Promise<NightSheet | null> {
+export async function readNightSheet(
+  db: Db,
+  scope: Scope,
+  show: { id: string; rigId: string },
+): Promise<NightSheet | null> {
   const [sent, newest, hires] = await Promise.all([
     findLastSentRevision(db, scope, { of: { showId: show.id }, rigId: show.rigId }),
     findNewestRevision(db, scope, { rigId: show.rigId }),
@@ -56,8 +60,14 @@ async function lineStates(
   { showId, hireIds }: { showId: string; hireIds: readonly string[] },
 ): Promise<LineState[]> {
   const subjects = { showIds: [showId], hireIds }
-  const [events, decisions] = await Promise.all([listAnswerEvents(db, scope, subjects), listSettlements(db, scope, subjects)])
-  const statesOf = (audience: 'venue' | 'supplier', own: (row: { showId: string | null; hireId: string | null }) => boolean) =>
+  const [events, decisions] = await Promise.all([
+    listAnswerEvents(db, scope, subjects),
+    listSettlements(db, scope, subjects),
+  ])
+  const statesOf = (
+    audience: 'venue' | 'supplier',
+    own: (row: { showId: string | null; hireId: string | null }) => boolean,
+  ) =>
     deriveLineStates(
       document.lines
         .filter(({ content }) => isAskedOf(audience, content.supply, hireIds.length > 0))

@@ -14,7 +14,10 @@ import { benchSignOff } from './bench-answer'
 import { readNightSheet } from './read-night-sheet'
 
 /** Hands a drum over as tuned, by name, or takes that back. Nothing is ever rewritten: each adds one. */
-export async function signOffDrum(actor: Actor, input: { showId: string; signOff: SignOffInput }): Promise<BenchSignOff> {
+export async function signOffDrum(
+  actor: Actor,
+  input: { showId: string; signOff: SignOffInput },
+): Promise<BenchSignOff> {
   assertAtBench(actor, input.showId, 'bench:log')
   const { id, entryId, decision, remark } = input.signOff
   const byName = actor.kind === 'person' ? actor.name : input.signOff.byName
@@ -26,10 +29,12 @@ export async function signOffDrum(actor: Actor, input: { showId: string; signOff
     const there = await findSignOff(tx, actor, id)
     if (there) return sameSignOff(there, input)
     const sheet = await readNightSheet(tx, actor, show)
-    if (!sheet?.drums.some((drum) => drum.id === entryId)) throw fieldFault('entryId', 'this drum is not on the sheet of this show')
+    if (!sheet?.drums.some((drum) => drum.id === entryId))
+      throw fieldFault('entryId', 'this drum is not on the sheet of this show')
     if (decision === 'taken-back') {
       const last = (await listSignOffs(tx, actor, show.id)).findLast((row) => row.kitEntryId === entryId)
-      if (last?.decision !== 'signed') throw new AppError('conflict', 'This drum is not signed off. Nothing was changed.')
+      if (last?.decision !== 'signed')
+        throw new AppError('conflict', 'This drum is not signed off. Nothing was changed.')
     }
     const made = await insertSignOff(tx, actor, {
       ...{ id, showId: show.id, kitEntryId: entryId, decision, byName, remark },
@@ -37,7 +42,13 @@ export async function signOffDrum(actor: Actor, input: { showId: string; signOff
       personId: actor.kind === 'person' ? actor.personId : null,
     })
     const row = thereAlready(made ? await findSignOff(tx, actor, id) : undefined)
-    await audit(tx, actor, decision === 'signed' ? 'bench.sign-off' : 'bench.take-back', { type: 'show', id: show.id }, { entryId, name: byName })
+    await audit(
+      tx,
+      actor,
+      decision === 'signed' ? 'bench.sign-off' : 'bench.take-back',
+      { type: 'show', id: show.id },
+      { entryId, name: byName },
+    )
     await notifyLive(tx, actor.partyId, [`bench:${show.id}`])
     if (actor.kind === 'link') await countTokenUse(tx, actor, actor.tokenId)
     return benchSignOff(row)

@@ -8,7 +8,11 @@ import { defineRoute } from '@/lib/server/http/define-route'
 
 const params = z.object({ showId: idSchema })
 
-export const GET = defineRoute({ params, response: benchLinksSchema, handler: ({ actor, params }) => listBenchLinks(actor, params) })
+export const GET = defineRoute({
+  params,
+  response: benchLinksSchema,
+  handler: ({ actor, params }) => listBenchLinks(actor, params),
+})
 
 export const POST = defineRoute({
   params,
