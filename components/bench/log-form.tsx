@@ -41,11 +41,11 @@ export function LogForm(props: LogFormProps) {
   const [last, setLast] = useState<BenchReading | null>(null)
   const [correcting, setCorrecting] = useState<BenchReading | null>(null)
   const input = useRef<HTMLInputElement>(null)
-  const corrected = correcting ?? view.inPass.get(lug) ?? null
-  const at = corrected?.lug ?? lug
+  const at = correcting?.lug ?? lug
 
   function pick(next: number) {
-    setCorrecting(null)
+    // Only a lug that is picked is corrected: one that another phone reads meanwhile simply has two readings.
+    setCorrecting(view.inPass.get(next) ?? null)
     choose(next)
     setFault(null)
     input.current?.focus()
@@ -66,8 +66,8 @@ export function LogForm(props: LogFormProps) {
       method: readBy === 'gauge' ? 'gauge' : 'tap-typed',
       targetHz: readBy === 'gauge' ? null : (head.tap?.hz ?? null),
       ...circumstances,
-      pass: corrected?.pass ?? view.pass,
-      strikes: corrected?.id ?? null,
+      pass: correcting?.pass ?? view.pass,
+      strikes: correcting?.id ?? null,
       byName: name,
     })
     const after = headView(session.state().bench.readings, drum, head, { basis: view.basis, passFrom })
@@ -84,10 +84,10 @@ export function LogForm(props: LogFormProps) {
     <section aria-labelledby="log" className="space-y-3 border-y border-ink py-3">
       <div className="flex flex-wrap items-center justify-between gap-2">
         <h2 id="log" className="text-2xl">
-          {corrected ? `Correct lug ${at}` : `Lug ${at}`}
+          {correcting ? `Correct lug ${at}` : `Lug ${at}`}
         </h2>
         <p className="figures text-soft">
-          pass {corrected?.pass ?? view.pass}, {view.inPass.size} of {drum.lugCount} read
+          pass {correcting?.pass ?? view.pass}, {view.inPass.size} of {drum.lugCount} read
         </p>
       </div>
       <form onSubmit={log} noValidate className="space-y-3">
@@ -123,7 +123,7 @@ export function LogForm(props: LogFormProps) {
         <Field
           id="reading"
           label={
-            corrected ? `Lug ${at} reads ${readingWords(corrected)}; type what it should be` : `What lug ${at} reads`
+            correcting ? `Lug ${at} reads ${readingWords(correcting)}; type what it should be` : `What lug ${at} reads`
           }
           error={fault ?? undefined}
         >
@@ -141,7 +141,7 @@ export function LogForm(props: LogFormProps) {
           )}
         </Field>
         <Button type="submit" kind="primary" className="min-h-16 w-full text-lg">
-          {corrected
+          {correcting
             ? `Correct lug ${at}`
             : following === undefined
               ? `Keep lug ${at}, end of pass ${view.pass}`
@@ -170,7 +170,7 @@ export function LogForm(props: LogFormProps) {
       </LiveRegion>
       <LugButtons {...{ view, lug: at, pick }} />
       <div className="flex flex-wrap gap-2">
-        {corrected && (
+        {correcting && (
           <Button
             onClick={() => {
               setCorrecting(null)

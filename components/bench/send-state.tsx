@@ -23,6 +23,13 @@ function waitingWords(state: BenchState): string {
   return counted(state.waiting)
 }
 
+/** What waits and for what; a cause other than lost signal is told in the server's own words. */
+function waitWord(state: BenchState): string {
+  const signal = state.problem === 'No signal.'
+  if (state.waiting === 0) return state.problem ?? 'No signal.'
+  return signal ? `${waitingWords(state)} for signal.` : `${waitingWords(state)}. ${state.problem ?? ''}`
+}
+
 /** Whether what was logged has arrived; what has not, why, and what happens to it. */
 export function SendState({ state, retry, letGo, drums }: SendStateProps) {
   const { connection, waiting, problem, kept, refused } = state
@@ -31,11 +38,7 @@ export function SendState({ state, retry, letGo, drums }: SendStateProps) {
     <div className="space-y-2">
       <LiveRegion visible className="space-y-2">
         {lostSight && (
-          <Notice
-            kind="wait"
-            word={waiting > 0 ? `${waitingWords(state)} for signal.` : 'No signal.'}
-            action={<Button onClick={retry}>Try now</Button>}
-          >
+          <Notice kind="wait" word={waitWord(state)} action={<Button onClick={retry}>Try now</Button>}>
             {waiting > 0
               ? 'Kept on this device and sent by itself, once. Go on tuning.'
               : 'What others log is not seen for now. Go on tuning: what you log is kept here and sent later.'}

@@ -54,7 +54,6 @@ export function createBenchSession(input: {
   let kept = true
   let failures = 0
   let running = false
-  let pumping = false
   let batchSize = BATCH
   let inTurn: Promise<void> = Promise.resolve()
   let cancelRetry = () => undefined as void
@@ -88,23 +87,25 @@ export function createBenchSession(input: {
     if (connection === 'closed' || !running) return
     const wait = RETRY_MS[Math.min(failures, RETRY_MS.length - 1)] ?? 30_000
     failures += 1
-    cancelRetry = later(retry, wait)
+    cancelRetry = later(catchUp, wait)
   }
 
-  async function refresh() {
+  /** Brings in what others did, then sends what waits. */
+  async function refreshAndSend() {
     try {
       told = await server.read()
       failures = 0
-      if (!pumping) connection = 'sent'
+      connection = 'sent'
       problem = null
     } catch (error) {
       failed(error)
+      return changed()
     }
     changed()
+    await pump()
   }
 
   async function pump() {
-    pumping = true
     cancelRetry()
     try {
       for (
@@ -118,14 +119,14 @@ export function createBenchSession(input: {
         failures = 0
       }
       batchSize = BATCH
-      if (connection === 'sending') connection = 'sent'
-      problem = connection === 'sent' ? null : problem
+      if (connection === 'sending') {
+        connection = 'sent'
+        problem = null
+      }
     } catch (error) {
       failed(error)
-    } finally {
-      pumping = false
-      changed()
     }
+    changed()
   }
 
   async function send(batch: readonly QueuedItem[]) {
@@ -161,15 +162,12 @@ export function createBenchSession(input: {
         kept = queue.keep(item) && kept
   }
 
-  function retry() {
+  function sendNow() {
     if (running && connection !== 'closed') next(pump)
   }
 
-  /** Brings in what others did, then sends what waits: whichever comes first, nothing is shown twice. */
   function catchUp() {
-    if (!running) return
-    next(refresh)
-    retry()
+    if (running) next(refreshAndSend)
   }
 
   function listen() {
@@ -185,7 +183,7 @@ export function createBenchSession(input: {
   function add(item: QueuedItem) {
     kept = queue.keep(item) && kept
     changed()
-    retry()
+    sendNow()
   }
 
   return {
