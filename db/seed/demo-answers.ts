@@ -119,7 +119,9 @@ export async function makeAdvance(team: Team, today: string): Promise<void> {
     await send(team, venue, show(venue), revision)
   }
   for (const { key } of demoHires) {
-    await send(team, key, { hireId: demoHireId(key) }, key === 'Northline hire' ? full : demoRevisionId('fly rig', 1))
+    await send(team, key, { hireId: demoHireId(key) }, full)
+    // The second van serves both rigs.
+    if (key === 'Fjord Backline') await send(team, key, { hireId: demoHireId(key) }, demoRevisionId('fly rig', 1))
   }
   for (const venue of ['Harbour Hall', 'Kornhaus']) {
     const answered = await answer(team, venue, show(venue), 'Sif', asAsked, true)
@@ -137,8 +139,8 @@ export async function makeAdvance(team: Team, today: string): Promise<void> {
   await answer(team, 'Palais Est', show('Palais Est'), 'Basile', asAsked, true)
   await answer(
     team,
-    'Northline hire',
-    { hireId: demoHireId('Northline hire') },
+    'Northline',
+    { hireId: demoHireId('Northline') },
     'Runa',
     (line, index) => (index < 3 ? asAskedAnswer(line.count) : null),
     false,

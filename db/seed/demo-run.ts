@@ -113,7 +113,7 @@ export const demoShows: readonly DemoShow[] = [
 
 export const demoHires = [
   {
-    key: 'Northline hire',
+    key: 'Northline',
     town: 'Lisby',
     country: 'Denmark',
     zone: 'Europe/Copenhagen',

@@ -28,11 +28,11 @@ export async function makeSpec(team: Team): Promise<void> {
   }
   const full = demoRigId('full rig')
   await issueRevision(tech, { rigId: full, id: demoRevisionId('full rig', 1), note: 'First issue for the run.' })
-  await swapFloorTom(team)
+  await changeSpec(team)
   await issueRevision(tech, {
     rigId: full,
     id: demoRevisionId('full rig', 2),
-    note: 'The floor tom is now 16 across, 16 deep: the shallow one would not hold its note.',
+    note: 'The floor tom is now 16 across, 16 deep, since the shallow one would not hold its note; and the rug is a larger one.',
   })
   await issueRevision(tech, {
     rigId: demoRigId('fly rig'),
@@ -41,23 +41,23 @@ export async function makeSpec(team: Team): Promise<void> {
   })
 }
 
-async function swapFloorTom(team: Team): Promise<void> {
+/** What the second revision changes: a supplier's drum and a venue's rug. */
+async function changeSpec(team: Team): Promise<void> {
   const { entries } = await readKit(team['drum-tech'], { rigId: demoRigId('full rig'), removedToo: false })
-  const floor = entries.find((entry) => entry.id === demoEntryId('full rig', 'floor 16'))
-  if (floor?.kind !== 'drum' || floor.version > 1) return
-  const { kind, name, supply, count, remark, spec } = floor
-  await changeEntry(team['drum-tech'], {
-    entryId: floor.id,
-    version: floor.version,
-    entry: {
-      ...{ kind, name, supply, count, remark },
-      spec: {
-        ...spec,
-        depthIn: 16,
-        insteadOf: { diameterMinIn: 16, diameterMaxIn: 16, depthMinIn: 14, depthMaxIn: 16 },
-      },
-    },
-  })
+  for (const row of entries) {
+    if (row.version > 1) continue
+    const { id: entryId, rigId: _rig, position: _position, removed: _removed, version, ...entry } = row
+    if (entry.kind === 'drum' && entryId === demoEntryId('full rig', 'floor 16')) {
+      const insteadOf = { diameterMinIn: 16, diameterMaxIn: 16, depthMinIn: 14, depthMaxIn: 16 }
+      await changeEntry(team['drum-tech'], {
+        entryId,
+        version,
+        entry: { ...entry, spec: { ...entry.spec, depthIn: 16, insteadOf } },
+      })
+    } else if (entryId === demoEntryId('full rig', 'rug')) {
+      await changeEntry(team['drum-tech'], { entryId, version, entry: { ...entry, name: 'Rug, 2.4 by 2 m' } })
+    }
+  }
 }
 
 async function drawPlot(team: Team, rig: DemoRig): Promise<void> {
