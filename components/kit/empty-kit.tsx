@@ -11,7 +11,12 @@ import { WaitingForConnection } from './waiting-for-connection'
 /** What to do first in a kit that holds nothing. */
 export function EmptyKit({ rigId, mayEdit, others }: { rigId: string; mayEdit: boolean; others: ReactNode }) {
   const add = useAddSet(rigId)
-  if (!mayEdit) return <EmptyState title="Nothing in this kit yet">A drum tech adds the drums first. What is added shows here at once.</EmptyState>
+  if (!mayEdit)
+    return (
+      <EmptyState title="Nothing in this kit yet">
+        A drum tech adds the drums first. What is added shows here at once.
+      </EmptyState>
+    )
   return (
     <EmptyState
       title="Nothing in this kit yet"
@@ -29,8 +34,8 @@ export function EmptyKit({ rigId, mayEdit, others }: { rigId: string; mayEdit: b
       }
     >
       <p>
-        Start with the drums: a kick 22, a snare 14, toms 10 and 12 and a floor tom 16 in one step, each then changed as you
-        have it. The plot, the lines that venues answer and the tuning sheets all come from here.
+        Start with the drums: a kick 22, a snare 14, toms 10 and 12 and a floor tom 16 in one step, each then changed as
+        you have it. The plot, the lines that venues answer and the tuning sheets all come from here.
       </p>
       <WaitingForConnection busy={add.isPending} tries={add.failureCount} what="The five drums" />
       {add.isError && <Notice kind="error">{add.error.message}</Notice>}

@@ -13,7 +13,7 @@ export interface EntryActionsProps {
 /** What can be done with an entry. */
 export function EntryActions({ name, onUp, onDown, onEdit, onRemove }: EntryActionsProps) {
   return (
-    <div className="flex flex-wrap gap-2">
+    <div className="flex gap-1">
       <Button onClick={onEdit}>
         Edit<span className="sr-only"> {name}</span>
       </Button>

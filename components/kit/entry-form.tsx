@@ -82,7 +82,9 @@ export function EntryForm<Form extends FieldValues>(props: EntryFormProps<Form>)
           title="Not saved yet: please look at these"
           errors={submitCount > 0 ? errorList(errors) : []}
         />
-        {saving.said && Object.keys(errors).length === 0 && <Notice kind="error">{saving.said} What you typed is kept here.</Notice>}
+        {saving.said && Object.keys(errors).length === 0 && (
+          <Notice kind="error">{saving.said} What you typed is kept here.</Notice>
+        )}
         {clash && (
           <ClashNotice
             {...{ ...clash, reader, busy }}
@@ -131,14 +133,27 @@ function errorList(errors: FieldErrors, at: readonly string[] = []): { fieldId: 
     if (!error || typeof error !== 'object') return []
     const path = [...at, key]
     const message = (error as { message?: unknown }).message
-    if (typeof message === 'string') return [{ fieldId: fieldId(path.join('.')), message: `${pathWords(path)}: ${message}` }]
+    if (typeof message === 'string')
+      return [{ fieldId: fieldId(path.join('.')), message: `${pathWords(path)}: ${message}` }]
     return errorList(error as FieldErrors, path)
   })
 }
 
 const words: Record<string, string> = {
-  ...{ diameterIn: 'across', depthIn: 'deep', lugs: 'lugs', plyMils: 'plies', coatingGPerM2: 'coating', gauge: 'gauge' },
-  ...{ headRelationCents: 'resonant over batter', toleranceCents: 'even within', insteadOf: 'instead of', type: 'kind' },
+  ...{
+    diameterIn: 'across',
+    depthIn: 'deep',
+    lugs: 'lugs',
+    plyMils: 'plies',
+    coatingGPerM2: 'coating',
+    gauge: 'gauge',
+  },
+  ...{
+    headRelationCents: 'resonant over batter',
+    toleranceCents: 'even within',
+    insteadOf: 'instead of',
+    type: 'kind',
+  },
   ...{ diameterMinIn: 'across, from', diameterMaxIn: 'across, to', depthMinIn: 'deep, from', depthMaxIn: 'deep, to' },
   ...{ batter: 'batter head', resonant: 'resonant head', supply: 'brought by', count: 'how many' },
 }

@@ -1,4 +1,12 @@
-import { cymbalSizeWords, cymbalTypeWord, drumRoleWord, drumSizeWords, headWords, rangeWords, typeWords } from '@/lib/advance/kit-words'
+import {
+  cymbalSizeWords,
+  cymbalTypeWord,
+  drumRoleWord,
+  drumSizeWords,
+  headWords,
+  rangeWords,
+  typeWords,
+} from '@/lib/advance/kit-words'
 import type { EntryInput, Head } from '@/lib/contracts/kit'
 import { supplyWords } from '@/lib/contracts/kit'
 import { noteText } from '@/lib/contracts/kit-form'

@@ -20,7 +20,12 @@ export function HeadFields({ path }: { path: 'spec.batter' | 'spec.resonant' }) 
   const { plyMils } = parsePlies(useWatch({ name: `${path}.plyMils` }) as string)
   return (
     <div className="grid grid-cols-2 gap-x-4 gap-y-3 sm:grid-cols-3">
-      <TextField path={`${path}.plyMils`} label="Plies" unit="mil" hint={plyMils ? micrometreWords(plyMils) : '10, or 7 + 7'} />
+      <TextField
+        path={`${path}.plyMils`}
+        label="Plies"
+        unit="mil"
+        hint={plyMils ? micrometreWords(plyMils) : '10, or 7 + 7'}
+      />
       <TextField path={`${path}.film`} label="Film" options={films} />
       <TextField path={`${path}.damping`} label="Damping" options={dampings} />
       <TextField path={`${path}.coatingGPerM2`} label="Coating adds" unit="g/m²" hint="0 if not known" />

@@ -17,7 +17,8 @@ export function HeadFigures({ side, head, figures, ported }: HeadFiguresProps) {
   return (
     <div className="min-w-0">
       <h4 className="text-sm font-bold">
-        {side === 'batter' ? 'Batter' : 'Resonant'} <span className="figures font-normal">{hertz(figures.noteHz)} Hz</span>
+        {side === 'batter' ? 'Batter' : 'Resonant'}{' '}
+        <span className="figures font-normal">{hertz(figures.noteHz)} Hz</span>
       </h4>
       {ported ? (
         <p className="text-sm text-soft">Ported: a head with a hole has no figure here.</p>

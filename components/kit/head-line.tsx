@@ -15,20 +15,20 @@ export interface HeadLineProps {
 /** One head of a drum in a list: what it is, its tap pitch with its interval, and the gauge as noted. */
 export function HeadLine({ side, head, figures, ported }: HeadLineProps) {
   return (
-    <div className="flex flex-wrap items-baseline gap-x-3">
-      <dt className="w-20 shrink-0 text-sm text-soft">{side}</dt>
-      <dd className="flex min-w-0 grow flex-wrap items-baseline justify-between gap-x-4">
-        <span>{head ? headWords(head) : 'no head'}</span>
-        {head && (
-          <span className="flex flex-wrap gap-x-4">
+    <div className="grid grid-cols-[4.75rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.75rem_minmax(0,1fr)_11.5rem_5rem]">
+      <dt className="text-sm text-soft">{side}</dt>
+      <dd>{head ? headWords(head) : 'no head'}</dd>
+      {head && (
+        <>
+          <dd className="max-sm:col-start-2">
             <TapWords figures={figures} ported={ported} />
-            <span className="w-24 text-right">
-              <span className="text-sm text-soft">gauge </span>
-              <span className="figures">{head.gauge ?? '–'}</span>
-            </span>
-          </span>
-        )}
-      </dd>
+          </dd>
+          <dd className="max-sm:col-start-2 sm:text-right">
+            <span className="text-sm text-soft">gauge </span>
+            <span className="figures">{head.gauge ?? '–'}</span>
+          </dd>
+        </>
+      )}
     </div>
   )
 }

@@ -16,7 +16,12 @@ export interface KitSectionProps {
   actionsOf: (entry: Entry, index: number) => ReactNode
 }
 
-const titles: Record<EntryKind, string> = { drum: 'Drums', cymbal: 'Cymbals', hardware: 'Hardware', microphone: 'Microphones' }
+const titles: Record<EntryKind, string> = {
+  drum: 'Drums',
+  cymbal: 'Cymbals',
+  hardware: 'Hardware',
+  microphone: 'Microphones',
+}
 const nothing: Record<EntryKind, string> = {
   drum: 'No drums yet. Add the first: the rest of the kit is named, placed and tuned by them.',
   cymbal: 'No cymbals yet. Add each size that is asked for.',

@@ -17,7 +17,14 @@ export interface NoteBeadProps {
   onMove: (semitones: number) => void
 }
 
-const keySteps: Record<string, number> = { ArrowRight: 1, ArrowUp: 1, ArrowLeft: -1, ArrowDown: -1, PageUp: 12, PageDown: -12 }
+const keySteps: Record<string, number> = {
+  ArrowRight: 1,
+  ArrowUp: 1,
+  ArrowLeft: -1,
+  ArrowDown: -1,
+  PageUp: 12,
+  PageDown: -12,
+}
 
 /** A drum's note on its range: moved a semitone at a time by the arrow keys, or drawn along. */
 export function NoteBead({ scale, at, name, label, valueText, out, onMove }: NoteBeadProps) {

@@ -38,7 +38,9 @@ export function NoteChart({ drums, reader, stage, onMove }: NoteChartProps) {
     const steps = next && isTom(drum) && isTom(next) && at !== null && nextAt !== null
     const span = `playable ${noteName(Math.round(low), reader.locale)} to ${noteName(Math.round(high), reader.locale)}`
     const { note } = drum.spec
-    const said = note ? `${noteText(note, reader.locale)}, ${hertz(noteFrequencyHz(note, reader.referenceHz))} Hz` : 'no note yet'
+    const said = note
+      ? `${noteText(note, reader.locale)}, ${hertz(noteFrequencyHz(note, reader.referenceHz))} Hz`
+      : 'no note yet'
     return {
       ...{ id: drum.id, name: drum.name, low, middleLow, middleHigh, high },
       label: `${drum.name}: ${said}, ${span}`,

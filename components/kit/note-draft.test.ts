@@ -4,7 +4,12 @@ import { newDrum } from '@/lib/contracts/kit-defaults'
 import { NOTE_TEMPLATES } from '@/lib/tuning/note-template'
 import { drafted, inNoteOrder, judged, movedBy, notesToSet, planned } from './note-draft'
 
-const drum = (id: string, role: Parameters<typeof newDrum>[0], diameterIn: number, spec: Partial<DrumEntry['spec']> = {}): DrumEntry => {
+const drum = (
+  id: string,
+  role: Parameters<typeof newDrum>[0],
+  diameterIn: number,
+  spec: Partial<DrumEntry['spec']> = {},
+): DrumEntry => {
   const entry = newDrum(role, { diameterIn })
   return { ...entry, spec: { ...entry.spec, ...spec }, id, rigId: 'rig', position: 0, version: 3, removed: false }
 }

@@ -17,7 +17,10 @@ const roleOrder = { tom: 0, 'floor-tom': 0, kick: 1, snare: 2 }
 /** Toms from the smallest down, then kick and snare: as the notes fall. */
 export function inNoteOrder(drums: readonly DrumEntry[]): DrumEntry[] {
   return [...drums].sort(
-    (a, b) => roleOrder[a.spec.role] - roleOrder[b.spec.role] || a.spec.diameterIn - b.spec.diameterIn || a.position - b.position,
+    (a, b) =>
+      roleOrder[a.spec.role] - roleOrder[b.spec.role] ||
+      a.spec.diameterIn - b.spec.diameterIn ||
+      a.position - b.position,
   )
 }
 
@@ -42,7 +45,12 @@ function sameNote(a: Note | null, b: Note | null): boolean {
 export type Anchor = { drumId: string; note: Note }
 
 /** A note for every drum by a template from an anchor; locked drums of the draft keep theirs. @throws AcousticsError */
-export function planned(drums: readonly DrumEntry[], template: NoteTemplate, anchor: Anchor | null, stage: TuningStage): NoteDraft {
+export function planned(
+  drums: readonly DrumEntry[],
+  template: NoteTemplate,
+  anchor: Anchor | null,
+  stage: TuningStage,
+): NoteDraft {
   const plan = planNotes({
     ...{ template, drums: drums.map(({ id, spec }) => planDrumOf(id, spec)), ...given(stage) },
     ...(anchor ? { anchor } : {}),
@@ -74,5 +82,8 @@ function settled({ semitone, cents }: Note): Note {
 }
 
 function given({ referenceHz, temperatureC }: TuningStage) {
-  return { ...(referenceHz === undefined ? {} : { referenceHz }), ...(temperatureC === undefined ? {} : { temperatureC }) }
+  return {
+    ...(referenceHz === undefined ? {} : { referenceHz }),
+    ...(temperatureC === undefined ? {} : { temperatureC }),
+  }
 }

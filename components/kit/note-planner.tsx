@@ -38,7 +38,10 @@ export function NotePlanner({ rigId, initial, reader, mayEdit, kitHref }: NotePl
   const [typedC, setTypedC] = useState('')
   const set = useSetNotes(rigId)
   const temperature = readTemperature(typedC)
-  const stage = { referenceHz: reader.referenceHz, ...(temperature.value === null ? {} : { temperatureC: temperature.value }) }
+  const stage = {
+    referenceHz: reader.referenceHz,
+    ...(temperature.value === null ? {} : { temperatureC: temperature.value }),
+  }
 
   if (inKit.length === 0) {
     return (
@@ -102,16 +105,19 @@ export function NotePlanner({ rigId, initial, reader, mayEdit, kitHref }: NotePl
               judgement={judgements.get(drum.id)}
               nameOf={(id) => drums.find((other) => other.id === id)?.name ?? 'another drum'}
               edit={
-                editing
-                  ? { move: (by) => move(drum, by), lock: (noteLocked) => change(drum, { noteLocked }) }
-                  : null
+                editing ? { move: (by) => move(drum, by), lock: (noteLocked) => change(drum, { noteLocked }) } : null
               }
             />
           )
         })}
       </ul>
       <div className="mt-4 max-w-56">
-        <Field label="Stage temperature" optional error={temperature.problem ?? undefined} hint="20 °C unless typed; only the figures follow it">
+        <Field
+          label="Stage temperature"
+          optional
+          error={temperature.problem ?? undefined}
+          hint="20 °C unless typed; only the figures follow it"
+        >
           {(control) => (
             <NumberInput {...control} unit="°C" value={typedC} onChange={(event) => setTypedC(event.target.value)} />
           )}
@@ -121,7 +127,9 @@ export function NotePlanner({ rigId, initial, reader, mayEdit, kitHref }: NotePl
         <div className="sticky bottom-0 z-20 mt-6 flex flex-col gap-2 border-t-2 border-ink bg-paper py-3">
           <WaitingForConnection busy={set.isPending} tries={set.failureCount} what="The plan" />
           {set.isError && !set.isPending && toSet.length > 0 && (
-            <Notice kind="error">{set.error.message} Your plan is kept here; the notes in the kit now stand beside it.</Notice>
+            <Notice kind="error">
+              {set.error.message} Your plan is kept here; the notes in the kit now stand beside it.
+            </Notice>
           )}
           <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
             <Button

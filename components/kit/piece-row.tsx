@@ -7,17 +7,23 @@ import type { KitReader } from './kit-reader'
 /** A cymbal, a piece of hardware or a microphone in the list of the kit. */
 export function PieceRow({ entry, reader, actions }: { entry: Entry; reader: KitReader; actions: ReactNode }) {
   return (
-    <div className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 gap-y-1 py-1.5 lg:grid-cols-[minmax(10rem,1fr)_minmax(12rem,1.4fr)_3rem_8rem_minmax(0,1fr)_auto]">
-      <h3 className="text-lg">{entry.name}</h3>
-      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{pieceWords(entry, reader)}</p>
-      <p className="figures text-right max-lg:col-start-2 max-lg:row-start-1">
-        <span aria-hidden>×</span>
-        <span className="sr-only">count </span>
+    <div className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 py-1.5 lg:grid-cols-[3rem_minmax(10rem,1fr)_minmax(12rem,1.4fr)_8rem_minmax(0,1fr)_auto]">
+      <p className="figures max-lg:hidden">
         {entry.count}
+        <span aria-hidden> ×</span>
       </p>
+      <h3 className="text-lg">
+        {entry.count > 1 && <span className="figures text-base font-normal lg:hidden">{entry.count} × </span>}
+        {entry.name}
+      </h3>
+      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{pieceWords(entry, reader)}</p>
       <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{supplyWords[entry.supply]}</p>
-      <p className="min-w-0 text-sm text-soft max-lg:col-start-1">{entry.remark}</p>
-      <div className="max-lg:col-span-2">{actions}</div>
+      {entry.remark ? (
+        <p className="min-w-0 text-sm text-soft max-lg:col-start-1">{entry.remark}</p>
+      ) : (
+        <span className="max-lg:hidden" />
+      )}
+      <div className="max-lg:col-start-2 max-lg:row-span-3 max-lg:row-start-1">{actions}</div>
     </div>
   )
 }

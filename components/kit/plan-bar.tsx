@@ -59,7 +59,10 @@ export function PlanBar({ toms, reader, onPlan }: PlanBarProps) {
           />
         )}
       </Field>
-      <Field label="From" hint={toms.length === 0 ? 'no toms: each drum in the middle of its range' : 'the anchor drum'}>
+      <Field
+        label="From"
+        hint={toms.length === 0 ? 'no toms: each drum in the middle of its range' : 'the anchor drum'}
+      >
         {(control) => (
           <Select
             {...control}

@@ -29,7 +29,9 @@ export interface PlannedDrumProps {
 export function PlannedDrum({ drum, was, judgement, reader, stage, nameOf, edit }: PlannedDrumProps) {
   const { spec } = drum
   const estimate = drumEstimate(spec, { ...stage, referenceHz: reader.referenceHz })
-  const warnings = judgement?.warnings.map((warning) => warningWords(warning, judgement.rangePosition.fraction > 0.5, nameOf))
+  const warnings = judgement?.warnings.map((warning) =>
+    warningWords(warning, judgement.rangePosition.fraction > 0.5, nameOf),
+  )
   const serious = judgement?.warnings.some(({ kind }) => kind !== 'off-middle')
   return (
     <li className="border-b border-line py-3">
@@ -46,7 +48,9 @@ export function PlannedDrum({ drum, was, judgement, reader, stage, nameOf, edit 
             <p className="text-soft">No note yet. Plan the notes above, or type one in the kit.</p>
           )}
           {warnings && warnings.length > 0 && (
-            <ul className={`mt-1 border-l-4 pl-2 text-sm ${serious ? 'border-spike text-spike-text' : 'border-brass text-brass'}`}>
+            <ul
+              className={`mt-1 border-l-4 pl-2 text-sm ${serious ? 'border-spike text-spike-text' : 'border-brass text-brass'}`}
+            >
               {warnings.map((words) => (
                 <li key={words}>{words}</li>
               ))}

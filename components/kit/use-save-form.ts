@@ -28,7 +28,11 @@ export function useSaveForm<Form extends FieldValues>(options: {
     setSaid(null)
     const { id } = target
     try {
-      onSaved(await save.mutateAsync(target.do === 'add' ? { do: 'add', id, entry } : { do: 'change', id, version: seen, entry }))
+      onSaved(
+        await save.mutateAsync(
+          target.do === 'add' ? { do: 'add', id, entry } : { do: 'change', id, version: seen, entry },
+        ),
+      )
     } catch (error) {
       if (!(error instanceof AppError)) throw error
       refused(error, entry)

@@ -16,8 +16,8 @@ export function WaitingForConnection({ busy, tries, what }: WaitingForConnection
       {waiting && (
         <>
           <strong className="mr-2 text-brass">No connection</strong>
-          {what} is kept here and sent again by itself, tried {tries === 1 ? 'once' : `${tries} times`} so far. Keep this page
-          open.
+          {what} is kept here and sent again by itself, tried {tries === 1 ? 'once' : `${tries} times`} so far. Keep
+          this page open.
         </>
       )}
     </LiveRegion>

@@ -6,7 +6,9 @@ import { figureWords } from './figure-words'
 
 /** Every figure of a drum with its formula, what went in, how far it can be trusted and where it comes from. */
 export function WhyTheseNumbers({ name, estimate, ported }: { name: string; estimate: DrumEstimate; ported: boolean }) {
-  const heads = [estimate.batter, ported ? null : estimate.resonant].filter((head): head is SideEstimate => head?.estimate != null)
+  const heads = [estimate.batter, ported ? null : estimate.resonant].filter(
+    (head): head is SideEstimate => head?.estimate != null,
+  )
   const [filmAndRods] = tuningCautions
   return (
     <details className="mt-2">
@@ -15,9 +17,9 @@ export function WhyTheseNumbers({ name, estimate, ported }: { name: string; esti
       </summary>
       <div className="mt-2 border-l-4 border-line pl-4">
         <p className="max-w-prose text-sm">
-          These are estimates of each head by itself in the open air. The air inside the shell and the pull of the other head are
-          not in the model yet: on a real shell the note of a head lies from 1 % under to 11 % over the figure, which is why tap
-          and tension stand with their bounds. A measured pitch is worth more than any of them.
+          These are estimates of each head by itself in the open air. The air inside the shell and the pull of the other
+          head are not in the model yet: on a real shell the note of a head lies from 1 % under to 11 % over the figure,
+          which is why tap and tension stand with their bounds. A measured pitch is worth more than any of them.
         </p>
         {heads.map((head) => (
           <section key={head.side} className="mt-3">
@@ -32,7 +34,8 @@ export function WhyTheseNumbers({ name, estimate, ported }: { name: string; esti
         {filmAndRods && (
           <p className="mt-3 max-w-prose border-l-4 border-brass pl-2 text-sm">
             <strong className="text-brass">{filmAndRods.name}. </strong>
-            {filmAndRods.words} Torque for one and the same pull scatters by 30 % or more: never bring a head up by torque.
+            {filmAndRods.words} Torque for one and the same pull scatters by 30 % or more: never bring a head up by
+            torque.
           </p>
         )}
       </div>

@@ -41,7 +41,18 @@ export function beadClasses(out: boolean): string {
 }
 
 /** A drum's playable range with its middle shaded and the note as a bead. A bead outside the range is square and spike. */
-export function RangeBar({ scale, low, high, middleLow, middleHigh, note, label, bead, ends, className }: RangeBarProps) {
+export function RangeBar({
+  scale,
+  low,
+  high,
+  middleLow,
+  middleHigh,
+  note,
+  label,
+  bead,
+  ends,
+  className,
+}: RangeBarProps) {
   const place = (from: number, to: number) => ({
     left: `${scalePercent(scale, from)}%`,
     width: `${round(scalePercent(scale, to) - scalePercent(scale, from))}%`,
@@ -54,11 +65,7 @@ export function RangeBar({ scale, low, high, middleLow, middleHigh, note, label,
         <div className="absolute inset-y-2 bg-reed/35" style={place(middleLow, middleHigh)} data-part="middle" />
         {bead}
         {note && !bead && (
-          <span
-            data-part="note"
-            className={beadClasses(out)}
-            style={{ left: `${scalePercent(scale, note.at)}%` }}
-          >
+          <span data-part="note" className={beadClasses(out)} style={{ left: `${scalePercent(scale, note.at)}%` }}>
             {note.name}
           </span>
         )}

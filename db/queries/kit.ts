@@ -26,7 +26,11 @@ const entriesOf = (rows: object[]) => rows as Entry[]
 const entryOf = (rows: object[]) => rows[0] as Entry | undefined
 
 /** In the order of the kit; taken-out entries too when asked for. */
-export async function listEntries(db: Db, scope: Scope, input: { rigId: string; removedToo: boolean }): Promise<Entry[]> {
+export async function listEntries(
+  db: Db,
+  scope: Scope,
+  input: { rigId: string; removedToo: boolean },
+): Promise<Entry[]> {
   const rows = await db
     .select(columns)
     .from(kitEntry)
@@ -56,9 +60,7 @@ export async function lockEntries(db: Db, scope: Scope, input: { rigId: string; 
   const rows = await db
     .select(columns)
     .from(kitEntry)
-    .where(
-      and(eq(kitEntry.partyId, scope.partyId), eq(kitEntry.rigId, input.rigId), inArray(kitEntry.id, input.ids)),
-    )
+    .where(and(eq(kitEntry.partyId, scope.partyId), eq(kitEntry.rigId, input.rigId), inArray(kitEntry.id, input.ids)))
     .orderBy(asc(kitEntry.id))
     .limit(input.ids.length)
     .for('update')
@@ -138,9 +140,7 @@ export async function placeEntries(db: Db, scope: Scope, input: { rigId: string;
   await db
     .update(kitEntry)
     .set({ position: sql`array_position(${sql.param(input.ids)}::uuid[], ${kitEntry.id}) - 1` })
-    .where(
-      and(eq(kitEntry.partyId, scope.partyId), eq(kitEntry.rigId, input.rigId), inArray(kitEntry.id, input.ids)),
-    )
+    .where(and(eq(kitEntry.partyId, scope.partyId), eq(kitEntry.rigId, input.rigId), inArray(kitEntry.id, input.ids)))
 }
 
 /** The party's other rigs that hold anything, newest tours first: what a kit can be copied from. */
@@ -150,10 +150,7 @@ export async function listKitSources(db: Db, scope: Scope, exceptRigId: string) 
     .select({ rigId: rig.id, rigName: rig.name, tourName: tour.name, entries })
     .from(rig)
     .innerJoin(tour, and(eq(tour.partyId, rig.partyId), eq(tour.id, rig.tourId)))
-    .innerJoin(
-      kitEntry,
-      and(eq(kitEntry.partyId, rig.partyId), eq(kitEntry.rigId, rig.id), isNull(kitEntry.removedAt)),
-    )
+    .innerJoin(kitEntry, and(eq(kitEntry.partyId, rig.partyId), eq(kitEntry.rigId, rig.id), isNull(kitEntry.removedAt)))
     .where(and(eq(rig.partyId, scope.partyId), sql`${rig.id} <> ${exceptRigId}`))
     .groupBy(rig.id, rig.name, rig.position, tour.name, tour.createdAt)
     .orderBy(sql`${tour.createdAt} desc`, asc(rig.position), asc(rig.name), asc(rig.id))

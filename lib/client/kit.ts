@@ -43,7 +43,11 @@ export function useSaveEntry(rigId: string) {
     const { id, entry } = save
     return save.do === 'add'
       ? callApi(`/api/rigs/${rigId}/kit/entries`, { method: 'POST', body: { id, entry }, response: entrySchema })
-      : callApi(`/api/kit-entries/${id}`, { method: 'PATCH', body: { version: save.version, entry }, response: entrySchema })
+      : callApi(`/api/kit-entries/${id}`, {
+          method: 'PATCH',
+          body: { version: save.version, entry },
+          response: entrySchema,
+        })
   })
 }
 

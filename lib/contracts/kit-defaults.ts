@@ -7,14 +7,25 @@ const onePly = (film: Head['film'], plyMil = 10): Head => ({
   ...{ plyMils: [plyMil], film, coatingGPerM2: 0, damping: 'none', gauge: null },
 })
 
-const roleDefaults: Record<DrumRole, Pick<DrumSpec, 'diameterIn' | 'depthIn' | 'lugs' | 'batter' | 'resonant' | 'ported'>> = {
+const roleDefaults: Record<
+  DrumRole,
+  Pick<DrumSpec, 'diameterIn' | 'depthIn' | 'lugs' | 'batter' | 'resonant' | 'ported'>
+> = {
   kick: {
     ...{ diameterIn: 22, depthIn: 16, lugs: 8, ported: true },
     batter: { ...onePly('clear'), damping: 'ring' },
     resonant: { ...onePly('other'), damping: 'ring' },
   },
-  snare: { ...{ diameterIn: 14, depthIn: 6.5, lugs: 10, ported: false }, batter: onePly('coated'), resonant: onePly('clear', 3) },
-  tom: { ...{ diameterIn: 12, depthIn: 8, lugs: 6, ported: false }, batter: onePly('coated'), resonant: onePly('clear') },
+  snare: {
+    ...{ diameterIn: 14, depthIn: 6.5, lugs: 10, ported: false },
+    batter: onePly('coated'),
+    resonant: onePly('clear', 3),
+  },
+  tom: {
+    ...{ diameterIn: 12, depthIn: 8, lugs: 6, ported: false },
+    batter: onePly('coated'),
+    resonant: onePly('clear'),
+  },
   'floor-tom': {
     ...{ diameterIn: 16, depthIn: 14, lugs: 8, ported: false },
     ...{ batter: onePly('coated'), resonant: onePly('clear') },
@@ -31,7 +42,8 @@ export function usualDrumName(role: DrumRole, diameterIn: number): string {
 const common = { supply: 'rented' as const, count: 1, remark: '' }
 
 export function newDrum(role: DrumRole, size: Partial<Pick<DrumSpec, 'diameterIn' | 'depthIn' | 'lugs'>> = {}) {
-  const usual = { ...roleDefaults[role], ...size }
+  // A copy: two drums must not share one head.
+  const usual = { ...structuredClone(roleDefaults[role]), ...size }
   return {
     ...{ kind: 'drum' as const, name: usualDrumName(role, usual.diameterIn), ...common, count: 1 as const },
     spec: {

@@ -15,7 +15,8 @@ const problems = (form: DrumForm, reader = english) => {
   const result = drumFormSchema(reader).safeParse(form)
   return Object.fromEntries(result.error?.issues.map((issue) => [issue.path.join('.'), issue.message]) ?? [])
 }
-const specOf = (form: DrumForm, reader = english) => (drumFormSchema(reader).parse(form) as Extract<EntryInput, { kind: 'drum' }>).spec
+const specOf = (form: DrumForm, reader = english) =>
+  (drumFormSchema(reader).parse(form) as Extract<EntryInput, { kind: 'drum' }>).spec
 
 describe('the form of a drum', () => {
   it('reads what is typed: sizes, plies, numbers, notes', () => {
@@ -102,7 +103,11 @@ describe('a typed note', () => {
   })
 
   it('reads again what it is shown as', () => {
-    for (const note of [{ semitone: 50, cents: 0 }, { semitone: 49, cents: -12.34 }, { semitone: 58, cents: 50 }]) {
+    for (const note of [
+      { semitone: 50, cents: 0 },
+      { semitone: 49, cents: -12.34 },
+      { semitone: 58, cents: 50 },
+    ]) {
       for (const locale of ['en', 'de', 'fr'] as const) {
         const value = noteValue(noteText(note, locale), { locale, referenceHz: 440 })
         const pitch = 'value' in value && value.value ? value.value.semitone + value.value.cents / 100 : null

@@ -13,7 +13,13 @@ import { entryInputSchema } from './kit'
  * A kit entry as a form holds it: everything typed is text, at the path where the contract has its value. The schemas
  * read the text and then ask the contract of the route, so that form and route say one thing.
  */
-export type HeadForm = { plyMils: string; film: Head['film']; coatingGPerM2: string; damping: Head['damping']; gauge: string }
+export type HeadForm = {
+  plyMils: string
+  film: Head['film']
+  coatingGPerM2: string
+  damping: Head['damping']
+  gauge: string
+}
 type CommonForm = { name: string; supply: EntryInput['supply']; count: string; remark: string }
 type DrumSpec = Extract<EntryInput, { kind: 'drum' }>['spec']
 type SizeRangeForm = { diameterMinIn: string; diameterMaxIn: string; depthMinIn: string; depthMaxIn: string }
@@ -55,7 +61,13 @@ export function drumFormSchema(reader: NoteReader): z.ZodType<EntryInput, DrumFo
     return {
       ...{ kind: form.kind, name: form.name, supply: form.supply, count: 1, remark: form.remark },
       spec: {
-        ...{ role: spec.role, shell: spec.shell, ported: spec.ported, noteLocked: spec.noteLocked, muffling: spec.muffling },
+        ...{
+          role: spec.role,
+          shell: spec.shell,
+          ported: spec.ported,
+          noteLocked: spec.noteLocked,
+          muffling: spec.muffling,
+        },
         diameterIn: size('spec.diameterIn', spec.diameterIn),
         depthIn: size('spec.depthIn', spec.depthIn),
         lugs: Number(spec.lugs),

@@ -60,7 +60,10 @@ export const drumSpecSchema = z.object({
   role: z.enum(drumRoles, 'choose what the drum is'),
   diameterIn: inches(6, 28),
   depthIn: inches(3, 24),
-  lugs: z.union(lugCounts.map((count) => z.literal(count)), 'choose 4, 5, 6, 8, 10 or 12 lugs a head'),
+  lugs: z.union(
+    lugCounts.map((count) => z.literal(count)),
+    'choose 4, 5, 6, 8, 10 or 12 lugs a head',
+  ),
   shell: z.string().trim().max(80, 'at most 80 characters'),
   ported: z.boolean(),
   batter: headSchema,
@@ -128,7 +131,12 @@ const common = {
 
 /** What a form holds and a route takes for one kit entry. */
 export const entryInputSchema = z.discriminatedUnion('kind', [
-  z.object({ ...common, kind: z.literal('drum'), count: z.literal(1, 'each drum is its own entry'), spec: drumSpecSchema }),
+  z.object({
+    ...common,
+    kind: z.literal('drum'),
+    count: z.literal(1, 'each drum is its own entry'),
+    spec: drumSpecSchema,
+  }),
   z.object({ ...common, kind: z.literal('cymbal'), spec: cymbalSpecSchema }),
   z.object({ ...common, kind: z.literal('hardware'), spec: hardwareSpecSchema }),
   z.object({ ...common, kind: z.literal('microphone'), spec: microphoneSpecSchema }),

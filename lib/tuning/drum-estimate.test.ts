@@ -83,6 +83,9 @@ describe('the playable range in notes', () => {
   })
 
   it('lies higher on the count when the party tunes to a lower reference', () => {
-    expect(playableRange(tom, { referenceHz: 415 }).low - playableRange(tom).low).toBeCloseTo(12 * Math.log2(440 / 415), 6)
+    expect(playableRange(tom, { referenceHz: 415 }).low - playableRange(tom).low).toBeCloseTo(
+      12 * Math.log2(440 / 415),
+      6,
+    )
   })
 })

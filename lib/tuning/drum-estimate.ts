@@ -34,9 +34,15 @@ export type SideEstimate = {
   /** Pitch wanted of this head alone, Hz. */
   readonly noteHz: number
   readonly input: HeadEstimateInput
-} & ({ readonly estimate: HeadEstimate; readonly refusal: null } | { readonly estimate: null; readonly refusal: string })
+} & (
+  { readonly estimate: HeadEstimate; readonly refusal: null } | { readonly estimate: null; readonly refusal: string }
+)
 
-export type DrumEstimate = { readonly noteHz: number; readonly batter: SideEstimate; readonly resonant: SideEstimate | null }
+export type DrumEstimate = {
+  readonly noteHz: number
+  readonly batter: SideEstimate
+  readonly resonant: SideEstimate | null
+}
 
 /** A head's film in SI units: plies in mil stay, the coating goes from g/m² to kg/m². */
 export function filmOf({ plyMils, coatingGPerM2 }: TradeHead) {
@@ -66,7 +72,13 @@ export function drumEstimate(drum: TradeDrum, stage: TuningStage = {}): DrumEsti
   }
 }
 
-function sideEstimate(drum: TradeDrum, side: HeadSide, head: TradeHead, noteHz: number, stage: TuningStage): SideEstimate {
+function sideEstimate(
+  drum: TradeDrum,
+  side: HeadSide,
+  head: TradeHead,
+  noteHz: number,
+  stage: TuningStage,
+): SideEstimate {
   const { role, lugs, diameterIn } = drum
   const input: HeadEstimateInput = {
     ...{ ...filmOf(head), diameterM: diameterIn * METRE_PER_INCH, noteHz, lugs, role, side },

@@ -14,7 +14,10 @@ export type PlayableRange = { low: number; middleLow: number; middleHigh: number
  * middle third the safe aim (common practice), as in `rangePosition`.
  * @throws AcousticsError whatever the head refuses
  */
-export function playableRange(drum: Pick<TradeDrum, 'role' | 'diameterIn' | 'batter'>, stage: TuningStage = {}): PlayableRange {
+export function playableRange(
+  drum: Pick<TradeDrum, 'role' | 'diameterIn' | 'batter'>,
+  stage: TuningStage = {},
+): PlayableRange {
   const { slackNPerM, chokedNPerM } = defaultTensionRange(drum.role)
   const head = {
     ...filmOf(drum.batter),
@@ -22,7 +25,10 @@ export function playableRange(drum: Pick<TradeDrum, 'role' | 'diameterIn' | 'bat
   }
   const pitchAt = (fraction: number) => {
     const tensionNPerM = slackNPerM * (chokedNPerM / slackNPerM) ** fraction
-    const { semitone, cents } = nearestNote(openAirModeHz(0, tensionNPerM, head), stage.referenceHz ?? STANDARD_REFERENCE_HZ)
+    const { semitone, cents } = nearestNote(
+      openAirModeHz(0, tensionNPerM, head),
+      stage.referenceHz ?? STANDARD_REFERENCE_HZ,
+    )
     return semitone + cents / 100
   }
   return { low: pitchAt(0), middleLow: pitchAt(1 / 3), middleHigh: pitchAt(2 / 3), high: pitchAt(1) }

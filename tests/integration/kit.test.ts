@@ -8,16 +8,34 @@ import { stranger } from '../helpers/http-client'
 import { makeParty, type PartyFixture } from '../helpers/party-fixture'
 import { makeTour, tomSpec, type TourFixture } from '../helpers/tour-fixture'
 
-type Row = { id: string; kind: string; name: string; version: number; removed: boolean; position: number; spec: Record<string, unknown> }
+type Row = {
+  id: string
+  kind: string
+  name: string
+  version: number
+  removed: boolean
+  position: number
+  spec: Record<string, unknown>
+}
 const rowOf = (answer: Answer) => answer.body as Row
 const rowsOf = (answer: Answer) => (answer.body as { entries: Row[] }).entries
 const errorOf = (answer: Answer) =>
-  (answer.body as { error: { code: string; message: string; details: { fields?: Record<string, string>; current?: unknown } } }).error
+  (
+    answer.body as {
+      error: { code: string; message: string; details: { fields?: Record<string, string>; current?: unknown } }
+    }
+  ).error
 const names = (answer: Answer) => rowsOf(answer).map(({ name }) => name)
 
 const common = { supply: 'rented', count: 1, remark: '' }
 const drum = (name: string, spec: object = {}) => ({ kind: 'drum', name, ...common, spec: { ...tomSpec, ...spec } })
-const mic = { kind: 'microphone', name: 'Clip-on', ...common, count: 3, spec: { type: 'clip-on', phantom: true, stand: 'clip' } }
+const mic = {
+  kind: 'microphone',
+  name: 'Clip-on',
+  ...common,
+  count: 3,
+  spec: { type: 'clip-on', phantom: true, stand: 'clip' },
+}
 
 describe('the kit of a rig', () => {
   let party: PartyFixture
@@ -45,7 +63,14 @@ describe('the kit of a rig', () => {
     const id = randomUUID()
     const made = await add(drum('Tom 10', { diameterIn: 10 }), id)
     expect(made.status).toBe(201)
-    expect(rowOf(made)).toMatchObject({ id, name: 'Tom 10', version: 1, removed: false, position: 2, spec: { diameterIn: 10 } })
+    expect(rowOf(made)).toMatchObject({
+      id,
+      name: 'Tom 10',
+      version: 1,
+      removed: false,
+      position: 2,
+      spec: { diameterIn: 10 },
+    })
     const again = await add(drum('Tom 10', { diameterIn: 10 }), id)
     expect(rowOf(again)).toEqual(rowOf(made))
     expect(rowOf(await add(mic))).toMatchObject({ kind: 'microphone', count: 3, position: 3 })
@@ -58,7 +83,12 @@ describe('the kit of a rig', () => {
     const answer = await add(drum('Mine'), theirs.tomId)
     expect([answer.status, errorOf(answer).code]).toEqual([409, 'conflict'])
     expect(JSON.stringify(answer.body)).not.toContain('Tom 12')
-    const set = await tech('POST', `${kit}/set`, { entries: [{ id: theirs.tomId, entry: mic }, { id: randomUUID(), entry: mic }] })
+    const set = await tech('POST', `${kit}/set`, {
+      entries: [
+        { id: theirs.tomId, entry: mic },
+        { id: randomUUID(), entry: mic },
+      ],
+    })
     expect(set.status).toBe(409)
     expect(names(await read())).toEqual(['Tom 12', 'Ride 21'])
     expect(names(await other.viewer.call('GET', `/api/rigs/${theirs.rigId}/kit`))).toEqual(['Tom 12', 'Ride 21'])
@@ -97,7 +127,11 @@ describe('the kit of a rig', () => {
       [drum('A', { note: { semitone: 11, cents: 0 } }), 'entry.spec.note.semitone', /at least C0/],
       [drum('A', { note: { semitone: 50.5, cents: 0 } }), 'entry.spec.note.semitone', /whole/],
       [drum('A', { note: { semitone: 50, cents: 51 } }), 'entry.spec.note.cents', /50/],
-      [drum('A', { insteadOf: { diameterMinIn: 13, diameterMaxIn: 12, depthMinIn: 7, depthMaxIn: 8 } }), 'entry.spec.insteadOf.diameterMaxIn', /narrowest/],
+      [
+        drum('A', { insteadOf: { diameterMinIn: 13, diameterMaxIn: 12, depthMinIn: 7, depthMaxIn: 8 } }),
+        'entry.spec.insteadOf.diameterMaxIn',
+        /narrowest/,
+      ],
       [{ ...mic, count: 0 }, 'entry.count', /at least 1/],
       [{ ...mic, count: 1.5 }, 'entry.count', /whole/],
       [{ ...mic, kind: 'cymbal' }, 'entry.spec.type', /choose a cymbal/],
@@ -105,18 +139,31 @@ describe('the kit of a rig', () => {
     ]
     for (const [entry, field, said] of cases) {
       const answer = await add(entry)
-      expect([answer.status, Object.keys(errorOf(answer).details.fields ?? {})[0]], JSON.stringify(entry).slice(0, 80)).toEqual([422, field])
+      expect(
+        [answer.status, Object.keys(errorOf(answer).details.fields ?? {})[0]],
+        JSON.stringify(entry).slice(0, 80),
+      ).toEqual([422, field])
       expect(errorOf(answer).details.fields?.[field]).toMatch(said)
     }
     expect((await tech('POST', `${kit}/entries`, 'not json {')).status).toBe(422)
     expect((await tech('POST', `${kit}/entries`, { entry: mic, pad: 'x'.repeat(300_000) })).status).toBe(413)
-    expect((await tech('POST', `${kit}/set`, { entries: [{ id: randomUUID(), entry: mic }, { id: 'no', entry: mic }] })).status).toBe(422)
+    expect(
+      (
+        await tech('POST', `${kit}/set`, {
+          entries: [
+            { id: randomUUID(), entry: mic },
+            { id: 'no', entry: mic },
+          ],
+        })
+      ).status,
+    ).toBe(422)
     expect((await tech('GET', `${kit}?removed=maybe`)).status).toBe(422)
     expect(names(await read())).toEqual(['Tom 12', 'Ride 21'])
   })
 
   describe('an entry', () => {
-    const change = (version: number, entry: object) => tech('PATCH', `/api/kit-entries/${tour.tomId}`, { version, entry })
+    const change = (version: number, entry: object) =>
+      tech('PATCH', `/api/kit-entries/${tour.tomId}`, { version, entry })
 
     it('changes by version; a stale change is refused with the row as it is, a repeated one is answered', async () => {
       const first = await change(1, drum('Tom 12', { depthIn: 7 }))
@@ -124,7 +171,10 @@ describe('the kit of a rig', () => {
       expect(rowOf(await change(1, drum('Tom 12', { depthIn: 7 })))).toEqual(rowOf(first))
       const stale = await change(1, drum('Tom 12', { depthIn: 9 }))
       expect(stale.status).toBe(409)
-      expect(errorOf(stale)).toMatchObject({ code: 'stale', details: { current: { version: 2, spec: { depthIn: 7 } } } })
+      expect(errorOf(stale)).toMatchObject({
+        code: 'stale',
+        details: { current: { version: 2, spec: { depthIn: 7 } } },
+      })
       const early = await change(3, drum('Tom 12', { depthIn: 9 }))
       expect(early.status).toBe(409)
       expect(rowsOf(await read())[0]).toMatchObject({ version: 2, spec: { depthIn: 7 } })
@@ -149,7 +199,9 @@ describe('the kit of a rig', () => {
       expect(rowOf(out)).toMatchObject({ removed: true, version: 2 })
       expect(rowOf(await tech('DELETE', path, { version: 1 }))).toEqual(rowOf(out))
       expect(names(await read())).toEqual(['Ride 21'])
-      expect(rowsOf(await party.viewer.call('GET', `${kit}?removed=true`)).map(({ name, removed }) => [name, removed])).toEqual([
+      expect(
+        rowsOf(await party.viewer.call('GET', `${kit}?removed=true`)).map(({ name, removed }) => [name, removed]),
+      ).toEqual([
         ['Tom 12', true],
         ['Ride 21', false],
       ])
@@ -177,7 +229,10 @@ describe('the kit of a rig', () => {
       const other = await makeTour(await makeParty())
       for (const entryIds of [[tour.tomId], [tour.tomId, tour.rideId, randomUUID()], [tour.tomId, other.tomId]]) {
         const answer = await tech('PUT', `${kit}/order`, { entryIds })
-        expect([answer.status, names({ ...answer, body: errorOf(answer).details.current })]).toEqual([409, ['Tom 12', 'Ride 21']])
+        expect([answer.status, names({ ...answer, body: errorOf(answer).details.current })]).toEqual([
+          409,
+          ['Tom 12', 'Ride 21'],
+        ])
       }
       const twice = await tech('PUT', `${kit}/order`, { entryIds: [tour.tomId, tour.tomId] })
       expect([twice.status, errorOf(twice).details.fields]).toEqual([422, { entryIds: 'each entry once' }])
@@ -224,9 +279,14 @@ describe('the kit of a rig', () => {
       expect(answer.status).toBe(200)
       const after = Object.fromEntries(rowsOf(answer).map((row) => [row.name, row]))
       expect(after['Floor 16']).toMatchObject({ version: 2, spec: { note: E2, noteLocked: true, diameterIn: 16 } })
-      expect(after['Tom 12']).toMatchObject({ version: 2, spec: { note: { semitone: 51, cents: -12 }, noteLocked: false } })
+      expect(after['Tom 12']).toMatchObject({
+        version: 2,
+        spec: { note: { semitone: 51, cents: -12 }, noteLocked: false },
+      })
       // The same request again, its answer lost on the way.
-      expect(rowsOf(await set(wanted)).map(({ version }) => version)).toEqual(rowsOf(answer).map(({ version }) => version))
+      expect(rowsOf(await set(wanted)).map(({ version }) => version)).toEqual(
+        rowsOf(answer).map(({ version }) => version),
+      )
     })
 
     it('are all left when one drum is not as it was seen', async () => {
@@ -238,7 +298,10 @@ describe('the kit of a rig', () => {
       ])
       expect([answer.status, errorOf(answer).code]).toEqual([409, 'stale'])
       expect(errorOf(answer).message).toContain('Tom 12')
-      expect(rowsOf({ ...answer, body: errorOf(answer).details.current })[2]).toMatchObject({ version: 1, spec: { note: null } })
+      expect(rowsOf({ ...answer, body: errorOf(answer).details.current })[2]).toMatchObject({
+        version: 1,
+        spec: { note: null },
+      })
       await tech('DELETE', `/api/kit-entries/${floor.id}`, { version: 1 })
       expect((await set([{ entryId: floor.id, version: 2, note: E2, noteLocked: false }])).status).toBe(409)
     })
@@ -249,10 +312,16 @@ describe('the kit of a rig', () => {
         [tour.rideId, 'notes.1.entryId'],
         [randomUUID(), 'notes.1.entryId'],
       ] as const) {
-        const answer = await set([{ entryId: tour.tomId, ...wanted }, { entryId, ...wanted }])
+        const answer = await set([
+          { entryId: tour.tomId, ...wanted },
+          { entryId, ...wanted },
+        ])
         expect([answer.status, Object.keys(errorOf(answer).details.fields ?? {})]).toEqual([422, [field]])
       }
-      const twice = await set([{ entryId: tour.tomId, ...wanted }, { entryId: tour.tomId, ...wanted }])
+      const twice = await set([
+        { entryId: tour.tomId, ...wanted },
+        { entryId: tour.tomId, ...wanted },
+      ])
       expect(errorOf(twice).details.fields).toEqual({ notes: 'each drum once' })
       const high = await set([{ entryId: tour.tomId, ...wanted, note: { semitone: 97, cents: 0 } }])
       expect(Object.keys(errorOf(high).details.fields ?? {})).toEqual(['notes.0.note.semitone'])
@@ -280,7 +349,12 @@ describe('the kit of a rig', () => {
       for (const member of [party.viewer, party.tourManager, party.owner])
         expect(await status(member.call), `${method} ${path}`).toBe(method === 'GET' ? 200 : 403)
     }
-    const foreign = await party.drumTech.call('PATCH', `/api/kit-entries/${tour.tomId}`, { version: 1, entry: drum('Mine') }, { 'sec-fetch-site': 'cross-site' })
+    const foreign = await party.drumTech.call(
+      'PATCH',
+      `/api/kit-entries/${tour.tomId}`,
+      { version: 1, entry: drum('Mine') },
+      { 'sec-fetch-site': 'cross-site' },
+    )
     expect(foreign.status).toBe(403)
     expect(rowsOf(await read())).toMatchObject([{ name: 'Tom 12', version: 1 }, { name: 'Ride 21' }])
   })
@@ -290,7 +364,11 @@ describe('the kit of a rig', () => {
     await add(mic, id)
     await add(mic, id)
     await tech('DELETE', `/api/kit-entries/${id}`, { version: 1 })
-    const events = await db().select().from(auditEvent).where(eq(auditEvent.partyId, party.partyId)).orderBy(asc(auditEvent.id))
+    const events = await db()
+      .select()
+      .from(auditEvent)
+      .where(eq(auditEvent.partyId, party.partyId))
+      .orderBy(asc(auditEvent.id))
     expect(events.map(({ action, actorId, subjectId }) => [action, actorId, subjectId])).toEqual([
       ['kit.added', party.drumTech.personId, id],
       ['kit.removed', party.drumTech.personId, id],

@@ -23,7 +23,13 @@ export async function createEntry(
     if (!(await lockRig(tx, actor, input.rigId))) throw noSuchRig()
     const made = await appendEntries(tx, actor, { rigId: input.rigId, entries: [{ id, entry: input.entry }] })
     for (const entry of made) {
-      await audit(tx, actor, 'kit.added', { type: 'kit-entry', id }, { rigId: input.rigId, entry: input.entry, name: entry.name })
+      await audit(
+        tx,
+        actor,
+        'kit.added',
+        { type: 'kit-entry', id },
+        { rigId: input.rigId, entry: input.entry, name: entry.name },
+      )
       await notifyKit(tx, actor, input.rigId)
     }
     const [there] = made.length > 0 ? made : await lockEntries(tx, actor, { rigId: input.rigId, ids: [id] })
@@ -61,7 +67,10 @@ export async function appendEntries(
   const fresh = input.entries.filter(({ id }) => !there.some((entry) => entry.id === id))
   const { standing, next } = await kitEnd(tx, scope, rigId)
   if (standing + fresh.length > kitLimit)
-    throw new AppError('conflict', `A kit holds at most ${kitLimit} entries and this one has ${standing}. Nothing was changed.`)
+    throw new AppError(
+      'conflict',
+      `A kit holds at most ${kitLimit} entries and this one has ${standing}. Nothing was changed.`,
+    )
   const made = await insertEntries(
     tx,
     scope,

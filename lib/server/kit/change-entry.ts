@@ -28,7 +28,13 @@ export async function changeEntry(
       if (alreadyDone(current, input)) return current
       throw staleEntry(current)
     }
-    await audit(tx, actor, 'kit.changed', { type: 'kit-entry', id: before.id }, { from: entryInputSchema.parse(before), to: input.entry })
+    await audit(
+      tx,
+      actor,
+      'kit.changed',
+      { type: 'kit-entry', id: before.id },
+      { from: entryInputSchema.parse(before), to: input.entry },
+    )
     await notifyKit(tx, actor, before.rigId)
     return changed
   })
@@ -60,7 +66,13 @@ async function mark(actor: Actor, input: { entryId: string; version: number; rem
       if (current.removed === removed && current.version === version + 1) return current
       throw staleEntry(current)
     }
-    await audit(tx, actor, removed ? 'kit.removed' : 'kit.restored', { type: 'kit-entry', id }, { name: marked.name, rigId: marked.rigId })
+    await audit(
+      tx,
+      actor,
+      removed ? 'kit.removed' : 'kit.restored',
+      { type: 'kit-entry', id },
+      { name: marked.name, rigId: marked.rigId },
+    )
     await notifyKit(tx, actor, marked.rigId)
     return marked
   })

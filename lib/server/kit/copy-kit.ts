@@ -22,7 +22,8 @@ export async function copyKit(actor: Actor, input: { rigId: string; copyId: stri
     if (fromRigId === rigId) throw refusedField('fromRigId', 'Choose another rig: this is the one to copy into')
     if (!(await findRigHead(tx, actor, fromRigId))) throw noSuchRig()
     const source = await listEntries(tx, actor, { rigId: fromRigId, removedToo: false })
-    if (source.length === 0) throw new AppError('conflict', 'That rig’s kit is empty. Nothing was changed; choose another.')
+    if (source.length === 0)
+      throw new AppError('conflict', 'That rig’s kit is empty. Nothing was changed; choose another.')
     const made = await appendEntries(tx, actor, {
       rigId,
       entries: source.map((entry) => ({ id: copiedId(copyId, entry.id), entry: entryInputSchema.parse(entry) })),
@@ -38,5 +39,7 @@ export async function copyKit(actor: Actor, input: { rigId: string; copyId: stri
 /** The id that one entry gets in one copy: the same both times when a request comes twice (RFC 9562, version 8). */
 function copiedId(copyId: string, entryId: string): string {
   const hex = createHash('sha256').update(`${copyId} ${entryId}`).digest('hex')
-  return [hex.slice(0, 8), hex.slice(8, 12), `8${hex.slice(13, 16)}`, `8${hex.slice(17, 20)}`, hex.slice(20, 32)].join('-')
+  return [hex.slice(0, 8), hex.slice(8, 12), `8${hex.slice(13, 16)}`, `8${hex.slice(17, 20)}`, hex.slice(20, 32)].join(
+    '-',
+  )
 }

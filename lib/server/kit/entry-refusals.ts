@@ -9,7 +9,9 @@ export function noSuchEntry(): AppError {
 
 /** Someone was there first: the row as it is now goes along, so that both values can be shown. */
 export function staleEntry(current: Entry): AppError {
-  const said = current.removed ? `${current.name} was taken out of the kit meanwhile` : `Someone changed ${current.name} meanwhile`
+  const said = current.removed
+    ? `${current.name} was taken out of the kit meanwhile`
+    : `Someone changed ${current.name} meanwhile`
   return new AppError('stale', `${said}. Nothing was changed; look at both and choose.`, { details: { current } })
 }
 

@@ -22,7 +22,13 @@ export async function orderEntries(actor: Actor, input: { rigId: string; entryId
         details: { current: { rigId, entries: before } },
       })
     await placeEntries(tx, actor, { rigId, ids: entryIds })
-    await audit(tx, actor, 'kit.ordered', { type: 'rig', id: rigId }, { from: before.map(({ id }) => id), to: entryIds })
+    await audit(
+      tx,
+      actor,
+      'kit.ordered',
+      { type: 'rig', id: rigId },
+      { from: before.map(({ id }) => id), to: entryIds },
+    )
     await notifyKit(tx, actor, rigId)
     return { rigId, entries: await listEntries(tx, actor, { rigId, removedToo: false }) }
   })

@@ -16,24 +16,24 @@ export async function readKit(actor: Actor, input: { rigId: string; removedToo: 
 }
 
 /**
- * What the kit page of a tour shows: the tour's rigs, the chosen one's kit (the first when none is named), what it can be
+ * What the kit page of a tour shows: the chosen rig's kit (the first when none is named), what it can be
  * copied from, and how this party writes notes and sizes.
  */
 export async function readKitPage(actor: Actor, input: { tourId: string; rigId: string | undefined }) {
   assertCan(actor, 'party:read')
   const tour = await findTour(db(), actor, input.tourId)
   if (!tour) throw new AppError('not-found', 'There is no such tour in this party.')
-  const rigs = (await listRigs(db(), actor, tour.id)).map(({ id, name }) => ({ id, name }))
+  const rigs = await listRigs(db(), actor, tour.id)
   const rig = input.rigId === undefined ? rigs[0] : rigs.find(({ id }) => id === input.rigId)
   if (input.rigId !== undefined && !rig) throw noSuchRig()
   const head = rig && (await findRigHead(db(), actor, rig.id))
-  if (!rig || !head) return { tour, rigs, rig: null }
+  if (!rig || !head) return { tour, rig: null }
   const { locale, units, referenceHz } = head.party
   return {
     tour,
-    rigs,
     rig: {
-      ...rig,
+      id: rig.id,
+      name: rig.name,
       reader: { locale, units, referenceHz },
       entries: await listEntries(db(), actor, { rigId: rig.id, removedToo: true }),
       sources: await listKitSources(db(), actor, rig.id),

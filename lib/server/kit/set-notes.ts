@@ -26,12 +26,17 @@ export async function setNotes(actor: Actor, input: { rigId: string } & SetNotes
     if (stale.length > 0 || pairs.some(({ drum }) => drum.removed)) {
       const current = stale.map(({ drum }) => drum)
       const names = pairs.filter(({ drum }) => drum.removed || current.includes(drum)).map(({ drum }) => drum.name)
-      throw new AppError('stale', `Someone changed ${names.join(', ')} meanwhile. No note was set; look at them again.`, {
-        details: { current: { rigId, entries: await listEntries(tx, actor, { rigId, removedToo: false }) } },
-      })
+      throw new AppError(
+        'stale',
+        `Someone changed ${names.join(', ')} meanwhile. No note was set; look at them again.`,
+        {
+          details: { current: { rigId, entries: await listEntries(tx, actor, { rigId, removedToo: false }) } },
+        },
+      )
     }
     const changes = pairs.filter(({ wanted, drum }) => !hasNote(drum, wanted))
-    for (const { wanted, drum } of changes) await updateEntry(tx, actor, { id: drum.id, version: drum.version, entry: noted(drum, wanted) })
+    for (const { wanted, drum } of changes)
+      await updateEntry(tx, actor, { id: drum.id, version: drum.version, entry: noted(drum, wanted) })
     if (changes.length > 0) {
       const detail = changes.map(({ wanted, drum }) => ({ id: drum.id, from: drum.spec.note, to: wanted.note }))
       await audit(tx, actor, 'kit.notes-set', { type: 'rig', id: rigId }, { notes: detail })

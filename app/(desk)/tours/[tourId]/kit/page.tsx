@@ -1,4 +1,5 @@
 import type { Metadata, Route } from 'next'
+import { notFound } from 'next/navigation'
 import { KitList } from '@/components/kit/kit-list'
 import { NotePlanner } from '@/components/kit/note-planner'
 import { EmptyState } from '@/components/ui/empty-state'
@@ -9,7 +10,6 @@ import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
 import { pageAnswer } from '@/lib/server/auth/page-answer'
 import { readKitPage } from '@/lib/server/kit/read-kit'
-import { notFound } from 'next/navigation'
 
 export const metadata: Metadata = { title: 'Kit' }
 
@@ -26,9 +26,7 @@ export default async function KitPage({ params, searchParams }: Props) {
   const rigId = idSchema.optional().safeParse(query['rig'])
   if (!tourId.success || !rigId.success) notFound()
   const view = query['view'] === 'notes' ? 'notes' : 'kit'
-  const { tour, rigs, rig } = await pageAnswer(readKitPage(actor, { tourId: tourId.data, rigId: rigId.data }))
-  const href = (rigTo: string, viewTo: 'kit' | 'notes') =>
-    `/tours/${tour.id}/kit?rig=${rigTo}${viewTo === 'notes' ? '&view=notes' : ''}` as Route
+  const { tour, rig } = await pageAnswer(readKitPage(actor, { tourId: tourId.data, rigId: rigId.data }))
   const mayEdit = rolesMay(actor.roles, 'kit:edit')
 
   if (!rig) {
@@ -43,6 +41,8 @@ export default async function KitPage({ params, searchParams }: Props) {
       </main>
     )
   }
+  const href = (to: 'kit' | 'notes') =>
+    `/tours/${tour.id}/kit?rig=${rig.id}${to === 'notes' ? '&view=notes' : ''}` as Route
   const reader = { ...rig.reader, locale: noteLocale(rig.reader.locale) }
   const shared = { rigId: rig.id, initial: rig.entries, reader, mayEdit }
   return (
@@ -51,26 +51,18 @@ export default async function KitPage({ params, searchParams }: Props) {
         <h1 className="text-4xl">
           {view === 'kit' ? 'Kit' : 'Notes'} <span className="text-soft">{rig.name}</span>
         </h1>
-        <div className="flex flex-wrap gap-x-8">
-          {rigs.length > 1 && (
-            <NavLinks
-              label="Rigs of this tour"
-              links={rigs.map(({ id, name }) => ({ href: href(id, view), label: name, current: id === rig.id }))}
-            />
-          )}
-          <NavLinks
-            label="This kit"
-            links={[
-              { href: href(rig.id, 'kit'), label: 'Kit', current: view === 'kit' },
-              { href: href(rig.id, 'notes'), label: 'Notes', current: view === 'notes' },
-            ]}
-          />
-        </div>
+        <NavLinks
+          label="This kit"
+          links={[
+            { href: href('kit'), label: 'Kit', current: view === 'kit' },
+            { href: href('notes'), label: 'Notes', current: view === 'notes' },
+          ]}
+        />
       </div>
       {view === 'kit' ? (
         <KitList key={rig.id} {...shared} sources={rig.sources} />
       ) : (
-        <NotePlanner key={rig.id} {...shared} kitHref={href(rig.id, 'kit')} />
+        <NotePlanner key={rig.id} {...shared} kitHref={href('kit')} />
       )}
     </main>
   )
