@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { classes } from '@/components/ui/classes'
+import { RadioGroup } from '@/components/ui/radio-group'
 import type { BenchSession } from '@/lib/client/bench/bench-session'
 import { GAUGE_TOLERANCE, basisOfHead, headStandingWords, headView, readingsOfHead } from '@/lib/client/bench/head-view'
 import type { HeadView } from '@/lib/client/bench/head-view'
@@ -46,28 +47,45 @@ export function HeadPage({ bench, drum, head, session, name, keepName }: HeadPag
       </header>
       <SharedKitNotice owner={bench.show.mustNotRetune} />
       <Sides drum={drum} open={head.side} />
+      <RadioGroup
+        legend="Read by"
+        legendHidden
+        name="read-by"
+        value={readBy}
+        onChange={(event) => {
+          keepBy(event.target.value)
+          setChosenLug(null)
+        }}
+        options={[
+          { value: 'Hz', label: 'tap, Hz' },
+          ...(head.tap ? [{ value: 'cents', label: 'tap, cents' }] : []),
+          { value: 'gauge', label: 'gauge' },
+        ]}
+      />
       <HeadTarget drum={drum} head={head} readBy={readBy} />
       {headCautionWords(head).map((words) => (
         <p key={words} className="border-l-4 border-brass bg-sheet px-3 py-2">
           <strong className="text-brass">Caution.</strong> {words}
         </p>
       ))}
-      <HeadTrace
-        drum={drum}
-        head={head}
-        view={view}
-        nowLug={lug}
-        centre={<Centre view={view} lugCount={drum.lugCount} />}
-      />
-      <HeadWords view={view} drum={drum} />
       <LogForm
-        {...{ drum, head, view, readBy, keepBy, session, name, lug, passFrom }}
+        key={readBy}
+        {...{ drum, head, view, readBy, session, name, lug, passFrom }}
         choose={setChosenLug}
         nextPass={() => {
           setPassFrom(view.pass + 1)
           setChosenLug(null)
         }}
-      />
+      >
+        <HeadTrace
+          drum={drum}
+          head={head}
+          view={view}
+          nowLug={lug}
+          centre={<Centre view={view} lugCount={drum.lugCount} />}
+        />
+        <HeadWords view={view} drum={drum} />
+      </LogForm>
       <p className="text-soft">{lugOneWords[head.side]}</p>
       <SignOffForm {...{ bench, drum, session, name, keepName }} />
       <BenchCautions />

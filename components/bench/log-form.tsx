@@ -1,5 +1,5 @@
 import { useRef, useState } from 'react'
-import type { FormEvent } from 'react'
+import type { FormEvent, ReactNode } from 'react'
 import { Button } from '@/components/ui/button'
 import { Field } from '@/components/ui/field'
 import { LiveRegion } from '@/components/ui/live-region'
@@ -20,20 +20,21 @@ export interface LogFormProps {
   head: BenchHead
   view: HeadView
   readBy: ReadingUnit
-  keepBy: (readBy: string) => void
   session: BenchSession
   name: string
   lug: number
   choose: (lug: number | null) => void
   passFrom: number
   nextPass: () => void
+  /** What is seen between the next reading and the lugs: the head itself. */
+  children: ReactNode
 }
 
 const unitWords: Record<ReadingUnit, string> = { Hz: 'Hz', cents: 'cents', gauge: 'gauge' }
 
 /** Types one reading after another round the head, in the lug order; a lug read before in this pass is corrected. */
 export function LogForm(props: LogFormProps) {
-  const { drum, head, view, readBy, keepBy, session, name, lug, choose, passFrom, nextPass } = props
+  const { drum, head, view, readBy, session, name, lug, choose, passFrom, nextPass, children } = props
   const [typed, setTyped] = useState('')
   const [fault, setFault] = useState<string | null>(null)
   const [side, setSide] = useState<'over' | 'under'>('under')
@@ -81,7 +82,7 @@ export function LogForm(props: LogFormProps) {
 
   const following = view.order.find((next) => next !== at && !view.inPass.has(next))
   return (
-    <section aria-labelledby="log" className="space-y-3 border-y border-ink py-3">
+    <section aria-labelledby="log" className="space-y-3 border-y border-ink pt-2 pb-3">
       <div className="flex flex-wrap items-center justify-between gap-2">
         <h2 id="log" className="text-2xl">
           {correcting ? `Correct lug ${at}` : `Lug ${at}`}
@@ -91,23 +92,6 @@ export function LogForm(props: LogFormProps) {
         </p>
       </div>
       <form onSubmit={log} noValidate className="space-y-3">
-        <RadioGroup
-          legend="Read by"
-          name="read-by"
-          value={readBy}
-          onChange={(event) => {
-            setCorrecting(null)
-            setLast(null)
-            setFault(null)
-            choose(null)
-            keepBy(event.target.value)
-          }}
-          options={[
-            { value: 'Hz', label: 'tap, Hz' },
-            ...(head.tap ? [{ value: 'cents', label: 'tap, cents' }] : []),
-            { value: 'gauge', label: 'gauge' },
-          ]}
-        />
         {readBy === 'cents' && (
           <RadioGroup
             legend="From the tap pitch"
@@ -159,6 +143,7 @@ export function LogForm(props: LogFormProps) {
                 kind="quiet"
                 onClick={() => {
                   setCorrecting(last)
+                  choose(last.lug)
                   input.current?.focus()
                 }}
               >
@@ -168,6 +153,7 @@ export function LogForm(props: LogFormProps) {
           </>
         )}
       </LiveRegion>
+      {children}
       <LugButtons {...{ view, lug: at, pick }} />
       <div className="flex flex-wrap gap-2">
         {correcting && (

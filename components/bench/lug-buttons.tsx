@@ -18,7 +18,7 @@ export function LugButtons({ view, lug, pick }: { view: HeadView; lug: number; p
             aria-pressed={now}
             onClick={() => pick(number)}
             className={classes(
-              'min-h-14 border px-1 py-1 leading-tight',
+              'min-h-14 border py-1 leading-tight whitespace-nowrap',
               now ? 'border-3 border-spike' : 'border-ink',
               view.inPass.has(number) ? 'bg-wash' : 'bg-transparent',
             )}
@@ -32,7 +32,7 @@ export function LugButtons({ view, lug, pick }: { view: HeadView; lug: number; p
                 </span>
               )}
             </span>
-            <span className="figures block text-sm text-soft">
+            <span className="figures block text-[0.8125rem] text-soft">
               {value === null
                 ? 'not read'
                 : view.basis === 'tap'

@@ -49,15 +49,19 @@ function watchHash(changed: () => void) {
   return () => window.removeEventListener('hashchange', changed)
 }
 
+let openHash = ''
+
+/** The last address after `#` that names a head or none: a jump to a place on the page (`#main`) changes no head. */
+function headHash(): string {
+  const hash = window.location.hash.slice(1)
+  if (hash === '' || /^[^/]+\/(batter|resonant)$/.test(hash)) openHash = hash
+  return openHash
+}
+
 /** Which head is open: the address after `#`, so that the back button works and nothing is fetched to change heads. */
-export function useOpenHead(): { entryId: string; side: 'batter' | 'resonant' } | null {
-  const hash = useSyncExternalStore(
-    watchHash,
-    () => window.location.hash,
-    () => '',
-  )
-  const [entryId, side] = hash.slice(1).split('/')
-  return entryId && (side === 'batter' || side === 'resonant') ? { entryId, side } : null
+export function useOpenHead(): { entryId: string; side: string } | null {
+  const [entryId, side] = useSyncExternalStore(watchHash, headHash, () => '').split('/')
+  return entryId && side ? { entryId, side } : null
 }
 
 /** A small choice that the device remembers from page to page. */

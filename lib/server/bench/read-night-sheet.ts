@@ -31,11 +31,10 @@ export async function readNightSheet(
   scope: Scope,
   show: { id: string; rigId: string },
 ): Promise<NightSheet | null> {
-  const [sent, newest, hires] = await Promise.all([
-    findLastSentRevision(db, scope, { of: { showId: show.id }, rigId: show.rigId }),
-    findNewestRevision(db, scope, { rigId: show.rigId }),
-    listHiresOfShow(db, scope, show.id),
-  ])
+  // One after another: a transaction has one connection.
+  const sent = await findLastSentRevision(db, scope, { of: { showId: show.id }, rigId: show.rigId })
+  const newest = await findNewestRevision(db, scope, { rigId: show.rigId })
+  const hires = await listHiresOfShow(db, scope, show.id)
   const used = sent ?? newest
   if (!used || !newest) return null
   const document = upgradeRevisionDocument(used.document)
@@ -60,10 +59,8 @@ async function lineStates(
   { showId, hireIds }: { showId: string; hireIds: readonly string[] },
 ): Promise<LineState[]> {
   const subjects = { showIds: [showId], hireIds }
-  const [events, decisions] = await Promise.all([
-    listAnswerEvents(db, scope, subjects),
-    listSettlements(db, scope, subjects),
-  ])
+  const events = await listAnswerEvents(db, scope, subjects)
+  const decisions = await listSettlements(db, scope, subjects)
   const statesOf = (
     audience: 'venue' | 'supplier',
     own: (row: { showId: string | null; hireId: string | null }) => boolean,
