@@ -132,9 +132,14 @@ export async function findRecipient(db: Db, scope: Scope, contactId: string) {
   return rows[0]
 }
 
+/** A line under the number that stands on paper. */
+export type NumberedLine = AnsweredLine & { readonly number: number }
+
 /** The lines of a pack that its reader is asked to answer. */
-const askedLines = sql<AnsweredLine[]>`coalesce((
-  select jsonb_agg(jsonb_build_object('lineId', asked->>'lineId', 'hash', asked->>'hash') order by (asked->>'number')::int)
+const askedLines = sql<NumberedLine[]>`coalesce((
+  select jsonb_agg(
+    jsonb_build_object('lineId', asked->>'lineId', 'hash', asked->>'hash', 'number', (asked->>'number')::int) order by (asked->>'number')::int
+  )
   from jsonb_array_elements(${pack.document}->'lines') asked
   where (asked->>'asked')::boolean
 ), '[]'::jsonb)`
@@ -205,6 +210,7 @@ export async function listNewestLines(db: Db, scope: Scope, rigIds: readonly str
       revisionNumber: newest.number,
       lineId: revisionLine.lineId,
       hash: revisionLine.hash,
+      number: revisionLine.position,
       supply: sql<'rented' | 'venue'>`${revisionLine.content}->>'supply'`,
     })
     .from(newest)

@@ -1,5 +1,4 @@
-import type { DispatchRow } from '@/db/queries/dispatch'
-import type { AnsweredLine } from '@/lib/advance/answer-state'
+import type { DispatchRow, NumberedLine } from '@/db/queries/dispatch'
 import { deriveLineStates } from '@/lib/advance/answer-state'
 import type { LineCounts, Standing } from '@/lib/advance/standing'
 import { countLines, mailFate, recipientStanding, urgentStanding } from '@/lib/advance/standing'
@@ -17,7 +16,7 @@ export function currentDispatches(dispatches: readonly DispatchRow[], rigIds: re
 }
 
 /** The lines that were sent, of all rigs. */
-export function sentLines(dispatches: readonly DispatchRow[], rigIds: readonly string[]): AnsweredLine[] {
+export function sentLines(dispatches: readonly DispatchRow[], rigIds: readonly string[]): NumberedLine[] {
   return currentDispatches(dispatches, rigIds).flatMap((row) => row.lines)
 }
 

@@ -1,10 +1,10 @@
 import type { Db, Scope } from '@/db/client'
 import type { Subjects } from '@/db/queries/answer'
 import { listAnswerEvents, listSettlements } from '@/db/queries/answer'
-import type { AdvancePlace, DispatchRow } from '@/db/queries/dispatch'
+import type { AdvancePlace, DispatchRow, NumberedLine } from '@/db/queries/dispatch'
 import { listAdvanceHires, listAdvanceShows, listDispatches, listNewestLines, listRecipients } from '@/db/queries/dispatch'
 import type { AnswerContent } from '@/lib/advance/answer'
-import type { AnsweredLine, Decision, SaidAnswer } from '@/lib/advance/answer-state'
+import type { Decision, SaidAnswer } from '@/lib/advance/answer-state'
 import type { MailFacts } from '@/lib/advance/standing'
 import { isAskedOf } from '@/lib/advance/standing'
 
@@ -23,7 +23,7 @@ export type SubjectFacts = {
   readonly decided: readonly Decision[]
   readonly closed: readonly { readonly byName: string; readonly at: string }[]
   /** What the newest revisions ask of it. */
-  readonly askedNow: readonly AnsweredLine[]
+  readonly askedNow: readonly NumberedLine[]
   readonly newestRevisionIds: readonly string[]
   readonly rigIds: readonly string[]
   readonly dueAt: string | null
@@ -58,7 +58,7 @@ export async function loadAdvance(db: Db, scope: Scope, place: AdvancePlace): Pr
       said: events.flatMap(saidAnswer),
       decided: settlements.filter(own).map(decisionOf),
       closed: events.filter((row) => row.kind === 'close').map((row) => ({ byName: row.byName, at: row.at.toISOString() })),
-      askedNow: lines.filter((line) => isAsked(line.supply)).map(({ lineId, hash }) => ({ lineId, hash })),
+      askedNow: lines.filter((line) => isAsked(line.supply)).map(({ lineId, hash, number }) => ({ lineId, hash, number })),
       newestRevisionIds: [...new Set(lines.map((line) => line.revisionId))],
       rigIds: subject.rigIds,
       dueAt: subject.answersDueAt?.toISOString() ?? null,

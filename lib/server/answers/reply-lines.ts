@@ -10,6 +10,7 @@ import { upgradePackDocument } from '@/lib/advance/pack-document'
 import type { ReplyLine } from '@/lib/contracts/answer'
 import type { LinkActor } from '@/lib/server/auth/actor'
 import { decisionOf, saidAnswer } from '@/lib/server/advance/load-advance'
+import { lineSize } from './line-size'
 
 /** What stands behind a reply link now: its packs, the lines its reader is asked to answer, and all that was said about them. */
 export async function loadReply(db: Db, actor: LinkActor) {
@@ -45,7 +46,7 @@ export async function replyLines(db: Db, scope: Scope, asked: readonly ReplyAske
     return [
       {
         ...shown(line),
-        size: now ? sizeOf(now) : null,
+        size: now ? lineSize(now) : null,
         state: state.state,
         answer: last ? { content: last.content, remark: last.remark, byName: last.byName } : null,
         changes: before && now ? lineDifferences(before, now, line.units) : [],
@@ -57,16 +58,4 @@ export async function replyLines(db: Db, scope: Scope, asked: readonly ReplyAske
 
 function shown({ lineId, hash, number, kind, count, words, details, insteadOf }: PackLine) {
   return { lineId, hash, number, kind, count, words, details: [...details], insteadOf }
-}
-
-function sizeOf(content: LineContent): ReplyLine['size'] {
-  switch (content.kind) {
-    case 'drum':
-      return { diameterIn: content.spec.diameterIn, depthIn: content.spec.depthIn, lugs: content.spec.lugs }
-    case 'cymbal':
-      return { diameterIn: content.spec.diameterIn, depthIn: null, lugs: null }
-    case 'hardware':
-    case 'microphone':
-      return null
-  }
 }

@@ -1,0 +1,31 @@
+import type { Metadata } from 'next'
+import { notFound } from 'next/navigation'
+import { AdvancePage } from '@/components/advance/advance-page'
+import { RefreshOnLive } from '@/lib/client/live-provider'
+import { idSchema } from '@/lib/contracts/common'
+import { rolesMay } from '@/lib/contracts/permissions'
+import { readAdvance } from '@/lib/server/advance/read-advance'
+import { pageActor } from '@/lib/server/auth/page-actor'
+import { pageAnswer } from '@/lib/server/auth/page-answer'
+
+export const metadata: Metadata = { title: 'Advance' }
+
+/** The advance of one hire; answers arrive while it is open. */
+export default async function HireAdvancePage({ params }: PageProps<'/tours/[tourId]/hires/[hireId]/advance'>) {
+  const { tourId, hireId } = await params
+  const actor = await pageActor()
+  if (!idSchema.safeParse(tourId).success || !idSchema.safeParse(hireId).success) notFound()
+  const view = await pageAnswer(readAdvance(actor, { tourId, of: { kind: 'hire', hireId } }))
+  return (
+    <>
+      <RefreshOnLive topics={[`advance:${hireId}`, `directory:${actor.partyId}`]} />
+      <AdvancePage
+        view={view}
+        maySend={rolesMay(actor.roles, 'advance:send')}
+        maySettle={rolesMay(actor.roles, 'answer:settle')}
+        mayTakeDown={rolesMay(actor.roles, 'answer:take-down')}
+        mayWithdraw={rolesMay(actor.roles, 'link:withdraw')}
+      />
+    </>
+  )
+}
