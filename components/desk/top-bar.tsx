@@ -8,6 +8,7 @@ import { NavLinks } from '@/components/ui/nav-links'
 import { ThemeToggle } from '@/components/ui/theme-toggle'
 import { showToast } from '@/components/ui/toast'
 import { switchParty } from '@/lib/client/account'
+import { loadPage } from '@/lib/client/load-page'
 import { signOutHere } from '@/lib/client/sign-in'
 import type { OwnParty } from '@/lib/contracts/party'
 
@@ -34,8 +35,7 @@ export function TopBar({ personName, party, parties }: TopBarProps) {
   const take = async (partyId: string) => {
     try {
       await switchParty(partyId)
-      // A whole load: nothing of the party before stays in the page's memory.
-      window.location.assign('/tours')
+      loadPage('/tours')
     } catch (error) {
       tell(error)
     }
@@ -47,42 +47,47 @@ export function TopBar({ personName, party, parties }: TopBarProps) {
         <Link href="/tours" className="name mr-2 flex min-h-control items-center text-xl">
           Hoopwright
         </Link>
-        <div className="mr-auto min-w-0 sm:mr-4">
-          <Menu
-            kind="quiet"
-            label={<span className="max-w-[9rem] truncate sm:max-w-64">{party?.name ?? 'No party yet'}</span>}
-            items={[
-              ...others.map((other) => ({
-                key: other.id,
-                label: `Go to ${other.name}`,
-                onSelect: () => void take(other.id),
-              })),
-              { key: 'new', label: 'Make another party', href: '/party/new' as Route },
-            ]}
-          />
-        </div>
+        {(party || others.length > 0) && (
+          // On a phone it fills the first row, so that the places and the person share the second.
+          <div className="-ml-2 min-w-0 grow basis-[calc(100%-8rem)] sm:grow-0 sm:basis-auto">
+            <Menu
+              kind="quiet"
+              label={<span className="max-w-44 truncate sm:max-w-64">{party?.name ?? 'Choose a party'}</span>}
+              items={[
+                ...others.map((other) => ({
+                  key: other.id,
+                  label: `Go to ${other.name}`,
+                  onSelect: () => void take(other.id),
+                })),
+                { key: 'new', label: 'Make another party', href: '/party/new' as Route },
+              ]}
+            />
+          </div>
+        )}
         {party && (
           <NavLinks
             label="Places"
-            className="order-last w-full sm:order-none sm:w-auto sm:grow"
+            className="sm:ml-2"
             links={places.map((place) => ({
               ...place,
               current: path === place.href || path.startsWith(`${place.href}/`),
             }))}
           />
         )}
-        <div className="hidden md:block">
+        <div className="ml-auto hidden md:block">
           <ThemeToggle />
         </div>
-        <Menu
-          kind="quiet"
-          align="end"
-          label={<span className="max-w-[6rem] truncate sm:max-w-48">{personName}</span>}
-          items={[
-            { key: 'you', label: 'Your devices and password', href: '/party/you' as Route },
-            { key: 'out', label: 'Sign out', onSelect: () => void signOutHere().catch(tell) },
-          ]}
-        />
+        <div className="-mr-4 ml-auto md:ml-0">
+          <Menu
+            kind="quiet"
+            align="end"
+            label={<span className="max-w-24 truncate sm:max-w-48">{personName}</span>}
+            items={[
+              { key: 'you', label: 'Your devices and password', href: '/party/you' as Route },
+              { key: 'out', label: 'Sign out', onSelect: () => void signOutHere().catch(tell) },
+            ]}
+          />
+        </div>
       </div>
     </header>
   )

@@ -3,6 +3,7 @@ import { acceptedInvitationSchema, doneSchema } from '@/lib/contracts/sign-in'
 import type { SignUp } from '@/lib/contracts/sign-in'
 import { AppError } from '@/lib/errors'
 import { callApi } from './http'
+import { loadPage } from './load-page'
 
 /** What went wrong at next-auth, as the code that the sign-in page has words for; undefined when nothing did. */
 async function throughNextAuth(provider: 'credentials' | 'email', fields: Record<string, string>): Promise<string | undefined> {
@@ -26,8 +27,7 @@ export function askForSignInLink(input: { email: string; next: string }): Promis
 /** Signs this device out and goes to the sign-in page, or to another page of ours. */
 export async function signOutHere(then = '/sign-in?said=out'): Promise<void> {
   await signOut({ callbackUrl: then, redirect: false })
-  // A whole load: nothing that was read while signed in stays in the page's memory.
-  window.location.assign(then)
+  loadPage(then)
 }
 
 export function signUp(input: SignUp) {

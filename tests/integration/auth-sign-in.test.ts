@@ -149,12 +149,12 @@ describe('signing in by a mailed link', () => {
     const sent = await latestMailTo(email, 'sign-in')
     const query = new URLSearchParams({ email, token: sent?.link.searchParams.get('token') ?? '' })
     const path = `/api/auth/callback/email?${query}`
-    const strange: Record<string, string>[] = [{ origin: 'https://elsewhere.example' }, { 'sec-fetch-site': 'cross-site' }]
+    const strange: Record<string, string>[] = [{ origin: 'https://elsewhere.example' }, { 'sec-fetch-site': 'cross-site' }, { origin: 'null' }]
     for (const headers of strange) {
       expect((await jar.send('POST', path, { form: {}, headers })).status).toBe(403)
     }
     expect(await signedIn(jar)).toBe(false)
-    await jar.send('POST', path, { form: {} })
+    await jar.send('POST', path, { form: {}, headers: { origin: 'null', 'sec-fetch-site': 'same-origin' } })
     expect(await signedIn(jar)).toBe(true)
   })
 

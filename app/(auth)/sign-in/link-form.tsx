@@ -28,9 +28,9 @@ export function LinkForm({ next }: { next: string }) {
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4" aria-label="Have a sign-in link mailed">
+    <form noValidate onSubmit={submit} className="flex flex-col gap-4" aria-label="Sign in by a mailed link">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
-      <Field label="E-mail for the link" error={errors.email?.message}>
+      <Field label="Mail address for the link" error={errors.email?.message}>
         {(control) => (
           <TextInput {...control} {...form.register('email')} type="email" autoComplete="email" />
         )}

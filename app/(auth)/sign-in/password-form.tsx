@@ -8,6 +8,7 @@ import { Field } from '@/components/ui/field'
 import { Notice } from '@/components/ui/notice'
 import { TextInput } from '@/components/ui/text-input'
 import { showRefusal } from '@/lib/client/form-refusal'
+import { loadPage } from '@/lib/client/load-page'
 import { signInWithPassword } from '@/lib/client/sign-in'
 import { signInSchema } from '@/lib/contracts/sign-in'
 import { signInError } from './sign-in-words'
@@ -20,15 +21,14 @@ export function PasswordForm({ next }: { next: string }) {
     try {
       const code = await signInWithPassword(input)
       if (code) return form.setError('root', { message: signInError(code) })
-      // A whole load, so that every part of the page is read with the new session.
-      window.location.assign(next)
+      loadPage(next)
     } catch (error) {
       showRefusal(form, error)
     }
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4" aria-label="Sign in with a password">
+    <form noValidate onSubmit={submit} className="flex flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <Field label="E-mail" error={errors.email?.message}>
         {(control) => (

@@ -3,6 +3,7 @@
 import { useState } from 'react'
 import { Button } from '@/components/ui/button'
 import { Notice } from '@/components/ui/notice'
+import { loadPage } from '@/lib/client/load-page'
 import { acceptInvitation } from '@/lib/client/sign-in'
 
 export function JoinButton({ token, partyName }: { token: string; partyName: string }) {
@@ -14,7 +15,7 @@ export function JoinButton({ token, partyName }: { token: string; partyName: str
     setRefusal(null)
     try {
       await acceptInvitation({ token })
-      window.location.assign('/tours')
+      loadPage('/tours')
     } catch (error) {
       setBusy(false)
       setRefusal(error instanceof Error ? error.message : String(error))

@@ -8,6 +8,7 @@ import { Field } from '@/components/ui/field'
 import { Notice } from '@/components/ui/notice'
 import { TextInput } from '@/components/ui/text-input'
 import { showRefusal } from '@/lib/client/form-refusal'
+import { loadPage } from '@/lib/client/load-page'
 import { acceptInvitation, signInWithPassword } from '@/lib/client/sign-in'
 import { nameSchema } from '@/lib/contracts/common'
 import { newPasswordSchema } from '@/lib/contracts/sign-in'
@@ -23,7 +24,7 @@ export function JoinForm({ token, email, partyName }: { token: string; email: st
     try {
       await acceptInvitation({ token, newcomer })
       const refused = await signInWithPassword({ email, password: newcomer.password })
-      window.location.assign(refused ? `/sign-in?error=${encodeURIComponent(refused)}` : '/tours')
+      loadPage(refused ? `/sign-in?error=${encodeURIComponent(refused)}` : '/tours')
     } catch (error) {
       showRefusal(form, error)
     }

@@ -7,6 +7,7 @@ import { Field } from '@/components/ui/field'
 import { Notice } from '@/components/ui/notice'
 import { TextInput } from '@/components/ui/text-input'
 import { showRefusal } from '@/lib/client/form-refusal'
+import { loadPage } from '@/lib/client/load-page'
 import { redeemReset } from '@/lib/client/sign-in'
 import { redeemResetSchema } from '@/lib/contracts/sign-in'
 
@@ -17,8 +18,7 @@ export function NewPasswordForm({ token }: { token: string }) {
   const submit = form.handleSubmit(async (input) => {
     try {
       await redeemReset(input)
-      // A whole load: a session that was open here has just been ended.
-      window.location.assign('/sign-in?said=reset')
+      loadPage('/sign-in?said=reset')
     } catch (error) {
       showRefusal(form, error)
     }

@@ -5,7 +5,7 @@ import { emailSchema } from '@/lib/contracts/common'
 import { sitePath } from '@/lib/contracts/sign-in'
 import { DoorHeading } from '../../door-heading'
 
-export const metadata: Metadata = { title: 'Sign in', robots: { index: false }, referrer: 'no-referrer' }
+export const metadata: Metadata = { title: 'Sign in', robots: { index: false } }
 
 type Query = Promise<Record<string, string | string[] | undefined>>
 

@@ -93,7 +93,7 @@ function OpenInvitation({ partyId, invitation }: { partyId: string; invitation: 
     <li className="border-b border-line py-3">
       <div className="flex flex-wrap items-start gap-x-6 gap-y-1">
         <div className="min-w-0 grow basis-72">
-          <p className="font-bold break-all">{invitation.email}</p>
+          <p className="font-bold wrap-anywhere">{invitation.email}</p>
           <p className="text-sm text-soft">
             {invitation.roles.map((role) => roleWords[role]).join(', ')}, invited by {invitation.invitedBy}
           </p>
@@ -106,7 +106,7 @@ function OpenInvitation({ partyId, invitation }: { partyId: string; invitation: 
             <LocalTime iso={invitation.expiresAt} />
           </p>
         </div>
-        <div className="flex flex-wrap">
+        <div className="-ml-4 flex flex-wrap sm:ml-0">
           <Button
             kind="quiet"
             busy={again.isPending ? 'Sending' : null}

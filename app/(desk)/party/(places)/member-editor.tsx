@@ -52,6 +52,7 @@ export function MemberEditor({ partyId, member, onDone }: { partyId: string; mem
         </Button>
         <Button
           kind="quiet"
+          className="-ml-4 sm:ml-0"
           busy={remove.isPending ? 'Taking out' : null}
           onClick={() => remove.mutate({ personId: member.personId, version: member.version }, { onSuccess: onDone })}
         >

@@ -45,6 +45,7 @@ export function Members({ partyId, readerId, manages, initial }: MembersProps) {
                 manages && (
                   <Button
                     kind="quiet"
+                    className="-ml-4 sm:ml-0"
                     aria-expanded={editing === member.personId}
                     onClick={() => setEditing(editing === member.personId ? null : member.personId)}
                   >
@@ -74,12 +75,12 @@ interface MemberRowProps {
 function MemberRow({ member, isReader, partyId, action }: MemberRowProps) {
   return (
     <div className="flex flex-wrap items-start gap-x-6 gap-y-1">
-      <div className="min-w-0 basis-64">
+      <div className="min-w-0 basis-80">
         <p className="name text-lg">
           {member.name}
           {isReader && <span className="font-text text-sm font-normal text-soft"> you</span>}
         </p>
-        <p className="text-sm break-all text-soft">{member.email}</p>
+        <p className="text-sm wrap-anywhere text-soft">{member.email}</p>
       </div>
       <div className="min-w-0 grow basis-56">
         <p>{member.roles.map((role) => roleWords[role]).join(', ')}</p>

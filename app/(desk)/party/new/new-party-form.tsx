@@ -9,6 +9,7 @@ import { Notice } from '@/components/ui/notice'
 import { TextInput } from '@/components/ui/text-input'
 import { createParty } from '@/lib/client/account'
 import { showRefusal } from '@/lib/client/form-refusal'
+import { loadPage } from '@/lib/client/load-page'
 import { createPartySchema } from '@/lib/contracts/party'
 
 export function NewPartyForm() {
@@ -20,7 +21,7 @@ export function NewPartyForm() {
   const submit = form.handleSubmit(async ({ name }) => {
     try {
       await createParty({ id, name })
-      window.location.assign('/tours')
+      loadPage('/tours')
     } catch (error) {
       showRefusal(form, error)
     }

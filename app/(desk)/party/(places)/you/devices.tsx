@@ -6,6 +6,7 @@ import { LocalTime } from '@/components/desk/local-time'
 import { Button } from '@/components/ui/button'
 import { Notice } from '@/components/ui/notice'
 import { signOutDevice, signOutEverywhere } from '@/lib/client/account'
+import { loadPage } from '@/lib/client/load-page'
 import { signOutHere } from '@/lib/client/sign-in'
 import type { Device } from '@/lib/contracts/sign-in'
 
@@ -36,7 +37,7 @@ export function Devices({ devices }: { devices: readonly Device[] }) {
   const outEverywhere = () =>
     during('everywhere', async () => {
       await signOutEverywhere()
-      window.location.assign('/sign-in?said=everywhere')
+      loadPage('/sign-in?said=everywhere')
     })
 
   return (

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next'
+import { ThemeToggle } from '@/components/ui/theme-toggle'
 import { pagePerson } from '@/lib/server/auth/page-actor'
 import { hasPassword } from '@/lib/server/people/change-password'
 import { listDevices } from '@/lib/server/people/devices'
@@ -25,6 +26,15 @@ export default async function YouPage() {
             : 'You sign in by mailed links so far. With a password you can do without the mail.'}
         </p>
         <PasswordForm known={known} />
+      </section>
+      <section aria-labelledby="light-title" className="mt-12">
+        <h2 id="light-title" className="text-2xl">
+          Light on this device
+        </h2>
+        <p className="mt-1 mb-2 text-soft">Paper for daylight, near-black beside the stage. This device keeps it.</p>
+        <div className="-ml-4">
+          <ThemeToggle />
+        </div>
       </section>
     </>
   )
