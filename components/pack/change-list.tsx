@@ -7,13 +7,18 @@ interface Group {
 }
 
 function groupsOf(changes: SpecChanges): Group[] {
-  const told = (lines: SpecChanges['changed']) => lines.map(({ name, differences }) => `${name}: ${differences.join('; ')}`)
+  const told = (lines: SpecChanges['changed']) =>
+    lines.map(({ name, differences }) => `${name}: ${differences.join('; ')}`)
   return [
     { title: 'New lines', detail: 'asked for the first time', sentences: changes.added.map(({ words }) => words) },
     { title: 'Dropped lines', detail: 'no longer wanted', sentences: changes.dropped.map(({ words }) => words) },
     { title: 'Changed lines', detail: 'asked again', sentences: told(changes.changed) },
     { title: 'Tuning', detail: 'the sheets change, nobody is asked again', sentences: told(changes.tuning) },
-    { title: 'Plot and patch', detail: 'the drawing and the channel list change', sentences: [...changes.plot, ...changes.channels] },
+    {
+      title: 'Plot and patch',
+      detail: 'the drawing and the channel list change',
+      sentences: [...changes.plot, ...changes.channels],
+    },
   ].filter(({ sentences }) => sentences.length > 0)
 }
 

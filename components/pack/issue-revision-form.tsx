@@ -44,7 +44,12 @@ export function IssueRevisionForm({ tourId, rigId, action, number }: IssueRevisi
   })
   const refused = form.formState.errors.root?.message
   return (
-    <form noValidate aria-label={`Revision ${number}`} className="flex max-w-2xl flex-col gap-4" onSubmit={(event) => void submit(event)}>
+    <form
+      noValidate
+      aria-label={`Revision ${number}`}
+      className="flex max-w-2xl flex-col gap-4"
+      onSubmit={(event) => void submit(event)}
+    >
       <TextField
         form={form}
         name="note"

@@ -11,7 +11,13 @@ export function PackSheet({ sheet }: { sheet: TuningSheet }) {
           <h3 className="text-xl">{sheet.name}</h3>
           <p className="text-sm text-soft">{`${sheet.roleWord}, ${sheet.sizeWords}`}</p>
           <p className="text-sm">
-            {[`even within ±${sheet.toleranceCents} cents`, sheet.relationWords, sheet.muffling && `muffling: ${sheet.muffling}`].filter(Boolean).join('; ')}
+            {[
+              `even within ±${sheet.toleranceCents} cents`,
+              sheet.relationWords,
+              sheet.muffling && `muffling: ${sheet.muffling}`,
+            ]
+              .filter(Boolean)
+              .join('; ')}
           </p>
           {batter && <p className="text-sm">Lug order {batter.order.join(', ')}</p>}
         </div>
@@ -49,10 +55,13 @@ function Head({ head }: { head: SheetHead }) {
       )}
       {tap && (
         <p className="text-sm">
-          tap <span className="figures font-bold">{tap.hz.toFixed(0)} Hz</span>, {tap.lowHz.toFixed(0)} to {tap.highHz.toFixed(0)}
+          tap <span className="figures font-bold">{tap.hz.toFixed(0)} Hz</span>, {tap.lowHz.toFixed(0)} to{' '}
+          {tap.highHz.toFixed(0)}
         </p>
       )}
-      <p className="text-sm">{head.gauge === null ? 'no gauge noted' : `gauge ${head.gauge}, relative to this gauge`}</p>
+      <p className="text-sm">
+        {head.gauge === null ? 'no gauge noted' : `gauge ${head.gauge}, relative to this gauge`}
+      </p>
       {head.without && <p className="text-sm">{head.without}</p>}
     </div>
   )

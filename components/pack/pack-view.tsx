@@ -14,7 +14,13 @@ export function PackView({ pack }: { pack: PackDocument }) {
       <Part title={pack.shows.length === 1 ? 'Show' : `${pack.shows.length} shows`}>
         <Facts
           facts={[
-            ...pack.shows.map((show) => [show.date, [show.title, ...show.times.map(({ label, words }) => `${label.toLowerCase()} ${words}`)].join('; ')] as const),
+            ...pack.shows.map(
+              (show) =>
+                [
+                  show.date,
+                  [show.title, ...show.times.map(({ label, words }) => `${label.toLowerCase()} ${words}`)].join('; '),
+                ] as const,
+            ),
             ['Answers due', pack.answersDue],
             ...pack.facts.map(({ label, words }) => [label, words] as const),
           ]}
@@ -35,7 +41,12 @@ export function PackView({ pack }: { pack: PackDocument }) {
       )}
       {pack.contacts.length > 0 && (
         <Part title="Contacts this reader sees">
-          <Facts facts={pack.contacts.map((contact) => [contact.name, [contact.duty, contact.email, contact.phone].filter(Boolean).join(', ')] as const)} />
+          <Facts
+            facts={pack.contacts.map(
+              (contact) =>
+                [contact.name, [contact.duty, contact.email, contact.phone].filter(Boolean).join(', ')] as const,
+            )}
+          />
         </Part>
       )}
       {pack.plot && (
@@ -51,7 +62,10 @@ export function PackView({ pack }: { pack: PackDocument }) {
       <Part title="Lines">
         <AskedLines
           caption="The numbered lines"
-          lines={pack.lines.map((line) => ({ ...line, by: line.asked ? `${pack.recipient.name}: asked` : `${line.broughtBy}: told only` }))}
+          lines={pack.lines.map((line) => ({
+            ...line,
+            by: line.asked ? `${pack.recipient.name}: asked` : `${line.broughtBy}: told only`,
+          }))}
         />
       </Part>
       {pack.sheets.length > 0 && (

@@ -20,7 +20,12 @@ export function PdfState({ state }: { state: PackState }) {
     )
   }
   if (state.pdf === 'late') {
-    return <Notice kind="error">The PDF could not be made. The pack below is kept; go back and preview it again, or take something out of the kit first.</Notice>
+    return (
+      <Notice kind="error">
+        The PDF could not be made. The pack below is kept; go back and preview it again, or take something out of the
+        kit first.
+      </Notice>
+    )
   }
   return <Notice kind="wait">The PDF is being made; this page shows it by itself in a few seconds.</Notice>
 }

@@ -26,7 +26,9 @@ export function PreviewPacks({ tourId, rigId, revisionId, readers }: PreviewPack
   const router = useRouter()
   const preview = usePackPreview()
   const open = async (of: PackReader['of']) => {
-    const made = await preview.mutateAsync({ ...of, revisionId, ...('hireId' in of ? { rigId } : {}) }).catch(() => null)
+    const made = await preview
+      .mutateAsync({ ...of, revisionId, ...('hireId' in of ? { rigId } : {}) })
+      .catch(() => null)
     if (made) router.push(`/tours/${tourId}/revisions/packs/${made.id}` as Route)
   }
   return (
@@ -44,7 +46,13 @@ export function PreviewPacks({ tourId, rigId, revisionId, readers }: PreviewPack
             </span>
             <Button
               onClick={() => void open(of)}
-              busy={preview.isPending && preview.variables && idOf(of) === (preview.variables.showId ?? preview.variables.hireId) ? 'Composing' : null}
+              busy={
+                preview.isPending &&
+                preview.variables &&
+                idOf(of) === (preview.variables.showId ?? preview.variables.hireId)
+                  ? 'Composing'
+                  : null
+              }
             >
               Preview the pack for {name}
             </Button>

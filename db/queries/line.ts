@@ -12,7 +12,11 @@ export async function listLines(db: Db, scope: Scope, rigId: string) {
     .limit(5000)
 }
 
-export async function insertLines(db: Db, scope: Scope, rows: Omit<typeof line.$inferInsert, 'partyId' | 'createdAt'>[]): Promise<void> {
+export async function insertLines(
+  db: Db,
+  scope: Scope,
+  rows: Omit<typeof line.$inferInsert, 'partyId' | 'createdAt'>[],
+): Promise<void> {
   if (rows.length > 0) await db.insert(line).values(rows.map((row) => ({ ...row, partyId: scope.partyId })))
 }
 

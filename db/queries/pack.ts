@@ -217,7 +217,11 @@ export async function lockPack(db: Db, scope: Scope, packId: string) {
   return rows[0]
 }
 
-export async function setPackPdf(db: Db, scope: Scope, input: { packId: string; blobId: string; pages: number }): Promise<void> {
+export async function setPackPdf(
+  db: Db,
+  scope: Scope,
+  input: { packId: string; blobId: string; pages: number },
+): Promise<void> {
   await db
     .update(pack)
     .set({ pdfBlobId: input.blobId, pdfPages: input.pages })

@@ -11,17 +11,20 @@ export const planningCaution =
 export const tuningCautions: readonly Caution[] = [
   {
     name: 'Film and rods',
-    words: 'A head under tension or a rod can let go. Keep faces clear, ease down a head that creaks or goes dead, and replace a bent rod or a dented head.',
+    words:
+      'A head under tension or a rod can let go. Keep faces clear, ease down a head that creaks or goes dead, and replace a bent rod or a dented head.',
   },
   {
     name: 'Hearing',
-    words: 'Close taps and full strokes are loud. 94 dBA is a day’s dose in 60 minutes and 100 dBA in 15 (NIOSH 98-126). Wear ear plugs.',
+    words:
+      'Close taps and full strokes are loud. 94 dBA is a day’s dose in 60 minutes and 100 dBA in 15 (NIOSH 98-126). Wear ear plugs.',
   },
 ]
 
 const lifting: Caution = {
   name: 'Lifting',
-  words: 'Two people over 23 kg, a mechanical aid over 45 kg (common practice). Cases on stairs and ramps: more people, and say who calls.',
+  words:
+    'Two people over 23 kg, a mechanical aid over 45 kg (common practice). Cases on stairs and ramps: more people, and say who calls.',
 }
 
 /** Cautions of a whole pack: for a venue everything, for a supplier what touches delivery. */
@@ -32,11 +35,13 @@ export function packCautions(audience: 'venue' | 'supplier'): readonly Caution[]
     lifting,
     {
       name: 'Loads',
-      words: 'A castor or a leg loads the floor at one point: compare it with the point load of the stage and the riser, not only with the spread load.',
+      words:
+        'A castor or a leg loads the floor at one point: compare it with the point load of the stage and the riser, not only with the spread load.',
     },
     {
       name: 'Power',
-      words: 'A competent person ties in. Never defeat the earth. Check volts, hertz and inlets before anything is plugged in.',
+      words:
+        'A competent person ties in. Never defeat the earth. Check volts, hertz and inlets before anything is plugged in.',
     },
   ]
 }

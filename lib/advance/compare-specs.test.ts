@@ -9,7 +9,9 @@ const kit = (change: (entry: FrozenEntry) => FrozenEntry | null): RigSpec => ({
   kit: sampleSpec.kit.flatMap((entry) => change(entry) ?? []),
 })
 const tomWith = (spec: object) =>
-  kit((entry) => (entry.id === 'k-tom' && entry.kind === 'drum' ? { ...entry, spec: { ...entry.spec, ...spec } } : entry))
+  kit((entry) =>
+    entry.id === 'k-tom' && entry.kind === 'drum' ? { ...entry, spec: { ...entry.spec, ...spec } } : entry,
+  )
 const sentences = (before: RigSpec, after: RigSpec) => changeSentences(compareSpecs(before, after))
 
 describe('what changed between two states of a rig', () => {
@@ -41,7 +43,9 @@ describe('what changed between two states of a rig', () => {
 
   it('tells a new reference pitch for every drum', () => {
     const at442 = { ...sampleSpec, party: { ...sampleSpec.party, referenceHz: 442 } }
-    expect(compareSpecs(sampleSpec, at442).tuning.map(({ differences }) => differences)).toEqual(Array(5).fill(['A4 440 Hz → 442 Hz']))
+    expect(compareSpecs(sampleSpec, at442).tuning.map(({ differences }) => differences)).toEqual(
+      Array(5).fill(['A4 440 Hz → 442 Hz']),
+    )
   })
 
   it('counts what moved on the plot and names what changed in the patch', () => {
@@ -51,9 +55,14 @@ describe('what changed between two states of a rig', () => {
       ...sampleSpec,
       plot: {
         sequence: 99,
-        document: { ...sampleSpec.plot.document, pieces: { ...rest, kick: { ...hats, id: 'kick' }, extra: { ...hats, id: 'extra' } } },
+        document: {
+          ...sampleSpec.plot.document,
+          pieces: { ...rest, kick: { ...hats, id: 'kick' }, extra: { ...hats, id: 'extra' } },
+        },
       },
-      channels: sampleSpec.channels.slice(1).map((channel) => (channel.number === 2 ? { ...channel, name: 'Snare top' } : channel)),
+      channels: sampleSpec.channels
+        .slice(1)
+        .map((channel) => (channel.number === 2 ? { ...channel, name: 'Snare top' } : channel)),
     }
     expect(sentences(sampleSpec, moved)).toEqual([
       'Plot: 1 placed, 1 moved or changed, 1 taken off',
@@ -65,7 +74,13 @@ describe('what changed between two states of a rig', () => {
 
 describe('two states of a rig', () => {
   it('are the same when the plot was touched and put back, or the kit comes in another order', () => {
-    expect(specsAreSame(sampleSpec, { ...sampleSpec, plot: { ...sampleSpec.plot, sequence: 400 }, kit: [...sampleSpec.kit].reverse() })).toBe(true)
+    expect(
+      specsAreSame(sampleSpec, {
+        ...sampleSpec,
+        plot: { ...sampleSpec.plot, sequence: 400 },
+        kit: [...sampleSpec.kit].reverse(),
+      }),
+    ).toBe(true)
   })
 
   it('differ by a note, a channel, the paper', () => {

@@ -34,8 +34,12 @@ export function compareSpecs(before: RigSpec | null, after: RigSpec): SpecChange
   const was = new Map(linesOfKit(before?.kit ?? []).map((line) => [line.entryId, line.content]))
   const is = new Map(linesOfKit(after.kit).map((line) => [line.entryId, line.content]))
   return {
-    added: [...is].filter(([id]) => !was.has(id)).map(([entryId, content]) => ({ entryId, words: lineWords(content, units) })),
-    dropped: [...was].filter(([id]) => !is.has(id)).map(([entryId, content]) => ({ entryId, words: lineWords(content, units) })),
+    added: [...is]
+      .filter(([id]) => !was.has(id))
+      .map(([entryId, content]) => ({ entryId, words: lineWords(content, units) })),
+    dropped: [...was]
+      .filter(([id]) => !is.has(id))
+      .map(([entryId, content]) => ({ entryId, words: lineWords(content, units) })),
     changed: [...is].flatMap(([entryId, content]) => {
       const old = was.get(entryId)
       if (!old || canonicalJson(old) === canonicalJson(content)) return []
@@ -106,18 +110,20 @@ function supplyWords(supply: LineContent['supply']): string {
   return supply === 'rented' ? 'the supplier' : 'the venue'
 }
 
-function headInFull(head: Parameters<typeof headWords>[0] & { coatingGPerM2: number } | null): string {
+function headInFull(head: (Parameters<typeof headWords>[0] & { coatingGPerM2: number }) | null): string {
   if (!head) return 'none'
   return head.coatingGPerM2 > 0 ? `${headWords(head)}, coating ${head.coatingGPerM2} g/m²` : headWords(head)
 }
 
 function tuningChanges(before: RigSpec, after: RigSpec): ChangedLine[] {
   const was = new Map(before.kit.filter(isDrum).map((entry) => [entry.id, entry]))
-  return entriesInOrder(after.kit).filter(isDrum).flatMap((entry) => {
-    const old = was.get(entry.id)
-    const differences = old ? tuningDifferences(old, entry, before, after) : []
-    return differences.length > 0 ? [{ entryId: entry.id, name: entry.name, differences }] : []
-  })
+  return entriesInOrder(after.kit)
+    .filter(isDrum)
+    .flatMap((entry) => {
+      const old = was.get(entry.id)
+      const differences = old ? tuningDifferences(old, entry, before, after) : []
+      return differences.length > 0 ? [{ entryId: entry.id, name: entry.name, differences }] : []
+    })
 }
 
 function isDrum(entry: FrozenEntry): entry is FrozenDrum {
@@ -175,7 +181,9 @@ function channelChanges(before: readonly FrozenChannel[], after: readonly Frozen
     ...after.flatMap((channel) => {
       const old = was.get(channel.id)
       if (!old || canonicalJson(old) === canonicalJson(channel)) return []
-      return [words(old) === words(channel) ? `Patch: ${words(channel)} changed` : `Patch: ${words(old)} → ${words(channel)}`]
+      return [
+        words(old) === words(channel) ? `Patch: ${words(channel)} changed` : `Patch: ${words(old)} → ${words(channel)}`,
+      ]
     }),
   ]
 }

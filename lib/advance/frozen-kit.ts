@@ -71,6 +71,8 @@ export type FrozenEntry = FrozenEntryCommon &
 export type FrozenDrum = Extract<FrozenEntry, { kind: 'drum' }>
 
 /** Entries in the one order in which they are listed, numbered and printed. */
-export function entriesInOrder<Entry extends Pick<FrozenEntryCommon, 'id' | 'position'>>(entries: readonly Entry[]): Entry[] {
+export function entriesInOrder<Entry extends Pick<FrozenEntryCommon, 'id' | 'position'>>(
+  entries: readonly Entry[],
+): Entry[] {
   return [...entries].sort((a, b) => a.position - b.position || (a.id < b.id ? -1 : a.id > b.id ? 1 : 0))
 }

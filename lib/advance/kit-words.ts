@@ -2,7 +2,12 @@ import type { FrozenCymbalSpec, FrozenDrumSpec, FrozenHead } from './frozen-kit'
 
 export type Units = 'metric' | 'imperial'
 
-const drumWords: Record<FrozenDrumSpec['role'], string> = { kick: 'kick', snare: 'snare', tom: 'tom', 'floor-tom': 'floor tom' }
+const drumWords: Record<FrozenDrumSpec['role'], string> = {
+  kick: 'kick',
+  snare: 'snare',
+  tom: 'tom',
+  'floor-tom': 'floor tom',
+}
 const cymbalWords: Record<FrozenCymbalSpec['type'], string> = {
   hats: 'hats',
   crash: 'crash',
@@ -33,12 +38,16 @@ function millimetres(inches: number): string {
 /** A drum's size: "12 in across, 8 deep"; for a metric reader with the millimetres behind it. */
 export function drumSizeWords(size: { readonly diameterIn: number; readonly depthIn: number }, units: Units): string {
   const nominal = `${inchWords(size.diameterIn)} in across, ${inchWords(size.depthIn)} deep`
-  return units === 'imperial' ? nominal : `${nominal} (${millimetres(size.diameterIn)} × ${millimetres(size.depthIn)} mm)`
+  return units === 'imperial'
+    ? nominal
+    : `${nominal} (${millimetres(size.diameterIn)} × ${millimetres(size.depthIn)} mm)`
 }
 
 /** A cymbal's size: "21 in", for a metric reader "21 in (533 mm)". */
 export function cymbalSizeWords(diameterIn: number, units: Units): string {
-  return units === 'imperial' ? `${inchWords(diameterIn)} in` : `${inchWords(diameterIn)} in (${millimetres(diameterIn)} mm)`
+  return units === 'imperial'
+    ? `${inchWords(diameterIn)} in`
+    : `${inchWords(diameterIn)} in (${millimetres(diameterIn)} mm)`
 }
 
 export function drumRoleWord(role: FrozenDrumSpec['role']): string {
@@ -57,7 +66,12 @@ export function typeWords(type: string): string {
 /** A head by kind, never by maker: "10 mil one-ply coated", "7 + 7 mil two-ply clear with gel". */
 export function headWords(head: Pick<FrozenHead, 'plyMils' | 'film' | 'damping'>): string {
   const film = head.film === 'other' ? '' : head.film
-  const parts = [`${head.plyMils.map(inchWords).join(' + ')} mil`, plyWords[head.plyMils.length] ?? '', film, dampingWords[head.damping]]
+  const parts = [
+    `${head.plyMils.map(inchWords).join(' + ')} mil`,
+    plyWords[head.plyMils.length] ?? '',
+    film,
+    dampingWords[head.damping],
+  ]
   return parts.filter((part) => part !== '').join(' ')
 }
 

@@ -27,7 +27,13 @@ describe('what a line asks', () => {
     ['the relation of the heads', withSpec({ headRelationCents: 300 })],
     ['the tolerance', withSpec({ toleranceCents: 4 })],
     ['the muffling', withSpec({ muffling: 'one gel' })],
-    ['a gauge reading', withSpec({ batter: { ...tom.spec.batter, gauge: 81 }, resonant: { ...tom.spec.batter, film: 'clear', coatingGPerM2: 0, gauge: 1 } })],
+    [
+      'a gauge reading',
+      withSpec({
+        batter: { ...tom.spec.batter, gauge: 81 },
+        resonant: { ...tom.spec.batter, film: 'clear', coatingGPerM2: 0, gauge: 1 },
+      }),
+    ],
     ['the place in the kit', { ...tom, position: 40 }],
   ])('stays the same when only %s changes, so nobody is asked again', (_, changed) => {
     expect(text(changed)).toBe(text(tom))
@@ -56,10 +62,13 @@ describe('what a line asks', () => {
     expect(lineWords(asked(tom), 'metric')).toBe('Rack tom, 12 in across, 8 deep (305 × 203 mm), 6 lugs')
     expect(insteadOfWords(asked(tom))).toBe('12 to 13 in across, 7 to 10 in deep')
     expect(insteadOfWords(asked(withSpec({ insteadOf: null })))).toBeNull()
-    expect(lineDetails(asked(withSpec({ batter: { ...tom.spec.batter, plyMils: [7, 7], film: 'clear', damping: 'dot' }, resonant: null })))).toEqual([
-      'tom, maple',
-      'new heads: 7 + 7 mil two-ply clear with a centre dot batter, no resonant head',
-    ])
+    expect(
+      lineDetails(
+        asked(
+          withSpec({ batter: { ...tom.spec.batter, plyMils: [7, 7], film: 'clear', damping: 'dot' }, resonant: null }),
+        ),
+      ),
+    ).toEqual(['tom, maple', 'new heads: 7 + 7 mil two-ply clear with a centre dot batter, no resonant head'])
   })
 
   it('counts, and does not say twice what the name says', () => {
@@ -84,7 +93,16 @@ describe('the lines of a kit', () => {
   it('leave out what is carried and are numbered in the kit’s order', () => {
     const shuffled = [...sampleKit].reverse()
     const lines = linesOfKit(shuffled)
-    expect(lines.map((line) => line.entryId)).toEqual(['k-kick', 'k-tom', 'k-low', 'k-floor', 'k-ride', 'k-throne', 'k-boom', 'k-mic'])
+    expect(lines.map((line) => line.entryId)).toEqual([
+      'k-kick',
+      'k-tom',
+      'k-low',
+      'k-floor',
+      'k-ride',
+      'k-throne',
+      'k-boom',
+      'k-mic',
+    ])
     expect(lines.map((line) => line.position)).toEqual([1, 2, 3, 4, 5, 6, 7, 8])
   })
 })

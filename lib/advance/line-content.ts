@@ -1,6 +1,22 @@
-import type { FrozenCymbalSpec, FrozenDrumSpec, FrozenEntry, FrozenHead, FrozenHardwareSpec, FrozenMicrophoneSpec, SizeRange } from './frozen-kit'
+import type {
+  FrozenCymbalSpec,
+  FrozenDrumSpec,
+  FrozenEntry,
+  FrozenHead,
+  FrozenHardwareSpec,
+  FrozenMicrophoneSpec,
+  SizeRange,
+} from './frozen-kit'
 import { entriesInOrder } from './frozen-kit'
-import { cymbalSizeWords, cymbalTypeWord, drumRoleWord, drumSizeWords, headWords, rangeWords, typeWords } from './kit-words'
+import {
+  cymbalSizeWords,
+  cymbalTypeWord,
+  drumRoleWord,
+  drumSizeWords,
+  headWords,
+  rangeWords,
+  typeWords,
+} from './kit-words'
 import type { Units } from './kit-words'
 
 /** A head that is asked for: its kind, without what the tuner notes about it. */
@@ -58,7 +74,11 @@ export function lineContent(entry: FrozenEntry): LineContent | null {
     case 'hardware':
       return { ...common, kind: 'hardware', spec: { type: entry.spec.type } }
     case 'microphone':
-      return { ...common, kind: 'microphone', spec: { type: entry.spec.type, phantom: entry.spec.phantom, stand: entry.spec.stand } }
+      return {
+        ...common,
+        kind: 'microphone',
+        spec: { type: entry.spec.type, phantom: entry.spec.phantom, stand: entry.spec.stand },
+      }
   }
 }
 
@@ -108,7 +128,9 @@ function essentials(content: LineContent, units: Units): string[] {
     case 'microphone':
       return [
         `${typeWords(content.spec.type)} microphone`,
-        ...(content.spec.stand === 'none' ? [] : [content.spec.stand === 'clip' ? 'with clip' : `${content.spec.stand} stand`]),
+        ...(content.spec.stand === 'none'
+          ? []
+          : [content.spec.stand === 'clip' ? 'with clip' : `${content.spec.stand} stand`]),
       ]
   }
 }

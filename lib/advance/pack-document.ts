@@ -92,7 +92,13 @@ export interface PackDocument {
 
 /** A stored pack as this release reads it. Throws TypeError when it is no pack, or one of a release newer than this. */
 export function upgradePackDocument(stored: unknown): PackDocument {
-  if (typeof stored !== 'object' || stored === null || !('schemaVersion' in stored) || !('lines' in stored) || !Array.isArray(stored.lines)) {
+  if (
+    typeof stored !== 'object' ||
+    stored === null ||
+    !('schemaVersion' in stored) ||
+    !('lines' in stored) ||
+    !Array.isArray(stored.lines)
+  ) {
     throw new TypeError('Not a pack')
   }
   if (typeof stored.schemaVersion !== 'number' || stored.schemaVersion < 1) throw new TypeError('Not a pack')
@@ -101,5 +107,7 @@ export function upgradePackDocument(stored: unknown): PackDocument {
   }
   // Version 1 is the only one so far; the plot inside has its own version and its own upgrade.
   const document = stored as unknown as PackDocument
-  return document.plot ? { ...document, plot: { ...document.plot, document: readDocument(document.plot.document) } } : document
+  return document.plot
+    ? { ...document, plot: { ...document.plot, document: readDocument(document.plot.document) } }
+    : document
 }

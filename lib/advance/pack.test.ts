@@ -1,11 +1,16 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import type { PackContactInput, PackInput, PackRecipient } from './pack'
+import type { PackContactInput, PackInput, PackRecipient } from './pack-input'
 import { composePack } from './pack'
 import { upgradePackDocument } from './pack-document'
 import { sampleContacts, sampleHire, sampleKit, sampleRevision, sampleShow, sampleSpec } from './sample-revision'
 
-const revision = { number: 7, issuedAt: '2031-09-20T10:00:00.000Z', note: 'First full spec.', document: sampleRevision() }
+const revision = {
+  number: 7,
+  issuedAt: '2031-09-20T10:00:00.000Z',
+  note: 'First full spec.',
+  document: sampleRevision(),
+}
 const venue: PackRecipient = { kind: 'venue', locale: 'en', show: sampleShow }
 const supplier: PackRecipient = { kind: 'supplier', locale: 'en', hire: sampleHire, shows: [sampleShow] }
 const compose = (recipient: PackRecipient, more: Partial<PackInput> = {}) =>
@@ -49,7 +54,10 @@ describe('a venue’s pack', () => {
   })
 
   it('has no plot page when nothing is placed', () => {
-    const document = sampleRevision({ ...sampleSpec, plot: { sequence: 0, document: { ...sampleSpec.plot.document, pieces: {} } } })
+    const document = sampleRevision({
+      ...sampleSpec,
+      plot: { sequence: 0, document: { ...sampleSpec.plot.document, pieces: {} } },
+    })
     expect(compose(venue, { revision: { ...revision, document } }).plot).toBeNull()
   })
 
@@ -76,7 +84,9 @@ describe('a supplier’s pack', () => {
   const pack = compose(supplier)
 
   it('holds the rented lines only, numbered as everybody’s', () => {
-    expect(pack.lines.map(({ number, supply, asked }) => [number, supply, asked])).toEqual([1, 2, 3, 4].map((number) => [number, 'rented', true]))
+    expect(pack.lines.map(({ number, supply, asked }) => [number, supply, asked])).toEqual(
+      [1, 2, 3, 4].map((number) => [number, 'rented', true]),
+    )
   })
 
   it('has no sheet, no plot, no channel list', () => {
@@ -96,7 +106,15 @@ describe('a supplier’s pack', () => {
         .filter(({ id }) => id !== 'k-throne')
         .map((entry) =>
           entry.id === 'k-tom' && entry.kind === 'drum'
-            ? { ...entry, spec: { ...entry.spec, lugs: 5, note: { semitone: 51, cents: 0 }, batter: { ...entry.spec.batter, gauge: 12 } } }
+            ? {
+                ...entry,
+                spec: {
+                  ...entry.spec,
+                  lugs: 5,
+                  note: { semitone: 51, cents: 0 },
+                  batter: { ...entry.spec.batter, gauge: 12 },
+                },
+              }
             : entry,
         ),
       plot: { sequence: 3, document: { ...sampleSpec.plot.document, pieces: {} } },
@@ -145,21 +163,33 @@ describe('what a reader must not see', () => {
 
   it('is anything that a row brings along beside the fields of a pack', () => {
     fc.assert(
-      fc.property(both, fc.uuid(), fc.integer({ min: 1_000_000_000, max: 2_000_000_000 }), (recipient, words, minor) => {
-        const along = { transportMinor: minor, currency: words, answers: [{ remark: words }], taxBasisPoints: minor }
-        const rows: PackRecipient =
-          recipient.kind === 'venue'
-            ? { ...recipient, show: { ...recipient.show, ...along, venue: { ...recipient.show.venue, ...along } } }
-            : { ...recipient, hire: { ...recipient.hire, ...along }, shows: recipient.shows.map((show) => ({ ...show, ...along })) }
-        const text = JSON.stringify(compose(rows, { contacts: sampleContacts.map((contact) => ({ ...contact, ...along })) }))
-        expect(text).not.toContain(words)
-        expect(text).not.toContain(String(minor))
-      }),
+      fc.property(
+        both,
+        fc.uuid(),
+        fc.integer({ min: 1_000_000_000, max: 2_000_000_000 }),
+        (recipient, words, minor) => {
+          const along = { transportMinor: minor, currency: words, answers: [{ remark: words }], taxBasisPoints: minor }
+          const rows: PackRecipient =
+            recipient.kind === 'venue'
+              ? { ...recipient, show: { ...recipient.show, ...along, venue: { ...recipient.show.venue, ...along } } }
+              : {
+                  ...recipient,
+                  hire: { ...recipient.hire, ...along },
+                  shows: recipient.shows.map((show) => ({ ...show, ...along })),
+                }
+          const text = JSON.stringify(
+            compose(rows, { contacts: sampleContacts.map((contact) => ({ ...contact, ...along })) }),
+          )
+          expect(text).not.toContain(words)
+          expect(text).not.toContain(String(minor))
+        },
+      ),
     )
   })
 
   it('is, for a supplier, the stage, its power and the player of any show', () => {
     const text = JSON.stringify(compose(supplier))
-    for (const secret of [sampleShow.stage.inlets, sampleShow.player.name, sampleShow.player.mixes]) expect(text).not.toContain(secret)
+    for (const secret of [sampleShow.stage.inlets, sampleShow.player.name, sampleShow.player.mixes])
+      expect(text).not.toContain(secret)
   })
 })

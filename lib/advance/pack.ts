@@ -1,6 +1,4 @@
 import { STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
-import type { StageSize } from '@/plots/model/document'
-import { areaWords, lengthWords } from '@/plots/symbols/length-words'
 import { outputsOf, pieceName } from '@/plots/symbols/piece-kinds'
 import { packCautions } from './cautions'
 import { changeSentences, compareSpecs } from './compare-specs'
@@ -9,84 +7,23 @@ import { entriesInOrder } from './frozen-kit'
 import { kitPieces } from './kit-pieces'
 import { typeWords } from './kit-words'
 import { insteadOfWords, lineDetails, lineWords } from './line-content'
-import type { Fact, PackAudience, PackChannel, PackContact, PackDocument, PackLine, PackPlot, PackShow } from './pack-document'
+import type {
+  Fact,
+  PackAudience,
+  PackChannel,
+  PackContact,
+  PackDocument,
+  PackLine,
+  PackPlot,
+  PackShow,
+} from './pack-document'
 import { PACK_SCHEMA_VERSION } from './pack-document'
+import { hireFacts, venueFacts } from './pack-facts'
+import type { PackContactInput, PackInput, PackRecipient, PackShowInput } from './pack-input'
 import type { RevisionDocument, RigSpec } from './revision-document'
 import { isAskedOf } from './standing'
 import { tuningSheet } from './tuning-sheet'
-import { dateWords, instantWords, whenWords, windowWords } from './when-words'
-
-export interface PackPlace {
-  readonly id: string
-  readonly name: string
-  readonly town: string
-  readonly country: string
-}
-
-export interface PackStage extends StageSize {
-  readonly name: string
-  readonly heightM: number
-  readonly access: readonly string[]
-  readonly volts: number | null
-  readonly mainsHz: number | null
-  readonly inlets: string
-}
-
-export interface PackShowInput {
-  readonly id: string
-  /** YYYY-MM-DD. */
-  readonly date: string
-  readonly name: string
-  readonly venue: PackPlace
-  readonly stage: PackStage
-  readonly zone: string | null
-  readonly loadInTime: string | null
-  readonly showTime: string | null
-  readonly showDayOffset: number
-  readonly answersDueAt: string | null
-  readonly slot: { readonly changeoverMin: number; readonly lineCheckMin: number; readonly riserParking: string } | null
-  readonly sharedKit: { readonly owner: string; readonly mayRetune: boolean; readonly maySwap: string } | null
-  readonly player: { readonly name: string; readonly hand: 'right' | 'left'; readonly throneHeightM: number | null; readonly mixes: string }
-  /** Who brings the rented things to this show; empty when nobody is hired yet. */
-  readonly supplierNames: readonly string[]
-}
-
-export interface PackHireInput {
-  readonly id: string
-  readonly supplier: PackPlace
-  readonly zone: string | null
-  readonly deliveryDate: string | null
-  readonly deliveryFrom: string | null
-  readonly deliveryUntil: string | null
-  readonly collectionDate: string | null
-  readonly collectionFrom: string | null
-  readonly collectionUntil: string | null
-  readonly receiver: string
-  readonly conditionOnReturn: string
-  readonly poNumber: string
-  readonly answersDueAt: string | null
-}
-
-/** Somebody who could stand on a pack; whose contact it is decides who may read of it. */
-export interface PackContactInput {
-  readonly of: { readonly kind: 'party' } | { readonly kind: 'venue' | 'supplier'; readonly id: string }
-  readonly name: string
-  readonly duty: string
-  readonly email: string
-  readonly phone: string
-}
-
-export type PackRecipient =
-  | { readonly kind: 'venue'; readonly locale: string; readonly show: PackShowInput }
-  | { readonly kind: 'supplier'; readonly locale: string; readonly hire: PackHireInput; readonly shows: readonly PackShowInput[] }
-
-export interface PackInput {
-  readonly revision: { readonly number: number; readonly issuedAt: string; readonly note: string; readonly document: RevisionDocument }
-  readonly recipient: PackRecipient
-  readonly contacts: readonly PackContactInput[]
-  /** The revision of the last pack that was sent to this recipient. */
-  readonly previous: { readonly number: number; readonly document: RevisionDocument } | null
-}
+import { dateWords, instantWords, whenWords } from './when-words'
 
 /**
  * What one recipient gets of a revision: a venue the whole of one show, a supplier the lines of one hire. Fields are picked
@@ -125,7 +62,11 @@ export function composePack(input: PackInput): PackDocument {
         ? entriesInOrder(document.kit)
             .filter(isDrum)
             .map((drum) =>
-              tuningSheet(drum, { locale: recipient.locale, units: document.party.units, referenceHz: document.party.referenceHz }),
+              tuningSheet(drum, {
+                locale: recipient.locale,
+                units: document.party.units,
+                referenceHz: document.party.referenceHz,
+              }),
             )
         : [],
     cautions: packCautions(audience),
@@ -139,7 +80,9 @@ function isDrum(entry: FrozenEntry): entry is FrozenDrum {
 function packShow(show: PackShowInput): PackShow {
   const times: Fact[] = [
     ...(show.loadInTime ? [{ label: 'Load-in', words: whenWords(show.date, show.loadInTime, show.zone) }] : []),
-    ...(show.showTime ? [{ label: 'Show', words: whenWords(show.date, show.showTime, show.zone, show.showDayOffset) }] : []),
+    ...(show.showTime
+      ? [{ label: 'Show', words: whenWords(show.date, show.showTime, show.zone, show.showDayOffset) }]
+      : []),
   ]
   const where = [show.venue.name, show.venue.town].filter(Boolean).join(', ')
   return {
@@ -153,70 +96,6 @@ function packShow(show: PackShowInput): PackShow {
 function answersDue(recipient: PackRecipient): string | null {
   const { answersDueAt, zone } = recipient.kind === 'venue' ? recipient.show : recipient.hire
   return answersDueAt ? instantWords(answersDueAt, zone) : null
-}
-
-function venueFacts(show: PackShowInput, document: RevisionDocument): Fact[] {
-  const { stage, player, slot, sharedKit } = show
-  const { units } = document.party
-  const power = [
-    ...(stage.volts === null ? [] : [`${stage.volts} V`]),
-    ...(stage.mainsHz === null ? [] : [`${stage.mainsHz} Hz`]),
-    ...(stage.inlets === '' ? [] : [stage.inlets]),
-  ]
-  return [
-    {
-      label: 'Stage',
-      words: `${stage.name}, ${areaWords(stage.widthM, stage.depthM, units)}, ${lengthWords(stage.heightM, units)} high`,
-    },
-    ...(stage.access.length > 0 ? [{ label: 'Way in', words: stage.access.join(', ') }] : []),
-    { label: 'Power', words: power.length > 0 ? power.join(', ') : 'not known yet: please tell us volts, hertz and inlets' },
-    {
-      label: 'Player',
-      words: [
-        player.name,
-        `${player.hand}-handed`,
-        ...(player.throneHeightM === null ? [] : [`throne at ${lengthWords(player.throneHeightM, units)}`]),
-        ...(player.mixes === '' ? [] : [`mixes: ${player.mixes}`]),
-      ].join(', '),
-    },
-    ...(slot
-      ? [
-          {
-            label: 'Slot',
-            words: [
-              `changeover ${slot.changeoverMin} min`,
-              `line check ${slot.lineCheckMin} min`,
-              ...(slot.riserParking === '' ? [] : [`riser parks: ${slot.riserParking}`]),
-            ].join(', '),
-          },
-        ]
-      : []),
-    ...(sharedKit
-      ? [
-          {
-            label: 'Shared kit',
-            words: [
-              `of ${sharedKit.owner}`,
-              sharedKit.mayRetune ? 'may be retuned' : 'must not be retuned',
-              ...(sharedKit.maySwap === '' ? [] : [`may be swapped: ${sharedKit.maySwap}`]),
-            ].join(', '),
-          },
-        ]
-      : []),
-    ...(show.supplierNames.length > 0 ? [{ label: 'Rented kit comes from', words: show.supplierNames.join(', ') }] : []),
-  ]
-}
-
-function hireFacts(hire: PackHireInput): Fact[] {
-  const window = (date: string | null, from: string | null, until: string | null) =>
-    date ? windowWords(date, from, until, hire.zone) : 'date not set yet'
-  return [
-    { label: 'Delivery', words: window(hire.deliveryDate, hire.deliveryFrom, hire.deliveryUntil) },
-    { label: 'Collection', words: window(hire.collectionDate, hire.collectionFrom, hire.collectionUntil) },
-    ...(hire.receiver === '' ? [] : [{ label: 'Received by', words: hire.receiver }]),
-    ...(hire.conditionOnReturn === '' ? [] : [{ label: 'Condition on return', words: hire.conditionOnReturn }]),
-    ...(hire.poNumber === '' ? [] : [{ label: 'PO number', words: hire.poNumber }]),
-  ]
 }
 
 /** A reader sees the party's contacts and those of its own house. */
@@ -289,7 +168,9 @@ function packPlot(document: RevisionDocument, show: PackShowInput, locale: strin
   return {
     document: document.plot.document,
     kit: kitPieces(document, locale),
-    channels: document.channels.flatMap(({ pieceId, output, number }) => (pieceId ? [{ pieceId, output, number }] : [])),
+    channels: document.channels.flatMap(({ pieceId, output, number }) =>
+      pieceId ? [{ pieceId, output, number }] : [],
+    ),
     stage: { widthM: show.stage.widthM, depthM: show.stage.depthM },
     stageName: `${show.venue.name}, ${show.stage.name}`,
   }

@@ -18,14 +18,20 @@ describe('a stored revision', () => {
     expect(piece).toMatchObject({ kind: 'fog machine', xM: 1, yM: 0, glow: true, locked: false })
   })
 
-  it.each([[null], ['text'], [{}], [{ kit: [], lines: [], plot: {} }], [{ kit: [], lines: [], plot: {}, schemaVersion: 0 }], [{ schemaVersion: 1, kit: 'no', lines: [], plot: {} }]])(
-    'is refused when it is none: %j',
-    (stored) => {
-      expect(() => upgradeRevisionDocument(stored)).toThrow('Not a revision document')
-    },
-  )
+  it.each([
+    [null],
+    ['text'],
+    [{}],
+    [{ kit: [], lines: [], plot: {} }],
+    [{ kit: [], lines: [], plot: {}, schemaVersion: 0 }],
+    [{ schemaVersion: 1, kit: 'no', lines: [], plot: {} }],
+  ])('is refused when it is none: %j', (stored) => {
+    expect(() => upgradeRevisionDocument(stored)).toThrow('Not a revision document')
+  })
 
   it('is refused when a newer release issued it', () => {
-    expect(() => upgradeRevisionDocument({ ...sampleRevision(), schemaVersion: REVISION_SCHEMA_VERSION + 1 })).toThrow('newer release')
+    expect(() => upgradeRevisionDocument({ ...sampleRevision(), schemaVersion: REVISION_SCHEMA_VERSION + 1 })).toThrow(
+      'newer release',
+    )
   })
 })

@@ -56,7 +56,12 @@ export interface RevisionDocument extends RigSpec {
  * than this.
  */
 export function upgradeRevisionDocument(stored: unknown): RevisionDocument {
-  if (!isObject(stored) || !Array.isArray(stored['kit']) || !Array.isArray(stored['lines']) || !isObject(stored['plot'])) {
+  if (
+    !isObject(stored) ||
+    !Array.isArray(stored['kit']) ||
+    !Array.isArray(stored['lines']) ||
+    !isObject(stored['plot'])
+  ) {
     throw new TypeError('Not a revision document')
   }
   const version = stored['schemaVersion']

@@ -1,5 +1,5 @@
 import { rightHandedPlot } from '@/plots/render/right-handed-kit'
-import type { PackContactInput, PackHireInput, PackShowInput } from './pack'
+import type { PackContactInput, PackHireInput, PackShowInput } from './pack-input'
 import type { FrozenDrum, FrozenDrumSpec, FrozenEntry } from './frozen-kit'
 import { linesOfKit } from './line-content'
 import type { RevisionDocument, RigSpec } from './revision-document'
@@ -33,7 +33,14 @@ export const sampleKit: readonly FrozenEntry[] = [
   sampleDrum(
     { id: 'k-kick', name: 'Kick 22', position: 0 },
     {
-      ...{ role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8, ported: true, muffling: 'one pillow, touching both heads' },
+      ...{
+        role: 'kick',
+        diameterIn: 22,
+        depthIn: 16,
+        lugs: 8,
+        ported: true,
+        muffling: 'one pillow, touching both heads',
+      },
       note: { semitone: 33, cents: 0 },
       batter: { ...head([10, 7], 'clear', 32), damping: 'felt' },
     },
@@ -54,17 +61,74 @@ export const sampleKit: readonly FrozenEntry[] = [
       insteadOf: { diameterMinIn: 12, diameterMaxIn: 13, depthMinIn: 7, depthMaxIn: 10 },
     },
   ),
-  sampleDrum({ id: 'k-low', name: 'Tom 14', position: 3 }, { role: 'tom', diameterIn: 14, depthIn: 10, lugs: 8, note: { semitone: 45, cents: 0 } }),
+  sampleDrum(
+    { id: 'k-low', name: 'Tom 14', position: 3 },
+    { role: 'tom', diameterIn: 14, depthIn: 10, lugs: 8, note: { semitone: 45, cents: 0 } },
+  ),
   sampleDrum(
     { id: 'k-floor', name: 'Floor tom 16', position: 4 },
     { role: 'floor-tom', diameterIn: 16, depthIn: 14, lugs: 8, note: { semitone: 40, cents: -12 } },
   ),
-  { id: 'k-hats', position: 5, kind: 'cymbal', name: 'Hats 14', supply: 'carried', count: 1, remark: '', spec: { type: 'hats', diameterIn: 14 } },
-  { id: 'k-crash', position: 6, kind: 'cymbal', name: 'Crash 17', supply: 'carried', count: 1, remark: '', spec: { type: 'crash', diameterIn: 17 } },
-  { id: 'k-ride', position: 7, kind: 'cymbal', name: 'Ride 21', supply: 'venue', count: 1, remark: 'no rivets', spec: { type: 'ride', diameterIn: 21 } },
-  { id: 'k-throne', position: 8, kind: 'hardware', name: 'Throne', supply: 'venue', count: 1, remark: 'round seat', spec: { type: 'throne' } },
-  { id: 'k-boom', position: 9, kind: 'hardware', name: 'Boom stands', supply: 'venue', count: 4, remark: '', spec: { type: 'boom-stand' } },
-  { id: 'k-mic', position: 10, kind: 'microphone', name: 'Drum microphones', supply: 'venue', count: 8, remark: '', spec: { type: 'dynamic', phantom: false, stand: 'short' } },
+  {
+    id: 'k-hats',
+    position: 5,
+    kind: 'cymbal',
+    name: 'Hats 14',
+    supply: 'carried',
+    count: 1,
+    remark: '',
+    spec: { type: 'hats', diameterIn: 14 },
+  },
+  {
+    id: 'k-crash',
+    position: 6,
+    kind: 'cymbal',
+    name: 'Crash 17',
+    supply: 'carried',
+    count: 1,
+    remark: '',
+    spec: { type: 'crash', diameterIn: 17 },
+  },
+  {
+    id: 'k-ride',
+    position: 7,
+    kind: 'cymbal',
+    name: 'Ride 21',
+    supply: 'venue',
+    count: 1,
+    remark: 'no rivets',
+    spec: { type: 'ride', diameterIn: 21 },
+  },
+  {
+    id: 'k-throne',
+    position: 8,
+    kind: 'hardware',
+    name: 'Throne',
+    supply: 'venue',
+    count: 1,
+    remark: 'round seat',
+    spec: { type: 'throne' },
+  },
+  {
+    id: 'k-boom',
+    position: 9,
+    kind: 'hardware',
+    name: 'Boom stands',
+    supply: 'venue',
+    count: 4,
+    remark: '',
+    spec: { type: 'boom-stand' },
+  },
+  {
+    id: 'k-mic',
+    position: 10,
+    kind: 'microphone',
+    name: 'Drum microphones',
+    supply: 'venue',
+    count: 8,
+    remark: '',
+    spec: { type: 'dynamic', phantom: false, stand: 'short' },
+  },
 ]
 
 export const sampleSpec: RigSpec = {
@@ -91,7 +155,11 @@ export function sampleRevision(spec: RigSpec = sampleSpec): RevisionDocument {
   return {
     schemaVersion: REVISION_SCHEMA_VERSION,
     ...spec,
-    lines: linesOfKit(spec.kit).map((line) => ({ ...line, lineId: `line of ${line.entryId}`, hash: `hash of ${line.entryId}` })),
+    lines: linesOfKit(spec.kit).map((line) => ({
+      ...line,
+      lineId: `line of ${line.entryId}`,
+      hash: `hash of ${line.entryId}`,
+    })),
   }
 }
 
@@ -100,7 +168,16 @@ export const sampleShow: PackShowInput = {
   date: '2031-10-14',
   name: '',
   venue: { id: uuid('5'), name: 'Salle Nord', town: 'Arvic', country: 'France' },
-  stage: { name: 'Main stage', widthM: 10, depthM: 8, heightM: 1.2, access: ['dock', 'lift'], volts: 230, mainsHz: 50, inlets: 'CEE 32 A' },
+  stage: {
+    name: 'Main stage',
+    widthM: 10,
+    depthM: 8,
+    heightM: 1.2,
+    access: ['dock', 'lift'],
+    volts: 230,
+    mainsHz: 50,
+    inlets: 'CEE 32 A',
+  },
   zone: 'Europe/Paris',
   loadInTime: '14:00',
   showTime: '20:30',
@@ -131,6 +208,18 @@ export const sampleHire: PackHireInput = {
 export const sampleContacts: readonly PackContactInput[] = [
   { of: { kind: 'party' }, name: 'Ida Marsh', duty: 'tour manager', email: 'ida@saltmarsh.example', phone: '' },
   { of: { kind: 'party' }, name: 'Jon Reed', duty: 'drum tech', email: 'jon@saltmarsh.example', phone: '' },
-  { of: { kind: 'venue', id: uuid('5') }, name: 'Élodie Žák', duty: 'backline', email: 'backline@sallenord.example', phone: '+33 0 00 00 00 00' },
-  { of: { kind: 'supplier', id: uuid('7') }, name: 'Hire desk', duty: 'delivery', email: 'desk@fenland.example', phone: '' },
+  {
+    of: { kind: 'venue', id: uuid('5') },
+    name: 'Élodie Žák',
+    duty: 'backline',
+    email: 'backline@sallenord.example',
+    phone: '+33 0 00 00 00 00',
+  },
+  {
+    of: { kind: 'supplier', id: uuid('7') },
+    name: 'Hire desk',
+    duty: 'delivery',
+    email: 'desk@fenland.example',
+    phone: '',
+  },
 ]

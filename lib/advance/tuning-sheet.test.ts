@@ -4,14 +4,18 @@ import { tuningSheet } from './tuning-sheet'
 
 const reader = { locale: 'en', units: 'imperial', referenceHz: 440 } as const
 const size = { role: 'tom', diameterIn: 12, depthIn: 8, lugs: 6 } as const
-const drum = (spec: Partial<Parameters<typeof sampleDrum>[1]>) => sampleDrum({ id: 'd', name: 'Tom 12', position: 0 }, { ...size, ...spec })
+const drum = (spec: Partial<Parameters<typeof sampleDrum>[1]>) =>
+  sampleDrum({ id: 'd', name: 'Tom 12', position: 0 }, { ...size, ...spec })
 const D3 = { semitone: 50, cents: 0 }
 
 describe('a tuning sheet', () => {
   // Equal temperament from A4 = 440 Hz (ISO 16:1975): D3 is 146.83 Hz.
   it('names the note in Hz, whatever the reference', () => {
     expect(tuningSheet(drum({ note: D3 }), reader).heads[0]?.note?.hz).toBeCloseTo(146.83, 2)
-    expect(tuningSheet(drum({ note: D3 }), { ...reader, referenceHz: 442 }).heads[0]?.note?.hz).toBeCloseTo((146.832 * 442) / 440, 2)
+    expect(tuningSheet(drum({ note: D3 }), { ...reader, referenceHz: 442 }).heads[0]?.note?.hz).toBeCloseTo(
+      (146.832 * 442) / 440,
+      2,
+    )
   })
 
   it('stands the resonant head over the batter by the drum’s relation', () => {
@@ -21,7 +25,8 @@ describe('a tuning sheet', () => {
   })
 
   it('names notes in the reader’s language', () => {
-    const name = (locale: string) => tuningSheet(drum({ note: { semitone: 59, cents: 0 } }), { ...reader, locale }).heads[0]?.note?.name
+    const name = (locale: string) =>
+      tuningSheet(drum({ note: { semitone: 59, cents: 0 } }), { ...reader, locale }).heads[0]?.note?.name
     expect([name('en-GB'), name('de'), name('fr-CA'), name('pt')]).toEqual(['B3', 'H3', 'si3', 'B3'])
   })
 
@@ -37,7 +42,14 @@ describe('a tuning sheet', () => {
   it('crosses over from lug to lug and counts from the badge on each head', () => {
     const [batter, resonant] = tuningSheet(drum({ note: D3 }), reader).heads
     expect(batter?.order).toEqual([1, 4, 2, 5, 3, 6])
-    expect(batter?.lugs.map(({ lug, turn }) => [lug, turn])).toEqual([[1, 1], [2, 3], [3, 5], [4, 2], [5, 4], [6, 6]])
+    expect(batter?.lugs.map(({ lug, turn }) => [lug, turn])).toEqual([
+      [1, 1],
+      [2, 3],
+      [3, 5],
+      [4, 2],
+      [5, 4],
+      [6, 6],
+    ])
     // Badge at the top: lug 1 is to the right of it on both heads, and above the middle.
     for (const head of [batter, resonant]) {
       expect(head?.lugs[0]?.x).toBeCloseTo(0.5, 6)

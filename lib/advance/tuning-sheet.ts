@@ -65,13 +65,24 @@ export interface TuningSheet {
 }
 
 /** A drum's sheet for whoever tunes it. Every figure is an estimate of the core, as a head in the open air. */
-export function tuningSheet(drum: FrozenDrum, reader: { readonly locale: string; readonly units: Units; readonly referenceHz: number }): TuningSheet {
+export function tuningSheet(
+  drum: FrozenDrum,
+  reader: { readonly locale: string; readonly units: Units; readonly referenceHz: number },
+): TuningSheet {
   const { spec } = drum
   const batterHz = spec.note ? noteFrequencyHz(spec.note, reader.referenceHz) : null
   const heads = [
     sheetHead(drum, 'batter', spec.batter, batterHz, reader),
     ...(spec.resonant
-      ? [sheetHead(drum, 'resonant', spec.resonant, batterHz === null ? null : resonantTargetHz(batterHz, spec.headRelationCents), reader)]
+      ? [
+          sheetHead(
+            drum,
+            'resonant',
+            spec.resonant,
+            batterHz === null ? null : resonantTargetHz(batterHz, spec.headRelationCents),
+            reader,
+          ),
+        ]
       : []),
   ]
   return {
@@ -113,7 +124,8 @@ function sheetHead(
     lugs: lugsFacing(side, evenLugAngles(spec.lugs)).map(({ lug, x, y }) => ({ lug, x, y, turn: turns.get(lug) ?? 0 })),
   }
   const bare = { ...common, tap: null, rodPullN: null, cautions: [] }
-  if (noteHz === null) return { ...bare, note: null, without: 'No note is set for this drum: tune it even and ask the drum tech.' }
+  if (noteHz === null)
+    return { ...bare, note: null, without: 'No note is set for this drum: tune it even and ask the drum tech.' }
   const note = sheetNote(noteHz, reader)
   try {
     const estimate = headEstimate({
@@ -140,7 +152,11 @@ function sheetHead(
     }
   } catch (error) {
     if (!(error instanceof AcousticsError)) throw error
-    return { ...bare, note, without: 'This head cannot be estimated at this note: ask the drum tech before you bring it up.' }
+    return {
+      ...bare,
+      note,
+      without: 'This head cannot be estimated at this note: ask the drum tech before you bring it up.',
+    }
   }
 }
 

@@ -18,7 +18,9 @@ describe('times on paper', () => {
   })
 
   it('say a window by whichever end is known', () => {
-    expect(windowWords('2031-10-14', '10:00', '12:00', 'Europe/Oslo')).toBe('Tue 14 Oct 2031, 10:00 to 12:00 (Europe/Oslo)')
+    expect(windowWords('2031-10-14', '10:00', '12:00', 'Europe/Oslo')).toBe(
+      'Tue 14 Oct 2031, 10:00 to 12:00 (Europe/Oslo)',
+    )
     expect(windowWords('2031-10-14', null, '12:00', 'Europe/Oslo')).toBe('Tue 14 Oct 2031, until 12:00 (Europe/Oslo)')
     expect(windowWords('2031-10-14', '10:00', null, 'Europe/Oslo')).toBe('Tue 14 Oct 2031, from 10:00 (Europe/Oslo)')
     expect(windowWords('2031-10-14', null, null, 'Europe/Oslo')).toBe('Tue 14 Oct 2031')

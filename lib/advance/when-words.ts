@@ -14,7 +14,10 @@ export function whenWords(date: string, time: string | null, zone: string | null
 /** An instant as the wall clock of a place shows it; in UTC, and saying so, while the zone is not known. */
 export function instantWords(instant: string, zone: string | null): string {
   const at = new Date(instant)
-  const day = part(at, { weekday: 'short', day: 'numeric', month: 'short', year: 'numeric' }, zone ?? 'UTC').replaceAll(',', '')
+  const day = part(at, { weekday: 'short', day: 'numeric', month: 'short', year: 'numeric' }, zone ?? 'UTC').replaceAll(
+    ',',
+    '',
+  )
   const time = part(at, { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }, zone ?? 'UTC')
   return `${day}, ${time} (${zone ?? 'UTC'})`
 }

@@ -71,8 +71,14 @@ function boxesOf(operators: { fnArray: number[]; argsArray: unknown[] }): PdfBox
       const [a, b, c, d, e, f] = state.matrix
       places.push([a * x + c * y + e, b * x + d * y + f])
     }
-    const span = (axis: 0 | 1) => Math.max(...places.map((place) => place[axis])) - Math.min(...places.map((place) => place[axis]))
-    boxes.push({ widthMm: millimetres(span(0)), heightMm: millimetres(span(1)), dashed: state.dashed, points: places.length })
+    const span = (axis: 0 | 1) =>
+      Math.max(...places.map((place) => place[axis])) - Math.min(...places.map((place) => place[axis]))
+    boxes.push({
+      widthMm: millimetres(span(0)),
+      heightMm: millimetres(span(1)),
+      dashed: state.dashed,
+      points: places.length,
+    })
   })
   return boxes
 }

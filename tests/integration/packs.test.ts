@@ -1,17 +1,13 @@
 import { randomUUID } from 'node:crypto'
-import { and, eq } from 'drizzle-orm'
+import { eq } from 'drizzle-orm'
+import { encode } from 'next-auth/jwt'
 import { beforeAll, describe, expect, it } from 'vitest'
 import { db } from '@/db/client'
 import { pack } from '@/db/schema/advance'
-import { fileReference } from '@/db/schema/file'
 import { hire, hireShow } from '@/db/schema/hire'
 import { kitEntry } from '@/db/schema/kit'
-import { mail, mailAttachment } from '@/db/schema/mail'
 import { rig, show } from '@/db/schema/tour'
 import type { PackDocument } from '@/lib/advance/pack-document'
-import { linkToken } from '@/lib/server/auth/link-token'
-import { makePackPdf } from '@/lib/server/jobs/make-pack-pdf'
-import { queueMail } from '@/lib/server/mail/queue-mail'
 import { attackRoute, faultyFields } from '../helpers/attack-route'
 import type { Answer, HttpClient } from '../helpers/http-client'
 import { baseUrl, stranger } from '../helpers/http-client'
@@ -21,7 +17,14 @@ import { readPdf } from '../helpers/read-pdf'
 import type { TourFixture } from '../helpers/tour-fixture'
 import { makeTour } from '../helpers/tour-fixture'
 
-type State = { id: string; pdf: 'making' | 'ready' | 'late'; pages: number | null; revisionNumber: number; showId: string | null; hireId: string | null }
+type State = {
+  id: string
+  pdf: 'making' | 'ready' | 'late'
+  pages: number | null
+  revisionNumber: number
+  showId: string | null
+  hireId: string | null
+}
 const stateOf = (answer: Answer) => answer.body as State
 const messageOf = (answer: Answer) => (answer.body as { error: { message: string } }).error.message
 
@@ -43,7 +46,8 @@ describe('packs', () => {
   const make = (body: object, by: HttpClient = party.tourManager.call) => by('POST', '/api/packs', body)
   const documentOf = async (packId: string) =>
     (await db().select({ document: pack.document }).from(pack).where(eq(pack.id, packId)))[0]?.document as PackDocument
-  const countPacks = async () => (await db().select({ id: pack.id }).from(pack).where(eq(pack.showId, tour.showId))).length
+  const countPacks = async () =>
+    (await db().select({ id: pack.id }).from(pack).where(eq(pack.showId, tour.showId))).length
   const pdfOf = async (packId: string, by: PartyFixture) => {
     const response = await by.viewer.call('GET', `/api/packs/${packId}/pdf`)
     return response
@@ -53,10 +57,19 @@ describe('packs', () => {
     await fresh()
     const answer = await make({ showId: tour.showId })
     expect(answer.status).toBe(201)
-    expect(stateOf(answer)).toMatchObject({ pdf: 'making', pages: null, revisionNumber: 1, showId: tour.showId, hireId: null })
+    expect(stateOf(answer)).toMatchObject({
+      pdf: 'making',
+      pages: null,
+      revisionNumber: 1,
+      showId: tour.showId,
+      hireId: null,
+    })
     const { id } = stateOf(answer)
     await expect
-      .poll(async () => stateOf(await party.viewer.call('GET', `/api/packs/${id}`)).pdf, { timeout: 25_000, interval: 300 })
+      .poll(async () => stateOf(await party.viewer.call('GET', `/api/packs/${id}`)).pdf, {
+        timeout: 25_000,
+        interval: 300,
+      })
       .toBe('ready')
     const answered = await pdfOf(id, party)
     expect(answered.status).toBe(200)
@@ -71,12 +84,13 @@ describe('packs', () => {
   })
 
   const fetchPdf = async (id: string): Promise<Uint8Array> => {
-    const { encode } = await import('next-auth/jwt')
     const cookie = await encode({
       token: { sub: party.viewer.personId, sessionId: party.viewer.sessionId },
       secret: process.env['NEXTAUTH_SECRET'] ?? '',
     })
-    const response = await fetch(new URL(`/api/packs/${id}/pdf`, baseUrl()), { headers: { cookie: `next-auth.session-token=${cookie}` } })
+    const response = await fetch(new URL(`/api/packs/${id}/pdf`, baseUrl()), {
+      headers: { cookie: `next-auth.session-token=${cookie}` },
+    })
     return new Uint8Array(await response.arrayBuffer())
   }
 
@@ -87,9 +101,15 @@ describe('packs', () => {
     expect(answer.status).toBe(201)
     const document = await documentOf(stateOf(answer).id)
     expect(document.lines.map(({ words }) => words)).toEqual(['Tom 12, 12 in across, 8 deep (305 × 203 mm), 6 lugs'])
-    expect(document).toMatchObject({ audience: 'supplier', sheets: [], plot: null, recipient: { name: 'Test Backline' } })
+    expect(document).toMatchObject({
+      audience: 'supplier',
+      sheets: [],
+      plot: null,
+      recipient: { name: 'Test Backline' },
+    })
     const text = JSON.stringify(document)
-    for (const secret of ['98765432', '987654', tour.contactId, 'venue.example', 'Main']) expect(text).not.toContain(secret)
+    for (const secret of ['98765432', '987654', tour.contactId, 'venue.example', 'Main'])
+      expect(text).not.toContain(secret)
     expect(text).toContain(tour.supplierContactId)
   })
 
@@ -135,7 +155,9 @@ describe('packs', () => {
     const second = randomUUID()
     const [row] = await db().select().from(show).where(eq(show.id, tour.showId))
     if (!row) throw new Error('the show is there')
-    await db().insert(show).values({ ...row, id: second, rigId: flyRig })
+    await db()
+      .insert(show)
+      .values({ ...row, id: second, rigId: flyRig })
     await db().insert(hireShow).values({ partyId: party.partyId, hireId: tour.hireId, showId: second })
     const asked = await make({ hireId: tour.hireId })
     expect(asked.status).toBe(409)
@@ -160,7 +182,13 @@ describe('packs', () => {
     expect(faultyFields(await make({}))).toEqual(['showId'])
     expect(faultyFields(await make({ showId: tour.showId, hireId: tour.hireId }))).toEqual(['showId'])
     expect(faultyFields(await make({ hireId: 'seven' }))).toEqual(['hireId'])
-    const attack = { method: 'POST', path: '/api/packs', reader: party.viewer.call, theirs: other.tourManager.call, ours: party.tourManager.call }
+    const attack = {
+      method: 'POST',
+      path: '/api/packs',
+      reader: party.viewer.call,
+      theirs: other.tourManager.call,
+      ours: party.tourManager.call,
+    }
     await attackRoute({ ...attack, body: { showId: tour.showId } })
     await attackRoute({ ...attack, body: { hireId: tour.hireId } })
     expect(await countPacks()).toBe(0)
@@ -179,104 +207,9 @@ describe('packs', () => {
     const unmade = randomUUID()
     const [row] = await db().select().from(pack).where(eq(pack.id, id))
     if (!row) throw new Error('the pack is there')
-    await db().insert(pack).values({ ...row, id: unmade, pdfBlobId: null, pdfPages: null })
-    expect((await party.viewer.call('GET', `/api/packs/${unmade}/pdf`)).status).toBe(409)
-  })
-})
-
-describe('the PDF of a pack that is sent', () => {
-  let party: PartyFixture
-  let packId: string
-  let showId: string
-
-  beforeAll(async () => {
-    party = await makeParty()
-    const tour = await makeTour(party)
-    showId = tour.showId
-    await party.drumTech.call('POST', `/api/rigs/${tour.rigId}/revisions`, { note: 'first' })
-  })
-  /** A pack that no job was started for, so that the test runs the job itself. */
-  const storedPack = async () => {
-    const made = await party.tourManager.call('POST', '/api/packs', { showId })
-    const [row] = await db().select().from(pack).where(eq(pack.id, (made.body as State).id))
-    if (!row) throw new Error('the pack is there')
-    packId = randomUUID()
-    await db().insert(pack).values({ ...row, id: packId, pdfBlobId: null, pdfPages: null })
-  }
-  const waitingMail = (holdSeconds: number) =>
-    db().transaction((tx) =>
-      queueMail(tx, {
-        ...{ partyId: party.partyId, kind: 'pack', to: { address: 'house@venue.example', name: '' } },
-        ...{ subject: 'Pack', text: 'Pack', html: '<p>Pack</p>', holdSeconds, awaitsPdf: true },
-      }),
-    )
-  const jobsOf = async (mailId: string) =>
-    Number((await db().execute<{ count: string }>(`select count(*) from graphile_worker.jobs where key = 'mail:${mailId}'`)).rows[0]?.count)
-  const mailOf = async (mailId: string) => (await db().select().from(mail).where(eq(mail.id, mailId)))[0]
-  const attachedTo = async (mailId: string) => db().select().from(mailAttachment).where(eq(mailAttachment.mailId, mailId))
-
-  it('carries the links of its tokens, is attached once, and lets its mail go only then, run twice too', async () => {
-    await storedPack()
-    const mailId = await waitingMail(3600)
-    expect(await jobsOf(mailId)).toBe(0)
-    const [replyTokenId, benchTokenId] = [randomUUID(), randomUUID()]
-    const payload = { packId, partyId: party.partyId, mailId, replyTokenId, benchTokenId }
-    await makePackPdf(payload, { attempts: 1 })
-    await makePackPdf(payload, { attempts: 2 })
-    expect(await jobsOf(mailId)).toBe(1)
-    expect(await attachedTo(mailId)).toHaveLength(1)
-    const [stored] = await db().select({ blobId: pack.pdfBlobId, pages: pack.pdfPages }).from(pack).where(eq(pack.id, packId))
-    expect((await attachedTo(mailId))[0]?.blobId).toBe(stored?.blobId)
-    const references = await db()
-      .select({ audience: fileReference.audience, name: fileReference.name })
-      .from(fileReference)
-      .where(and(eq(fileReference.subjectType, 'pack'), eq(fileReference.subjectId, packId)))
-    expect(references).toEqual([{ audience: 'recipient', name: expect.stringMatching(/revision 1, Test Hall\.pdf$/) as string }])
-    const answer = await party.viewer.call('GET', `/api/packs/${packId}`)
-    expect(answer.body).toMatchObject({ pdf: 'ready', pages: stored?.pages })
-    const bytes = await readBlob(stored?.blobId ?? '')
-    expect((await readPdf(bytes)).links.sort()).toEqual(
-      [`b/${linkToken('grant', benchTokenId)}`, `r/${linkToken('grant', replyTokenId)}`].map((path) => new URL(path, process.env['APP_URL']).href),
-    )
-  })
-
-  const readBlob = async (blobId: string) => {
-    const { findBlob } = await import('@/db/queries/file')
-    const { blobStore } = await import('@/lib/server/storage/blob-store')
-    const found = await findBlob(db(), party, blobId)
-    return blobStore().get(found?.sha256 ?? '')
-  }
-
-  it('does not wake a mail that was stopped while it was made', async () => {
-    await storedPack()
-    const mailId = await waitingMail(3600)
-    await db().update(mail).set({ cancelledAt: new Date() }).where(eq(mail.id, mailId))
-    await makePackPdf({ packId, partyId: party.partyId, mailId, replyTokenId: null, benchTokenId: null }, { attempts: 1 })
-    expect(await jobsOf(mailId)).toBe(0)
-    expect(await attachedTo(mailId)).toEqual([])
-  })
-
-  it('gives its mail up with a sentence when it cannot be made, after five tries, and not before', async () => {
-    await storedPack()
-    await db().update(pack).set({ document: { schemaVersion: 1, lines: [], sheets: 'none' } }).where(eq(pack.id, packId))
-    const mailId = await waitingMail(0)
-    const payload = { packId, partyId: party.partyId, mailId, replyTokenId: null, benchTokenId: null }
-    await expect(makePackPdf(payload, { attempts: 1 })).rejects.toThrow()
-    expect((await mailOf(mailId))?.failedAt).toBeNull()
-    await makePackPdf(payload, { attempts: 5 })
-    expect((await mailOf(mailId))?.failure).toContain('PDF could not be made')
-    expect(await jobsOf(mailId)).toBe(0)
-  })
-
-  it('is not tried again when the pack is too large', async () => {
-    await storedPack()
-    const [row] = await db().select({ document: pack.document }).from(pack).where(eq(pack.id, packId))
     await db()
-      .update(pack)
-      .set({ document: { ...(row?.document as object), facts: [{ label: 'x', words: 'x'.repeat(5 * 1024 * 1024) }] } })
-      .where(eq(pack.id, packId))
-    const mailId = await waitingMail(0)
-    await makePackPdf({ packId, partyId: party.partyId, mailId, replyTokenId: null, benchTokenId: null }, { attempts: 1 })
-    expect((await mailOf(mailId))?.failedAt).toBeInstanceOf(Date)
+      .insert(pack)
+      .values({ ...row, id: unmade, pdfBlobId: null, pdfPages: null })
+    expect((await party.viewer.call('GET', `/api/packs/${unmade}/pdf`)).status).toBe(409)
   })
 })

@@ -22,7 +22,12 @@ type Detail = Summary & {
   carried: string[]
   pieces: number
   previousNumber: number | null
-  changes: { added: { words: string }[]; dropped: { words: string }[]; changed: { name: string; differences: string[] }[]; tuning: unknown[] } | null
+  changes: {
+    added: { words: string }[]
+    dropped: { words: string }[]
+    changed: { name: string; differences: string[] }[]
+    tuning: unknown[]
+  } | null
 }
 const summaryOf = (answer: Answer) => answer.body as Summary
 const messageOf = (answer: Answer) => (answer.body as { error: { message: string } }).error.message
@@ -43,19 +48,33 @@ describe('revisions of a rig', () => {
   }
   const issue = (body: object) => party.drumTech.call('POST', path, body)
   const read = async (id: string) => (await party.viewer.call('GET', `/api/revisions/${id}`)).body as Detail
-  const setTom = (change: Partial<typeof kitEntry.$inferInsert>) => db().update(kitEntry).set(change).where(eq(kitEntry.id, tour.tomId))
-  const count = async () => (await db().select({ id: revision.id }).from(revision).where(eq(revision.rigId, tour.rigId))).length
+  const setTom = (change: Partial<typeof kitEntry.$inferInsert>) =>
+    db().update(kitEntry).set(change).where(eq(kitEntry.id, tour.tomId))
+  const count = async () =>
+    (await db().select({ id: revision.id }).from(revision).where(eq(revision.rigId, tour.rigId))).length
 
   it('freeze kit, plot and lines, numbered from one, with who and why', async () => {
     await fresh()
     const placed = await party.drumTech.call('POST', `/api/rigs/${tour.rigId}/plot/commands`, {
       baseSequence: 0,
-      commands: [{ clientId: randomUUID(), type: 'place', pieces: [newPiece({ id: randomUUID(), kind: 'drum', kitEntryId: tour.tomId })] }],
+      commands: [
+        {
+          clientId: randomUUID(),
+          type: 'place',
+          pieces: [newPiece({ id: randomUUID(), kind: 'drum', kitEntryId: tour.tomId })],
+        },
+      ],
     })
     expect(placed.status).toBe(200)
     const answer = await issue({ note: '  First full spec.  ' })
     expect(answer.status).toBe(201)
-    expect(summaryOf(answer)).toMatchObject({ number: 1, note: 'First full spec.', lines: 2, rigName: 'full rig', issuedBy: { name: 'The drum-tech' } })
+    expect(summaryOf(answer)).toMatchObject({
+      number: 1,
+      note: 'First full spec.',
+      lines: 2,
+      rigName: 'full rig',
+      issuedBy: { name: 'The drum-tech' },
+    })
     const detail = await read(summaryOf(answer).id)
     expect(detail.asked.map(({ position, words, supply }) => [position, words, supply])).toEqual([
       [1, 'Tom 12, 12 in across, 8 deep (305 × 203 mm), 6 lugs', 'rented'],
@@ -73,12 +92,19 @@ describe('revisions of a rig', () => {
     await fresh()
     const first = await read(summaryOf(await issue({ note: 'one' })).id)
     const stored = async (id: string) =>
-      (await db().select({ document: revision.document, hash: revision.documentHash }).from(revision).where(eq(revision.id, id)))[0]
+      (
+        await db()
+          .select({ document: revision.document, hash: revision.documentHash })
+          .from(revision)
+          .where(eq(revision.id, id))
+      )[0]
     const before = await stored(first.id)
 
     await setTom({ spec: { ...tomSpec, note: { semitone: 52, cents: 0 }, toleranceCents: 5, muffling: 'one gel' } })
     const second = await read(summaryOf(await issue({ note: 'two' })).id)
-    expect(second.asked.map(({ lineId, hash }) => [lineId, hash])).toEqual(first.asked.map(({ lineId, hash }) => [lineId, hash]))
+    expect(second.asked.map(({ lineId, hash }) => [lineId, hash])).toEqual(
+      first.asked.map(({ lineId, hash }) => [lineId, hash]),
+    )
     expect(second.changes).toMatchObject({ added: [], dropped: [], changed: [] })
     expect(second.changes?.tuning).toHaveLength(1)
 
@@ -88,7 +114,10 @@ describe('revisions of a rig', () => {
     expect(third.asked[0]?.hash).not.toBe(first.asked[0]?.hash)
     expect(third.asked[1]).toEqual(first.asked[1])
     expect(third.changes?.changed).toMatchObject([
-      { name: 'Tom 12', differences: ['size 12 in across, 8 deep (305 × 203 mm) → 13 in across, 8 deep (330 × 203 mm)'] },
+      {
+        name: 'Tom 12',
+        differences: ['size 12 in across, 8 deep (305 × 203 mm) → 13 in across, 8 deep (330 × 203 mm)'],
+      },
     ])
     expect(await stored(first.id)).toEqual(before)
     const kept = await db()
@@ -146,7 +175,9 @@ describe('revisions of a rig', () => {
     expect(second.body).toEqual(first.body)
     expect(await count()).toBe(1)
     const otherRig = (await makeTour(party)).rigId
-    expect((await party.drumTech.call('POST', `/api/rigs/${otherRig}/revisions`, { id, note: 'elsewhere' })).status).toBe(409)
+    expect(
+      (await party.drumTech.call('POST', `/api/rigs/${otherRig}/revisions`, { id, note: 'elsewhere' })).status,
+    ).toBe(409)
   })
 
   it('get one number each when two are issued at once', async () => {
@@ -158,7 +189,11 @@ describe('revisions of a rig', () => {
     await setTom({ name: 'Rack tom' })
     const same = await Promise.all([issue({ id, note: 'x' }), issue({ id, note: 'x' })])
     expect(same.map(({ status }) => status)).toEqual([201, 201])
-    const numbers = await db().select({ number: revision.number }).from(revision).where(eq(revision.rigId, tour.rigId)).orderBy(asc(revision.number))
+    const numbers = await db()
+      .select({ number: revision.number })
+      .from(revision)
+      .where(eq(revision.rigId, tour.rigId))
+      .orderBy(asc(revision.number))
     expect(numbers).toEqual([{ number: 1 }, { number: 2 }])
   })
 
@@ -187,7 +222,9 @@ describe('revisions of a rig', () => {
     expect(faultyFields(await issue({ note: '   ' }))).toEqual(['note'])
     expect(faultyFields(await issue({ note: 'x'.repeat(2001) }))).toEqual(['note'])
     expect(faultyFields(await issue({ id: 'seven', note: 'x' }))).toEqual(['id'])
-    expect(faultyFields(await party.drumTech.call('POST', '/api/rigs/seven/revisions', { note: 'x' }))).toEqual(['rigId'])
+    expect(faultyFields(await party.drumTech.call('POST', '/api/rigs/seven/revisions', { note: 'x' }))).toEqual([
+      'rigId',
+    ])
     expect(await count()).toBe(0)
   })
 
@@ -197,7 +234,9 @@ describe('revisions of a rig', () => {
     await setTom({ name: 'Rack tom' })
     await issue({ note: 'two' })
     const list = await party.viewer.call('GET', path)
-    expect((list.body as { revisions: Summary[] }).revisions.map(({ number, note, lines }) => [number, note, lines])).toEqual([
+    expect(
+      (list.body as { revisions: Summary[] }).revisions.map(({ number, note, lines }) => [number, note, lines]),
+    ).toEqual([
       [2, 'two', 2],
       [1, 'one', 2],
     ])

@@ -70,7 +70,11 @@ async function keepPdf(
 }
 
 /** Attaches the PDF once and queues the mail for when it may go. A mail that was stopped meanwhile stays stopped. */
-async function releaseMail(tx: Db, scope: Scope, input: { mailId: string; blobId: string; name: string }): Promise<void> {
+async function releaseMail(
+  tx: Db,
+  scope: Scope,
+  input: { mailId: string; blobId: string; name: string },
+): Promise<void> {
   const mail = await lockMail(tx, input.mailId)
   if (!mail || mail.partyId !== scope.partyId || mail.sentAt || mail.cancelledAt || mail.failedAt) return
   const attached = await listMailAttachments(tx, scope, mail.id)
@@ -82,7 +86,11 @@ async function giveUp(mailId: string): Promise<void> {
   await db().transaction(async (tx) => {
     const mail = await lockMail(tx, mailId)
     if (!mail || mail.sentAt || mail.cancelledAt || mail.failedAt) return
-    await markMailFailed(tx, mailId, 'Its PDF could not be made, so it was not sent. Issue the revision again or take something out of the kit, then send it again.')
+    await markMailFailed(
+      tx,
+      mailId,
+      'Its PDF could not be made, so it was not sent. Issue the revision again or take something out of the kit, then send it again.',
+    )
     await notifyMailChanged(tx, mail)
   })
 }

@@ -20,7 +20,12 @@ export async function makePackPreview(actor: Actor, input: MakePack): Promise<Pa
       }
       return packState(repeated)
     }
-    const { packId } = await storePack(tx, actor, { id: input.id, of, revisionId: input.revisionId, rigId: input.rigId })
+    const { packId } = await storePack(tx, actor, {
+      id: input.id,
+      of,
+      revisionId: input.revisionId,
+      rigId: input.rigId,
+    })
     await enqueue(
       tx,
       'make-pack-pdf',
@@ -36,5 +41,7 @@ export async function makePackPreview(actor: Actor, input: MakePack): Promise<Pa
 function ofInput({ showId, hireId }: MakePack): { showId: string } | { hireId: string } {
   if (showId) return { showId }
   if (hireId) return { hireId }
-  throw new AppError('invalid', 'Name one show or one hire.', { details: { fields: { showId: 'name one show or one hire' } } })
+  throw new AppError('invalid', 'Name one show or one hire.', {
+    details: { fields: { showId: 'name one show or one hire' } },
+  })
 }

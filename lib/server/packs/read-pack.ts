@@ -29,11 +29,19 @@ export async function readPack(
 ): Promise<{ state: PackState; document: PackDocument; rigId: string; tourId: string }> {
   assertCan(actor, 'party:read')
   const found = await findOwn(actor, input.packId)
-  return { state: packState(found), document: upgradePackDocument(found.document), rigId: found.rigId, tourId: found.tourId }
+  return {
+    state: packState(found),
+    document: upgradePackDocument(found.document),
+    rigId: found.rigId,
+    tourId: found.tourId,
+  }
 }
 
 /** The very bytes of a pack's PDF. */
-export async function readPackPdf(actor: Actor, input: { packId: string }): Promise<{ bytes: Uint8Array; name: string }> {
+export async function readPackPdf(
+  actor: Actor,
+  input: { packId: string },
+): Promise<{ bytes: Uint8Array; name: string }> {
   assertCan(actor, 'party:read')
   const found = await findOwn(actor, input.packId)
   if (!found.pdfSha256) throw new AppError('conflict', 'This PDF is still being made. Try again in a moment.')

@@ -11,8 +11,8 @@ import {
   listSupplierNames,
 } from '@/db/queries/pack'
 import { findNewestRevision, findRevision } from '@/db/queries/revision'
-import type { PackContactInput, PackRecipient, PackShowInput } from '@/lib/advance/pack'
 import { composePack } from '@/lib/advance/pack'
+import type { PackContactInput, PackRecipient, PackShowInput } from '@/lib/advance/pack-input'
 import type { PackDocument } from '@/lib/advance/pack-document'
 import { upgradeRevisionDocument } from '@/lib/advance/revision-document'
 import { roleWords } from '@/lib/contracts/common'
@@ -48,13 +48,21 @@ export async function storePack(tx: Db, actor: MemberActor, input: StorePackInpu
   const locale = input.locale ?? frozen.party.locale
   const sent = await findLastSentRevision(tx, actor, { of, rigId: target.rigId, contactId: input.contactId })
   const document = composePack({
-    revision: { number: revision.number, issuedAt: revision.issuedAt.toISOString(), note: revision.note, document: frozen },
+    revision: {
+      number: revision.number,
+      issuedAt: revision.issuedAt.toISOString(),
+      note: revision.note,
+      document: frozen,
+    },
     recipient: { ...target.recipient, locale },
     contacts: [...(await partyContacts(tx, actor)), ...target.contacts],
     previous: sent ? { number: sent.number, document: upgradeRevisionDocument(sent.document) } : null,
   })
   if (document.lines.length === 0 && document.audience === 'supplier') {
-    throw new AppError('conflict', 'This revision asks the supplier for nothing: no entry of the kit is rented. Nothing was made.')
+    throw new AppError(
+      'conflict',
+      'This revision asks the supplier for nothing: no entry of the kit is rented. Nothing was made.',
+    )
   }
   const packId = await insertPack(tx, actor, {
     id: input.id ?? randomUUID(),
@@ -65,7 +73,13 @@ export async function storePack(tx: Db, actor: MemberActor, input: StorePackInpu
     document,
   })
   if (!packId) throw new AppError('conflict', 'This id is taken. Please send it again with another one.')
-  await audit(tx, actor, 'pack.make', { type: 'pack', id: packId }, { ...of, revisionId: revision.id, number: revision.number })
+  await audit(
+    tx,
+    actor,
+    'pack.make',
+    { type: 'pack', id: packId },
+    { ...of, revisionId: revision.id, number: revision.number },
+  )
   return { packId, revisionId: revision.id, revisionNumber: revision.number, document }
 }
 
@@ -90,9 +104,13 @@ async function ofHire(tx: Db, actor: MemberActor, hireId: string, rigId: string 
   const rigs = new Map(all.map((show) => [show.rigId, show.rigName]))
   if (rigs.size === 0) throw new AppError('conflict', 'This hire covers no show yet. Add its shows first.')
   if (rigId === undefined && rigs.size > 1) {
-    throw new AppError('conflict', `This hire covers shows of ${[...rigs.values()].join(' and ')}. Say which rig this pack is for.`, {
-      details: { rigIds: [...rigs.keys()] },
-    })
+    throw new AppError(
+      'conflict',
+      `This hire covers shows of ${[...rigs.values()].join(' and ')}. Say which rig this pack is for.`,
+      {
+        details: { rigIds: [...rigs.keys()] },
+      },
+    )
   }
   const chosen = rigId ?? [...rigs.keys()][0] ?? ''
   const rigName = rigs.get(chosen)
@@ -128,7 +146,10 @@ async function revisionFor(tx: Db, actor: MemberActor, target: Target, revisionI
     : await findNewestRevision(tx, actor, { rigId: target.rigId })
   if (revision?.rigId === target.rigId) return revision
   if (revisionId) throw new AppError('not-found', `There is no such revision of ${target.rigName}.`)
-  throw new AppError('conflict', `No revision of ${target.rigName} was issued yet. Issue one first; then there is something to send.`)
+  throw new AppError(
+    'conflict',
+    `No revision of ${target.rigName} was issued yet. Issue one first; then there is something to send.`,
+  )
 }
 
 async function partyContacts(tx: Db, actor: MemberActor): Promise<PackContactInput[]> {

@@ -4,9 +4,12 @@ import { ink } from './ink'
 
 const css = readFileSync(new URL('../../../app/globals.css', import.meta.url), 'utf8')
 
-it.each(Object.entries(ink).filter(([name]) => name !== 'sheet' && name !== 'spike'))('prints %s as the paper theme shows it', (name, colour) => {
-  expect(new RegExp(`--(?:color-)?${name}:\\s*([^;]+);`).exec(css)?.[1]?.trim()).toBe(colour)
-})
+it.each(Object.entries(ink).filter(([name]) => name !== 'sheet' && name !== 'spike'))(
+  'prints %s as the paper theme shows it',
+  (name, colour) => {
+    expect(new RegExp(`--(?:color-)?${name}:\\s*([^;]+);`).exec(css)?.[1]?.trim()).toBe(colour)
+  },
+)
 
 it('prints spike as the darker spike of text, on white paper', () => {
   expect(/--(?:color-)?spike-text:\s*([^;]+);/.exec(css)?.[1]?.trim()).toBe(ink.spike)

@@ -16,7 +16,9 @@ export function registerFonts(): Promise<void> {
     }
     Font.registerHyphenationCallback((word) => [word])
     await Promise.all(
-      pdfFaces.map(({ family, weight, style }) => Font.load({ fontFamily: family, fontWeight: weight, fontStyle: style })),
+      pdfFaces.map(({ family, weight, style }) =>
+        Font.load({ fontFamily: family, fontWeight: weight, fontStyle: style }),
+      ),
     )
   })()
   return loading

@@ -26,7 +26,9 @@ describe('a pack rendered in a thread of its own', () => {
 
   it('is refused for good when it is larger than any reader could want', async () => {
     const note = 'x'.repeat(5 * 1024 * 1024)
-    await expect(renderInThread({ pack: { ...pack, revision: { ...pack.revision, note } }, links })).rejects.toBeInstanceOf(PackTooLarge)
+    await expect(
+      renderInThread({ pack: { ...pack, revision: { ...pack.revision, note } }, links }),
+    ).rejects.toBeInstanceOf(PackTooLarge)
   })
 
   it('tells what went wrong in the thread', async () => {

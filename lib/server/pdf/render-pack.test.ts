@@ -3,14 +3,24 @@ import { printableCharacters } from '@/fonts/printable-characters'
 import { composePack } from '@/lib/advance/pack'
 import type { PackDocument } from '@/lib/advance/pack-document'
 import type { RigSpec } from '@/lib/advance/revision-document'
-import { sampleContacts, sampleDrum, sampleHire, sampleRevision, sampleShow, sampleSpec } from '@/lib/advance/sample-revision'
+import {
+  sampleContacts,
+  sampleDrum,
+  sampleHire,
+  sampleRevision,
+  sampleShow,
+  sampleSpec,
+} from '@/lib/advance/sample-revision'
 import { newPiece } from '@/plots/model/document'
 import type { PdfFile } from '../../../tests/helpers/read-pdf'
 import { readPdf } from '../../../tests/helpers/read-pdf'
 import type { PackLinks } from './pack/pack-pdf'
 import { renderPack } from './render-pack'
 
-const links = { reply: `https://hoopwright.example/r/${'r'.repeat(43)}`, bench: `https://hoopwright.example/b/${'b'.repeat(43)}` }
+const links = {
+  reply: `https://hoopwright.example/r/${'r'.repeat(43)}`,
+  bench: `https://hoopwright.example/b/${'b'.repeat(43)}`,
+}
 const revisionOf = (spec: RigSpec) => ({
   ...{ number: 7, issuedAt: '2031-09-20T10:00:00.000Z', note: 'Tom 13 is fine too.', document: sampleRevision(spec) },
 })
@@ -41,7 +51,19 @@ describe('the PDF of a venue’s pack', () => {
   const titled = (title: string) => file.pages.filter((page) => page.text.includes(title))
 
   it('has a cover, plot, kit, channels, lines, a sheet for each drum, and cautions', () => {
-    const heads = ['Pack', 'Plot', 'Kit', 'Channel list', 'Lines', 'Tuning sheet, Kick 22', 'Tuning sheet, Snare 14', 'Tuning sheet, Tom 12', 'Tuning sheet, Tom 14', 'Tuning sheet, Floor tom 16', 'Cautions']
+    const heads = [
+      'Pack',
+      'Plot',
+      'Kit',
+      'Channel list',
+      'Lines',
+      'Tuning sheet, Kick 22',
+      'Tuning sheet, Snare 14',
+      'Tuning sheet, Tom 12',
+      'Tuning sheet, Tom 14',
+      'Tuning sheet, Floor tom 16',
+      'Cautions',
+    ]
     expect(file.pages.map((page) => page.text.split('Saltmarsh Radio')[0]?.trim())).toEqual(heads)
     expect(file.counted).toBe(heads.length)
   })
@@ -64,13 +86,27 @@ describe('the PDF of a venue’s pack', () => {
     const [lines] = titled('That’s all from us')
     expect(lines?.text).toContain('Tom 12, 12 in across, 8 deep (305 × 203 mm), 6 lugs')
     expect(lines?.text).toContain('brought by Fenland Backline')
-    for (const word of ['As asked', 'Instead', 'Not yet', 'Can’t', 'of 4', 'of 8']) expect(lines?.text.replace(/\s+/g, ' ')).toContain(word)
+    for (const word of ['As asked', 'Instead', 'Not yet', 'Can’t', 'of 4', 'of 8'])
+      expect(lines?.text.replace(/\s+/g, ' ')).toContain(word)
   })
 
   it('leads each head: note, tap with its bounds, gauge, lug order, tolerance, cautions', () => {
     const [sheet] = titled('Tuning sheet, Tom 12')
     // C♯3 at A4 = 440 Hz is 138.59 Hz, a minor third over it E3 164.81 Hz (equal temperament).
-    for (const words of ['138.6 Hz', 'C♯3', '164.8 Hz', 'E3', 'Lug order: 1, 4, 2, 5, 3, 6', '±10 cents', 'relative to this gauge', 'clockwise from the badge', 'NIOSH 98-126', 'licensed or competent people decide', '1st gauge', '2nd tap Hz']) {
+    for (const words of [
+      '138.6 Hz',
+      'C♯3',
+      '164.8 Hz',
+      'E3',
+      'Lug order: 1, 4, 2, 5, 3, 6',
+      '±10 cents',
+      'relative to this gauge',
+      'clockwise from the badge',
+      'NIOSH 98-126',
+      'licensed or competent people decide',
+      '1st gauge',
+      '2nd tap Hz',
+    ]) {
       expect(sheet?.text.replace(/\s+/g, ' ')).toContain(words)
     }
   })
@@ -93,7 +129,9 @@ describe('the plot on paper', () => {
   /** The riser is the one dashed square of the drawing. */
   const risers = (file: PdfFile) => {
     const plot = file.pages.find((page) => page.text.trim().startsWith('Plot'))
-    return (plot?.boxes ?? []).filter((box) => box.dashed && box.points >= 4 && box.widthMm > 20 && Math.abs(box.widthMm - box.heightMm) < 0.2)
+    return (plot?.boxes ?? []).filter(
+      (box) => box.dashed && box.points >= 4 && box.widthMm > 20 && Math.abs(box.widthMm - box.heightMm) < 0.2,
+    )
   }
   // 8 × 8 ft exactly, on a stage small enough for the larger of the two scales.
   const riser = newPiece({ id: 'riser', kind: 'riser', yM: 3, widthM: 2.4384, depthM: 2.4384 })
@@ -131,7 +169,10 @@ describe('the plot on paper', () => {
 describe('the PDF of a supplier’s pack', () => {
   it('has its lines and no sheet, plot or bench link; a preview says where the code will stand', async () => {
     const file = await print(supplierPack, { reply: null, bench: null })
-    const text = file.pages.map((page) => page.text).join(' ').replace(/\s+/g, ' ')
+    const text = file.pages
+      .map((page) => page.text)
+      .join(' ')
+      .replace(/\s+/g, ' ')
     expect(file.pages).toHaveLength(3)
     for (const words of ['Fenland Backline', 'SR-1031', 'Kick 22', 'once it is sent']) expect(text).toContain(words)
     for (const words of ['Tuning sheet', 'Ride 21', 'Channel list', 'Wren']) expect(text).not.toContain(words)
@@ -148,7 +189,11 @@ describe('words of any length and language', () => {
     const pack = venuePack({ ...sampleSpec, kit: [], channels: [] })
     const file = await print({ ...pack, revision: { ...pack.revision, note: [...row].join(' ') } })
     const text = file.pages[0]?.text ?? ''
-    expect([...row].filter((character) => !/\s/u.test(character) && !misread.includes(character) && !text.includes(character))).toEqual([])
+    expect(
+      [...row].filter(
+        (character) => !/\s/u.test(character) && !misread.includes(character) && !text.includes(character),
+      ),
+    ).toEqual([])
   })
 
   it('leave no character out of the rows', () => {
@@ -159,7 +204,14 @@ describe('words of any length and language', () => {
     const kit = Array.from({ length: 3 }, (_, index) =>
       sampleDrum(
         { id: `d-${index}`, name: `Drum ${index + 1} ${'of a long name '.repeat(5)}`.trim(), position: index },
-        { role: 'tom', diameterIn: 12, depthIn: 8, lugs: 12, note: { semitone: 50, cents: 3 }, muffling: 'a '.repeat(100) },
+        {
+          role: 'tom',
+          diameterIn: 12,
+          depthIn: 8,
+          lugs: 12,
+          note: { semitone: 50, cents: 3 },
+          muffling: 'a '.repeat(100),
+        },
       ),
     )
     for (const paper of ['A4', 'Letter'] as const) {

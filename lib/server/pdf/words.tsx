@@ -7,7 +7,13 @@ type Style = Exclude<NonNullable<ComponentProps<typeof Text>['style']>, readonly
 type WordsProps = { children: ReactNode; size?: number; colour?: keyof typeof ink; bold?: boolean; style?: Style }
 
 function words(family: keyof typeof families, usual: { size: number; leading: number; bold?: boolean }) {
-  return function Words({ children, size = usual.size, colour = 'ink', bold = usual.bold ?? false, style }: WordsProps) {
+  return function Words({
+    children,
+    size = usual.size,
+    colour = 'ink',
+    bold = usual.bold ?? false,
+    style,
+  }: WordsProps) {
     const own: Style = {
       fontFamily: families[family],
       fontSize: size,

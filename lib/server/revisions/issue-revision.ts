@@ -52,7 +52,13 @@ export async function issueRevision(actor: Actor, input: IssueRevision & { rigId
       actor,
       lines.map(({ lineId, hash, position, content }) => ({ revisionId: id, lineId, hash, position, content })),
     )
-    await audit(tx, actor, 'revision.issue', { type: 'revision', id }, { rigId: input.rigId, number, lines: lines.length })
+    await audit(
+      tx,
+      actor,
+      'revision.issue',
+      { type: 'revision', id },
+      { rigId: input.rigId, number, lines: lines.length },
+    )
     await notifyLive(tx, actor.partyId, [`revision:${input.rigId}`, `run:${spec.tour.id}`])
     const issued = await findRevision(tx, actor, id)
     if (!issued) throw new Error('the revision was just written')
@@ -61,7 +67,8 @@ export async function issueRevision(actor: Actor, input: IssueRevision & { rigId
 }
 
 function sameRequest(found: NonNullable<Awaited<ReturnType<typeof findRevision>>>, rigId: string): RevisionSummary {
-  if (found.rigId !== rigId) throw new AppError('conflict', 'This id belongs to a revision of another rig. Nothing was issued.')
+  if (found.rigId !== rigId)
+    throw new AppError('conflict', 'This id belongs to a revision of another rig. Nothing was issued.')
   return revisionSummary({ ...found, lines: upgradeRevisionDocument(found.document).lines.length })
 }
 

@@ -9,6 +9,7 @@ import { revisionSummary } from './revision-summary'
 /** The revisions of a rig, newest first. */
 export async function listRigRevisions(actor: Actor, input: { rigId: string }): Promise<RevisionSummary[]> {
   assertCan(actor, 'party:read')
-  if (!(await findRigHead(db(), actor, input.rigId))) throw new AppError('not-found', 'There is no such rig in this party.')
+  if (!(await findRigHead(db(), actor, input.rigId)))
+    throw new AppError('not-found', 'There is no such rig in this party.')
   return (await listRows(db(), actor, input)).map(revisionSummary)
 }

@@ -11,7 +11,11 @@ export function CautionPage({ pack }: { pack: PackDocument }) {
   return (
     <PageFrame pack={pack} title="Cautions">
       {pack.cautions.map(({ name, words }) => (
-        <View key={name} wrap={false} style={{ marginBottom: mm(4), borderLeft: `3pt solid ${ink.ink}`, paddingLeft: 8 }}>
+        <View
+          key={name}
+          wrap={false}
+          style={{ marginBottom: mm(4), borderLeft: `3pt solid ${ink.ink}`, paddingLeft: 8 }}
+        >
           <Heading size={13}>{name}</Heading>
           <Plain size={10}>{words}</Plain>
         </View>

@@ -78,7 +78,10 @@ function ChangedSection({ pack: { changed } }: { pack: PackDocument }) {
 function Section({ title, children }: { title: string; children: ReactNode }) {
   return (
     <View style={{ marginBottom: mm(4) }}>
-      <View minPresenceAhead={40} style={{ borderBottom: `0.75pt solid ${ink.ink}`, paddingBottom: 1, marginBottom: 2 }}>
+      <View
+        minPresenceAhead={40}
+        style={{ borderBottom: `0.75pt solid ${ink.ink}`, paddingBottom: 1, marginBottom: 2 }}
+      >
         <Heading size={12}>{title}</Heading>
       </View>
       {children}

@@ -33,7 +33,9 @@ export function HeadColumn({ head }: { head: SheetHead }) {
                 tap beside a lug
               </Plain>
               <Figures bold size={13} style={{ lineHeight: 1.1 }}>{`${head.tap.hz.toFixed(0)} Hz`}</Figures>
-              <Figures size={7.5}>{`${head.tap.lowHz.toFixed(0)} to ${head.tap.highHz.toFixed(0)}, near ${head.tap.name}`}</Figures>
+              <Figures
+                size={7.5}
+              >{`${head.tap.lowHz.toFixed(0)} to ${head.tap.highHz.toFixed(0)}, near ${head.tap.name}`}</Figures>
             </View>
           )}
           <View style={{ marginTop: mm(1.5) }}>
@@ -46,7 +48,10 @@ export function HeadColumn({ head }: { head: SheetHead }) {
             <Plain size={7.5}>{head.gauge === null ? 'none noted' : 'as noted, relative to this gauge'}</Plain>
           </View>
           {head.rodPullN !== null && (
-            <Plain size={7.5} style={{ marginTop: mm(1.5) }}>{`about ${Math.round(head.rodPullN / 10) * 10} N on each rod`}</Plain>
+            <Plain
+              size={7.5}
+              style={{ marginTop: mm(1.5) }}
+            >{`about ${Math.round(head.rodPullN / 10) * 10} N on each rod`}</Plain>
           )}
           {head.without && (
             <Plain size={8} style={{ marginTop: mm(1.5) }}>
@@ -68,7 +73,13 @@ function noteWords({ name, cents }: { name: string; cents: number }): string {
 
 /** Blank columns for two passes, the lugs in the order in which they are turned. */
 function ReadingTable({ head }: { head: SheetHead }) {
-  const cell = { flex: 1, borderLeft: `0.4pt solid ${ink.soft}`, height: mm(rowMm), justifyContent: 'center', alignItems: 'center' } as const
+  const cell = {
+    flex: 1,
+    borderLeft: `0.4pt solid ${ink.soft}`,
+    height: mm(rowMm),
+    justifyContent: 'center',
+    alignItems: 'center',
+  } as const
   return (
     <View style={{ marginTop: mm(1), borderTop: `0.75pt solid ${ink.ink}`, borderRight: `0.4pt solid ${ink.soft}` }}>
       <View style={{ flexDirection: 'row', borderBottom: `0.75pt solid ${ink.ink}` }}>

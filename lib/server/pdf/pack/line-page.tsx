@@ -45,7 +45,9 @@ export function LinePage({ pack }: { pack: PackDocument }) {
 
 function cells(line: PackLine): ReactNode[] {
   const boxes = line.asked
-    ? ['as asked', 'instead', 'not yet', 'can’t'].map((answer) => <TickBox key={answer} of={line.count > 1 ? line.count : null} />)
+    ? ['as asked', 'instead', 'not yet', 'can’t'].map((answer) => (
+        <TickBox key={answer} of={line.count > 1 ? line.count : null} />
+      ))
     : [null, null, null, null]
   return [
     <Figures key="number" bold size={11}>

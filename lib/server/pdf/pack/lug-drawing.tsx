@@ -15,7 +15,10 @@ const textSize = 9
 export function LugDrawing({ head, sizeMm }: { head: SheetHead; sizeMm: number }) {
   const middle = mm(sizeMm) / 2
   const hoop = middle * hoopShare
-  const at = (lug: { x: number; y: number }, radius: number) => ({ x: middle + lug.x * radius, y: middle + lug.y * radius })
+  const at = (lug: { x: number; y: number }, radius: number) => ({
+    x: middle + lug.x * radius,
+    y: middle + lug.y * radius,
+  })
   const inOrder = [...head.lugs].sort((a, b) => a.turn - b.turn)
   const stroke = { stroke: ink.ink, strokeWidth: mm(strokeMm.fine) }
   return (
@@ -68,7 +71,13 @@ export function LugDrawing({ head, sizeMm }: { head: SheetHead; sizeMm: number }
           .join(' ')}
         fill={ink.ink}
       />
-      <Text x={middle} y={middle - hoop * 1.2} textAnchor="middle" fill={ink.ink} {...{ fontFamily: families.text, fontSize: 7.5, fontWeight: 400 }}>
+      <Text
+        x={middle}
+        y={middle - hoop * 1.2}
+        textAnchor="middle"
+        fill={ink.ink}
+        {...{ fontFamily: families.text, fontSize: 7.5, fontWeight: 400 }}
+      >
         badge
       </Text>
     </Svg>

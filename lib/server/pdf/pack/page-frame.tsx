@@ -30,12 +30,32 @@ export function PageFrame({ pack, title, orientation = 'portrait', children }: F
         paddingHorizontal: mm(marginMm.side),
       }}
     >
-      <View fixed style={{ ...edge, ...row, top: mm(7), alignItems: 'flex-end', paddingBottom: 2, borderBottom: `0.75pt solid ${ink.ink}` }}>
+      <View
+        fixed
+        style={{
+          ...edge,
+          ...row,
+          top: mm(7),
+          alignItems: 'flex-end',
+          paddingBottom: 2,
+          borderBottom: `0.75pt solid ${ink.ink}`,
+        }}
+      >
         <Heading size={10}>{title}</Heading>
         <Plain size={8}>{`${pack.party}, ${pack.tour}`}</Plain>
       </View>
       {children}
-      <View fixed style={{ ...edge, ...row, bottom: mm(5.5), alignItems: 'flex-start', paddingTop: 2, borderTop: `0.5pt solid ${ink.ink}` }}>
+      <View
+        fixed
+        style={{
+          ...edge,
+          ...row,
+          bottom: mm(5.5),
+          alignItems: 'flex-start',
+          paddingTop: 2,
+          borderTop: `0.5pt solid ${ink.ink}`,
+        }}
+      >
         <Plain size={8}>{`Revision ${pack.revision.number}, ${pack.rig}`}</Plain>
         <Plain size={8}>{`For ${pack.recipient.name}`}</Plain>
         <PageNumber />

@@ -62,7 +62,13 @@ export function PlotPages({ pack, plot }: { pack: PackDocument; plot: PackPlot }
               Figures beside microphones are channels.
             </Plain>
           </View>
-          <View style={{ height: mm(underHead(contentMm(pack.paper, sheet.inset.orientation)).heightMm), alignItems: 'center', justifyContent: 'center' }}>
+          <View
+            style={{
+              height: mm(underHead(contentMm(pack.paper, sheet.inset.orientation)).heightMm),
+              alignItems: 'center',
+              justifyContent: 'center',
+            }}
+          >
             <SceneSvg scene={sheet.inset.scene} scale={sheet.inset.scale} />
           </View>
         </PageFrame>

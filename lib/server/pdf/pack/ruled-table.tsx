@@ -14,7 +14,13 @@ export interface Column {
 const alignment = { left: 'flex-start', center: 'center', right: 'flex-end' } as const
 
 /** Rows between hairlines under a head that comes again on each page; a row is never broken. */
-export function RuledTable({ columns, rows }: { columns: readonly Column[]; rows: readonly { key: string; cells: readonly ReactNode[] }[] }) {
+export function RuledTable({
+  columns,
+  rows,
+}: {
+  columns: readonly Column[]
+  rows: readonly { key: string; cells: readonly ReactNode[] }[]
+}) {
   return (
     <View>
       <View fixed style={{ flexDirection: 'row', borderBottom: `1pt solid ${ink.ink}`, paddingBottom: 2 }}>
@@ -27,7 +33,11 @@ export function RuledTable({ columns, rows }: { columns: readonly Column[]; rows
         ))}
       </View>
       {rows.map(({ key, cells }) => (
-        <View key={key} wrap={false} style={{ flexDirection: 'row', borderBottom: `0.4pt solid ${ink.soft}`, paddingVertical: 3 }}>
+        <View
+          key={key}
+          wrap={false}
+          style={{ flexDirection: 'row', borderBottom: `0.4pt solid ${ink.soft}`, paddingVertical: 3 }}
+        >
           {columns.map((column, index) => (
             <Cell key={index} column={column}>
               {cells[index]}

@@ -17,9 +17,19 @@ const cautionWords: Record<SheetHead['cautions'][number], string> = {
 }
 
 /** One drum's sheet: what to bring each head to, in which order, with blank columns for the readings. */
-export function SheetPage({ pack, sheet, benchLink }: { pack: PackDocument; sheet: TuningSheet; benchLink: string | null }) {
+export function SheetPage({
+  pack,
+  sheet,
+  benchLink,
+}: {
+  pack: PackDocument
+  sheet: TuningSheet
+  benchLink: string | null
+}) {
   const [batter] = sheet.heads
-  const warnings = sheet.heads.flatMap((head) => head.cautions.map((caution) => `${head.side}: ${cautionWords[caution]}`))
+  const warnings = sheet.heads.flatMap((head) =>
+    head.cautions.map((caution) => `${head.side}: ${cautionWords[caution]}`),
+  )
   return (
     <PageFrame pack={pack} title={`Tuning sheet, ${sheet.name}`}>
       <View style={{ flexDirection: 'row', justifyContent: 'space-between' }}>
@@ -44,15 +54,30 @@ export function SheetPage({ pack, sheet, benchLink }: { pack: PackDocument; shee
       </View>
       <View style={{ flexDirection: 'row', marginTop: mm(2) }}>
         {sheet.heads.map((head) => (
-          <View key={head.side} style={{ flex: 1, paddingRight: head.side === 'batter' && sheet.heads.length > 1 ? mm(6) : 0 }}>
+          <View
+            key={head.side}
+            style={{ flex: 1, paddingRight: head.side === 'batter' && sheet.heads.length > 1 ? mm(6) : 0 }}
+          >
             <HeadColumn head={head} />
           </View>
         ))}
         {sheet.heads.length === 1 && <View style={{ flex: 1 }} />}
       </View>
-      <View style={{ flexDirection: 'row', flexWrap: 'wrap', marginTop: mm(2.5), borderTop: `0.75pt solid ${ink.ink}`, paddingTop: 2 }}>
+      <View
+        style={{
+          flexDirection: 'row',
+          flexWrap: 'wrap',
+          marginTop: mm(2.5),
+          borderTop: `0.75pt solid ${ink.ink}`,
+          paddingTop: 2,
+        }}
+      >
         {tuningSteps.map(({ name, words }, index) => (
-          <View key={name} wrap={false} style={{ width: '50%', paddingRight: mm(4), paddingBottom: 1.5, flexDirection: 'row' }}>
+          <View
+            key={name}
+            wrap={false}
+            style={{ width: '50%', paddingRight: mm(4), paddingBottom: 1.5, flexDirection: 'row' }}
+          >
             <Plain size={8} bold style={{ width: mm(4.5) }}>
               {String(index + 1)}
             </Plain>

@@ -26,7 +26,10 @@ export default async function RevisionsPage({ params, searchParams }: PageProps<
     return (
       <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
         <h1 className="mb-6 text-4xl">Revisions</h1>
-        <EmptyState title="This tour has no rig yet" action={<ButtonLink href={`/tours/${tourId.data}/run` as Route}>Add the first rig</ButtonLink>}>
+        <EmptyState
+          title="This tour has no rig yet"
+          action={<ButtonLink href={`/tours/${tourId.data}/run` as Route}>Add the first rig</ButtonLink>}
+        >
           A revision freezes a rig: full, fly, acoustic. Add one on the run, then fill its kit.
         </EmptyState>
       </main>
@@ -35,13 +38,17 @@ export default async function RevisionsPage({ params, searchParams }: PageProps<
   const { next, revisions } = found
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
-      <RefreshOnLive topics={[`revision:${next.rigId}`, `kit:${next.rigId}`, `plot:${next.rigId}`, `patch:${next.rigId}`]} />
+      <RefreshOnLive
+        topics={[`revision:${next.rigId}`, `kit:${next.rigId}`, `plot:${next.rigId}`, `patch:${next.rigId}`]}
+      />
       <h1 className="mb-6 text-4xl">
         Revisions <span className="text-soft">{next.rigName}</span>
       </h1>
       <section aria-labelledby="next" className="mb-10">
         <h2 id="next" className="mb-3 text-2xl">
-          {next.state === 'same' ? `Nothing changed since revision ${next.number - 1}` : `Revision ${next.number} would be`}
+          {next.state === 'same'
+            ? `Nothing changed since revision ${next.number - 1}`
+            : `Revision ${next.number} would be`}
         </h2>
         <NextRevision tourId={tourId.data} next={next} mayIssue={rolesMay(actor.roles, 'revision:issue')} />
       </section>
@@ -70,11 +77,16 @@ function NextRevision({ tourId, next, mayIssue }: { tourId: string; next: Revisi
       </EmptyState>
     )
   }
-  if (next.state === 'same') return <p className="text-soft">A new revision can be issued as soon as the kit, the plot or the patch changes.</p>
+  if (next.state === 'same')
+    return <p className="text-soft">A new revision can be issued as soon as the kit, the plot or the patch changes.</p>
   const shows = next.shows === 1 ? '1 show' : `${next.shows} shows`
   return (
     <div className="flex flex-col gap-6">
-      {next.changes ? <ChangeList changes={next.changes} /> : <p>The first one: {next.lines} lines, the plot and the patch as they stand now.</p>}
+      {next.changes ? (
+        <ChangeList changes={next.changes} />
+      ) : (
+        <p>The first one: {next.lines} lines, the plot and the patch as they stand now.</p>
+      )}
       {mayIssue ? (
         <IssueRevisionForm
           key={next.number}

@@ -7,7 +7,6 @@ import type { PackReader } from '@/components/pack/preview-packs'
 import { ButtonLink } from '@/components/ui/button-link'
 import { instantWords } from '@/lib/advance/when-words'
 import { idSchema } from '@/lib/contracts/common'
-import { supplyWords } from '@/lib/contracts/kit'
 import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
 import { pageAnswer } from '@/lib/server/auth/page-answer'
@@ -36,11 +35,13 @@ export default async function RevisionPage({ params }: PageProps<'/tours/[tourId
           </h1>
           <p className="mt-1 max-w-prose whitespace-pre-line">{revision.note}</p>
           <p className="mt-1 text-sm text-soft">
-            Issued by {revision.issuedBy.name}, <span className="figures">{instantWords(revision.issuedAt, null)}</span>. {revision.pieces} pieces on the
-            plot, {revision.channels} channels. It never changes.
+            Issued by {revision.issuedBy.name}, <span className="figures">{instantWords(revision.issuedAt, null)}</span>
+            . {revision.pieces} pieces on the plot, {revision.channels} channels. It never changes.
           </p>
         </div>
-        <ButtonLink href={`/tours/${tourId}/revisions?rig=${revision.rigId}` as Route}>All revisions of {revision.rigName}</ButtonLink>
+        <ButtonLink href={`/tours/${tourId}/revisions?rig=${revision.rigId}` as Route}>
+          All revisions of {revision.rigName}
+        </ButtonLink>
       </div>
       <div className="flex flex-col gap-10">
         {revision.changes && (
@@ -58,10 +59,16 @@ export default async function RevisionPage({ params }: PageProps<'/tours/[tourId
           {revision.asked.length > 0 && (
             <AskedLines
               caption="What the revision asks"
-              lines={revision.asked.map((line) => ({ ...line, number: line.position, by: supplyWords[line.supply] }))}
+              lines={revision.asked.map((line) => ({
+                ...line,
+                number: line.position,
+                by: line.supply === 'rented' ? 'a supplier' : 'the venue',
+              }))}
             />
           )}
-          {revision.carried.length > 0 && <p className="mt-3 text-soft">Carried, so not asked for: {revision.carried.join(', ')}.</p>}
+          {revision.carried.length > 0 && (
+            <p className="mt-3 text-soft">Carried, so not asked for: {revision.carried.join(', ')}.</p>
+          )}
         </section>
         <section aria-labelledby="readers">
           <h2 id="readers" className="mb-3 text-2xl">
@@ -90,11 +97,21 @@ function readersOf(run: Run, rigId: string): PackReader[] {
   const shows = run.days.flatMap((day) => day.shows).filter((show) => show.rigId === rigId)
   const ids = new Set(shows.map((show) => show.id))
   return [
-    ...shows.map((show): PackReader => ({ of: { showId: show.id }, name: show.venueName, detail: [dateWords(show.date), show.town].filter(Boolean).join(', ') })),
+    ...shows.map((show): PackReader => ({
+      of: { showId: show.id },
+      name: show.venueName,
+      detail: [dateWords(show.date), show.town].filter(Boolean).join(', '),
+    })),
     ...run.hires.flatMap((hire): PackReader[] => {
       const covered = hire.showIds.filter((id) => ids.has(id)).length
       if (covered === 0) return []
-      return [{ of: { hireId: hire.id }, name: hire.supplierName, detail: `hire over ${covered === 1 ? '1 show' : `${covered} shows`}` }]
+      return [
+        {
+          of: { hireId: hire.id },
+          name: hire.supplierName,
+          detail: `hire over ${covered === 1 ? '1 show' : `${covered} shows`}`,
+        },
+      ]
     }),
   ]
 }

@@ -30,7 +30,9 @@ export default async function PackPage({ params }: PageProps<'/tours/[tourId]/re
             Revision {document.revision.number}, {document.rig}: {document.revision.note}
           </p>
         </div>
-        <ButtonLink href={`/tours/${tourId}/revisions/${state.revisionId}` as Route}>Revision {state.revisionNumber} and its other readers</ButtonLink>
+        <ButtonLink href={`/tours/${tourId}/revisions/${state.revisionId}` as Route}>
+          Revision {state.revisionNumber} and its other readers
+        </ButtonLink>
       </div>
       <div className="mb-10">
         <PdfState state={state} />
