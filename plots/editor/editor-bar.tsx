@@ -21,6 +21,7 @@ export interface EditorBarProps {
   onUndo: () => void
   onRedo: () => void
   onZoom: (factor: number) => void
+  onFitKit: () => void
   onFitPieces: () => void
   onFitStage: () => void
   stage: StageSize
@@ -67,6 +68,9 @@ export function EditorBar(props: EditorBarProps) {
         </div>
         {!isList && (
           <div role="group" aria-label="View" className="flex flex-wrap gap-1">
+            <Button className={tight} onClick={props.onFitKit}>
+              Show the kit
+            </Button>
             <Button className={tight} onClick={props.onFitPieces}>
               Show all pieces
             </Button>

@@ -5,7 +5,7 @@ import { EmptyState } from '@/components/ui/empty-state'
 import { Table, TableCell, TableHead, TableRow } from '@/components/ui/table'
 import { pieceHeadingDeg } from '../model/heading'
 import { piecesInOrder } from '../model/document'
-import { outputsOf, pieceKindOf } from '../symbols/piece-kinds'
+import { outputsOf, pieceKindOf, pieceLevel } from '../symbols/piece-kinds'
 import { AimSelect } from './aim-select'
 import { ChannelBox } from './channel-box'
 import { CommitInput } from './commit-input'
@@ -27,7 +27,7 @@ export function PieceList({
 }) {
   const { document, kit, units, mayEdit, act, nameOf } = parts
   const pieces = piecesInOrder(document).sort(
-    (a, b) => (pieceKindOf(b)?.level ?? 2) - (pieceKindOf(a)?.level ?? 2) || nameOf(a).localeCompare(nameOf(b)),
+    (a, b) => pieceLevel(b, kit) - pieceLevel(a, kit) || nameOf(a).localeCompare(nameOf(b)),
   )
   if (pieces.length === 0)
     return (
@@ -104,7 +104,7 @@ export function PieceList({
               <TableCell>
                 <Button
                   kind="quiet"
-                  className="px-1"
+                  className="px-1 whitespace-nowrap"
                   onClick={() => onRemove(piece.id)}
                   aria-label={`Take ${name} off the plot`}
                 >

@@ -28,7 +28,7 @@ import { placeWords } from './piece-words'
 import { PlotNotices } from './save-state'
 import { middleOf, Sheet } from './sheet'
 import { Shelf } from './shelf'
-import { piecesBounds, stageBounds } from './use-scene'
+import { kitBounds, piecesBounds, stageBounds } from './use-scene'
 import { useView } from './use-view'
 
 export interface PlotEditorProps {
@@ -65,7 +65,7 @@ export function PlotEditor(props: PlotEditorProps) {
       ),
     [channels],
   )
-  const [firstBounds] = useState(() => piecesBounds(document, kit))
+  const [firstBounds] = useState(() => kitBounds(document, kit))
   const { view, setView, size, isWide, attach, fit, zoom } = useView(firstBounds)
   const [chosen, setChosen] = useState<ReadonlySet<string>>(none)
   const [armed, setArmed] = useState<ShelfItem | null>(null)
@@ -150,6 +150,7 @@ export function PlotEditor(props: PlotEditorProps) {
           onUndo={() => step('undo')}
           onRedo={() => step('redo')}
           onZoom={zoom}
+          onFitKit={() => fit(kitBounds(document, kit))}
           onFitPieces={() => fit(piecesBounds(document, kit))}
           onFitStage={() => fit(stageBounds(document))}
           stage={document.stage}
@@ -159,7 +160,7 @@ export function PlotEditor(props: PlotEditorProps) {
         <PlotNotices state={state} session={session} nameOf={nameOf} />
         <div className={mayEdit ? 'grid gap-4 lg:grid-cols-[13rem_minmax(0,1fr)]' : ''}>
           {mayEdit && (
-            <div className="order-2 lg:order-none lg:max-h-[calc(100dvh-17rem)] lg:overflow-y-auto lg:pr-1">
+            <div className="order-2 lg:order-none lg:max-h-[max(26rem,calc(100dvh-20.5rem))] lg:overflow-y-auto lg:pr-1">
               <Shelf document={document} kit={kit} armed={armed} onArm={setArmed} onPlace={putByItself} />
             </div>
           )}
@@ -185,11 +186,11 @@ export function PlotEditor(props: PlotEditorProps) {
                 }}
                 onRemove={() => remove([...chosen])}
                 onZoom={zoom}
-                onFit={() => fit(piecesBounds(document, kit))}
+                onFit={() => fit(kitBounds(document, kit))}
               >
                 {isWide && note && (
                   <div
-                    className="absolute inset-y-0 right-0 w-72 overflow-y-auto bg-paper/90 px-4 py-3"
+                    className="absolute inset-y-0 right-0 w-72 overflow-y-auto bg-paper px-4 py-3"
                     onKeyDown={(event) => event.stopPropagation()}
                   >
                     {note}

@@ -107,7 +107,7 @@ function ShelfLine({
         )}
       >
         <span>{item.name}</span>
-        <span className={classes('figures text-sm', isArmed ? 'text-paper' : 'text-soft')}>{item.hint}</span>
+        <span className={classes('figures shrink-0 text-sm', isArmed ? 'text-paper' : 'text-soft')}>{item.hint}</span>
       </button>
       {isArmed && (
         <p className="flex flex-wrap items-baseline gap-2 px-1 py-1 text-sm">

@@ -1,7 +1,7 @@
 import { useMemo } from 'react'
 import { boundsUnion, growBounds, type Bounds } from '../geometry/bounds'
 import { footprintBounds } from '../geometry/footprint'
-import { piecesInOrder, type PlotDocument } from '../model/document'
+import { piecesInOrder, type Piece, type PlotDocument } from '../model/document'
 import type { KitById } from '../model/kit-piece'
 import { buildScene, type ChannelNumbers, type Scene } from '../render/build-scene'
 import { screenTextSizes } from '../render/text-size'
@@ -30,7 +30,18 @@ export function stageBounds({ stage }: PlotDocument): Bounds {
 
 /** Everything placed, with some room; the stage while nothing is. */
 export function piecesBounds(document: PlotDocument, kit: KitById): Bounds {
-  const boxes = piecesInOrder(document).map((piece) => footprintBounds(pieceFootprint(document, piece, kit)))
+  return boundsOf(document, kit, () => true) ?? stageBounds(document)
+}
+
+/** The kit close by, with some room; everything while no kit piece is placed. */
+export function kitBounds(document: PlotDocument, kit: KitById): Bounds {
+  return boundsOf(document, kit, (piece) => piece.kitEntryId !== null) ?? piecesBounds(document, kit)
+}
+
+function boundsOf(document: PlotDocument, kit: KitById, wanted: (piece: Piece) => boolean): Bounds | null {
+  const boxes = piecesInOrder(document)
+    .filter(wanted)
+    .map((piece) => footprintBounds(pieceFootprint(document, piece, kit)))
   const union = boundsUnion(boxes)
-  return union ? growBounds(union, 0.35) : stageBounds(document)
+  return union && growBounds(union, 0.3)
 }

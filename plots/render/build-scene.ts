@@ -5,7 +5,7 @@ import type { KitById } from '../model/kit-piece'
 import { drawPiece, isGhost } from '../symbols/draw-piece'
 import { areaWords, lengthWords, type LengthUnits } from '../symbols/length-words'
 import { pieceFootprint } from '../symbols/piece-footprint'
-import { outputsOf, pieceKindOf, pieceName } from '../symbols/piece-kinds'
+import { outputsOf, pieceKindOf, pieceLevel, pieceName } from '../symbols/piece-kinds'
 import type { DrawnShape } from '../symbols/shape'
 import { placeLabels, type LabelRequest, type Obstacle } from './place-labels'
 import { stageFrame, stageWords, type StageWords } from './stage-frame'
@@ -45,22 +45,28 @@ export interface SceneInput {
   readonly unlabelled?: (piece: Piece) => boolean
 }
 
+/** A kit piece drawn smaller than this many name heights is a mark among many, not a thing to read. */
+const SMALL_EM = 3.3
+
 /** The one drawing of a plot, from which the screen, the SVG and the PDF are all painted. Pure. */
 export function buildScene(input: SceneInput): Scene {
   const { document, kit, stage, sizes } = input
   const frame = stage ? stageFrame(stage, sizes, input.units, input.words ?? stageWords) : null
   const pieces = piecesInOrder(document)
     .filter((piece) => input.only?.(piece) ?? true)
-    .sort((a, b) => levelOf(a) - levelOf(b))
+    .sort((a, b) => pieceLevel(a, kit) - pieceLevel(b, kit))
   const items: SceneItem[] = (frame?.shapes ?? []).map((shape) => ({ ...shape, pieceId: null }))
   const requests: LabelRequest[] = []
   const obstacles: Obstacle[] = []
   for (const piece of pieces) {
     for (const shape of drawPiece(document, piece, kit)) items.push({ ...shape, pieceId: piece.id })
     const footprint = pieceFootprint(document, piece, kit)
-    if (levelOf(piece) >= 2) obstacles.push({ pieceId: piece.id, footprint, weight: levelOf(piece) === 4 ? 3 : 1 })
+    const level = pieceLevel(piece, kit)
+    if (level >= 2) obstacles.push({ pieceId: piece.id, footprint, weight: level === 4 ? 3 : 1 })
     if (!input.unlabelled?.(piece)) {
-      const request = labelOf(piece, input)
+      const acrossM = footprint.shape === 'circle' ? footprint.radiusM * 2 : footprint.depthM
+      const isSmall = acrossM < SMALL_EM * sizes.name
+      const request = labelOf(piece, input, isSmall)
       if (request) requests.push({ ...request, pieceId: piece.id, footprint })
     }
   }
@@ -75,11 +81,11 @@ export function buildScene(input: SceneInput): Scene {
   return { items, bounds, unplaced: labels.unplaced }
 }
 
-function levelOf(piece: Piece): number {
-  return pieceKindOf(piece)?.level ?? 2
-}
-
-function labelOf(piece: Piece, input: SceneInput): Omit<LabelRequest, 'pieceId' | 'footprint'> | null {
+function labelOf(
+  piece: Piece,
+  input: SceneInput,
+  isSmall: boolean,
+): Omit<LabelRequest, 'pieceId' | 'footprint'> | null {
   const { kit, channels, units } = input
   const name = pieceName(piece, kit)
   const numbers = outputsOf(piece)
@@ -101,15 +107,17 @@ function labelOf(piece: Piece, input: SceneInput): Omit<LabelRequest, 'pieceId' 
     return {
       prefer: 'inside',
       priority: 0,
-      lines: [
-        { text: name, role: 'name', ink: 'ink' },
-        ...(entry.noteLabel === null ? [] : [{ text: entry.noteLabel, role: 'note', ink: 'soft' } as const]),
-      ],
+      lines: isSmall
+        ? [{ text: name, role: 'small', ink: 'ink' }]
+        : [
+            { text: name, role: 'name', ink: 'ink' },
+            ...(entry.noteLabel === null ? [] : [{ text: entry.noteLabel, role: 'note', ink: 'soft' } as const]),
+          ],
     }
   if (entry?.kind === 'cymbal')
     // Clear of the bell.
     return {
-      prefer: 'inside',
+      prefer: isSmall ? 'only inside' : 'inside',
       shifts: [0.58, -0.58],
       priority: 3,
       lines: [{ text: name, role: 'small', ink: 'brass' }],
@@ -121,7 +129,7 @@ function labelOf(piece: Piece, input: SceneInput): Omit<LabelRequest, 'pieceId' 
     return { prefer: 'corner', priority: 5, lines: [small(`${name.toLowerCase()} ${area}, ${high} high`)] }
   }
   return {
-    prefer: 'inside',
+    prefer: isSmall && entry?.kind === 'hardware' ? 'only inside' : 'inside',
     priority: 4,
     lines: [
       { text: name, role: 'small', ink: 'ink' },

@@ -9,8 +9,11 @@ export interface LabelRequest {
   readonly pieceId: string
   readonly lines: readonly { readonly text: string; readonly role: TextRole; readonly ink: Ink }[]
   readonly footprint: Footprint
-  /** `inside` first if it fits, `beside` never inside, `corner` in the upstage stage-right corner of a flat piece. */
-  readonly prefer: 'inside' | 'beside' | 'corner'
+  /**
+   * `inside` first if it fits, `only inside` or not at all, `beside` never inside, `corner` in the upstage stage-right
+   * corner of a flat piece.
+   */
+  readonly prefer: 'inside' | 'only inside' | 'beside' | 'corner'
   /** Where inside, from the middle (0) to the upstage edge (1), first wish first; the middle when left out. */
   readonly shifts?: readonly number[]
   /** Low goes first and so gets its place. */
@@ -89,7 +92,7 @@ function* candidatesFor(request: LabelRequest, sizes: TextSizes): Generator<Cand
   const first = lines[0]
   if (!first) return
   const versions = lines.length > 1 ? [lines, [first]] : [lines]
-  if (request.prefer === 'inside')
+  if (request.prefer === 'inside' || request.prefer === 'only inside')
     for (const version of versions)
       for (const shift of request.shifts ?? MIDDLE_FIRST) {
         const size = sizeOf(version, sizes)
@@ -118,7 +121,7 @@ function* candidatesFor(request: LabelRequest, sizes: TextSizes): Generator<Cand
     ] as const)
       yield { box: inset(left, top), lines, isInside: true, leaderFrom: null }
   }
-  yield* besides(request, sizes)
+  if (request.prefer !== 'only inside') yield* besides(request, sizes)
 }
 
 function* besides({ footprint, lines }: LabelRequest, sizes: TextSizes): Generator<Candidate> {

@@ -105,3 +105,10 @@ export function pieceName(piece: Piece, kit: KitById): string {
   const entry = piece.kitEntryId === null ? undefined : kit.get(piece.kitEntryId)
   return entry?.name ?? pieceKindOf(piece)?.word ?? piece.kind
 }
+
+/** Drawing order of a piece: low lies under high. Risers and rugs (0 and 1) are ground that others stand on. */
+export function pieceLevel(piece: Piece, kit: KitById): number {
+  const entry = piece.kitEntryId === null ? undefined : kit.get(piece.kitEntryId)
+  if (entry?.kind === 'hardware' && entry.type === 'rug') return 1
+  return pieceKindOf(piece)?.level ?? 2
+}

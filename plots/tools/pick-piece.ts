@@ -3,7 +3,7 @@ import type { PlotPoint } from '../geometry/point'
 import { piecesInOrder, type Piece, type PlotDocument } from '../model/document'
 import type { KitById } from '../model/kit-piece'
 import { pieceFootprint } from '../symbols/piece-footprint'
-import { pieceKindOf } from '../symbols/piece-kinds'
+import { pieceLevel } from '../symbols/piece-kinds'
 
 /**
  * The piece under the pointer: the one on top, the smaller of two at one level. A riser or a rug answers at its edge
@@ -17,7 +17,7 @@ export function pickPiece(
   chosen: ReadonlySet<string>,
 ): Piece | null {
   const found = piecesInOrder(document)
-    .map((piece) => ({ piece, footprint: pieceFootprint(document, piece, kit), level: pieceKindOf(piece)?.level ?? 2 }))
+    .map((piece) => ({ piece, footprint: pieceFootprint(document, piece, kit), level: pieceLevel(piece, kit) }))
     .filter(({ piece, footprint, level }) =>
       level <= 1 && !chosen.has(piece.id)
         ? isOnEdge(footprint, point, slackM)

@@ -3,7 +3,7 @@ import { distanceM, plotPoint, type PlotPoint } from '../geometry/point'
 import { newPiece, pieceCentre, piecesInOrder, type Piece, type PlotDocument } from '../model/document'
 import type { KitById, KitPiece } from '../model/kit-piece'
 import { pieceFootprint } from '../symbols/piece-footprint'
-import { pieceKindOf, pieceKinds, type PieceKind } from '../symbols/piece-kinds'
+import { pieceKindOf, pieceKinds, pieceLevel, type PieceKind } from '../symbols/piece-kinds'
 import { tidy } from './move-pieces'
 
 /** Something that can be put on the plot. */
@@ -94,9 +94,7 @@ export function pieceByItself(
 }
 
 function freeSpot(item: ShelfItem, document: PlotDocument, kit: KitById, near: PlotPoint): PlotPoint {
-  const solids = piecesInOrder(document).filter(
-    (piece) => (pieceKindOf(piece)?.level ?? 2) >= 2 && piece.kind !== 'text',
-  )
+  const solids = piecesInOrder(document).filter((piece) => pieceLevel(piece, kit) >= 2 && piece.kind !== 'text')
   const isFree = (at: PlotPoint) => {
     const footprint = pieceFootprint(document, pieceOf(item, 'new', at, document), kit)
     return !solids.some((piece) => footprintsOverlap(footprint, pieceFootprint(document, piece, kit)))

@@ -1,8 +1,7 @@
-import type { Metadata, Route } from 'next'
+import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { ChannelTable } from '@/components/patch/channel-table'
 import { EmptyState } from '@/components/ui/empty-state'
-import { NavLinks } from '@/components/ui/nav-links'
 import { idSchema } from '@/lib/contracts/common'
 import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
@@ -22,22 +21,10 @@ export default async function PatchPage({ params, searchParams }: Props) {
   const tourId = idSchema.safeParse((await params).tourId)
   const rigId = idSchema.optional().safeParse((await searchParams)['rig'])
   if (!tourId.success || !rigId.success) notFound()
-  const { tour, rigs, rig } = await pageAnswer(readPlotPage(actor, { tourId: tourId.data, rigId: rigId.data }))
+  const { tour, rig } = await pageAnswer(readPlotPage(actor, { tourId: tourId.data, rigId: rigId.data }))
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
-      <div className="mb-6 flex flex-wrap items-end justify-between gap-x-8 gap-y-1">
-        <h1 className="text-4xl">Patch {rig && <span className="text-soft">{rig.name}</span>}</h1>
-        {rigs.length > 1 && (
-          <NavLinks
-            label="Rigs of this tour"
-            links={rigs.map(({ id, name }) => ({
-              href: `/tours/${tour.id}/patch?rig=${id}` as Route,
-              label: name,
-              current: id === rig?.id,
-            }))}
-          />
-        )}
-      </div>
+      <h1 className="mb-6 text-4xl">Patch {rig && <span className="text-soft">{rig.name}</span>}</h1>
       {rig ? (
         <ChannelTable
           key={rig.id}

@@ -1,7 +1,6 @@
-import type { Metadata, Route } from 'next'
+import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { EmptyState } from '@/components/ui/empty-state'
-import { NavLinks } from '@/components/ui/nav-links'
 import { idSchema } from '@/lib/contracts/common'
 import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
@@ -22,7 +21,7 @@ export default async function PlotPage({ params, searchParams }: Props) {
   const tourId = idSchema.safeParse((await params).tourId)
   const rigId = idSchema.optional().safeParse((await searchParams)['rig'])
   if (!tourId.success || !rigId.success) notFound()
-  const { tour, rigs, rig } = await pageAnswer(readPlotPage(actor, { tourId: tourId.data, rigId: rigId.data }))
+  const { rig } = await pageAnswer(readPlotPage(actor, { tourId: tourId.data, rigId: rigId.data }))
   if (!rig) {
     return (
       <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
@@ -37,21 +36,9 @@ export default async function PlotPage({ params, searchParams }: Props) {
   }
   return (
     <main id="main" className="px-4 pt-4 pb-8 sm:px-6">
-      <div className="mb-3 flex flex-wrap items-end justify-between gap-x-8 gap-y-1">
-        <h1 className="text-3xl">
-          Plot <span className="text-soft">{rig.name}</span>
-        </h1>
-        {rigs.length > 1 && (
-          <NavLinks
-            label="Rigs of this tour"
-            links={rigs.map(({ id, name }) => ({
-              href: `/tours/${tour.id}/plot?rig=${id}` as Route,
-              label: name,
-              current: id === rig.id,
-            }))}
-          />
-        )}
-      </div>
+      <h1 className="mb-3 text-3xl">
+        Plot <span className="text-soft">{rig.name}</span>
+      </h1>
       <PlotDesk
         key={rig.id}
         plot={rig.plot}
