@@ -6,9 +6,11 @@ import { findBlob } from '@/db/queries/file'
 import { pack } from '@/db/schema/advance'
 import { fileReference } from '@/db/schema/file'
 import { mail, mailAttachment } from '@/db/schema/mail'
+import type { MemberActor } from '@/lib/server/auth/actor'
 import { linkToken } from '@/lib/server/auth/link-token'
 import { makePackPdf } from '@/lib/server/jobs/make-pack-pdf'
 import { queueMail } from '@/lib/server/mail/queue-mail'
+import { storePack } from '@/lib/server/packs/store-pack'
 import { blobStore } from '@/lib/server/storage/blob-store'
 import type { PartyFixture } from '../helpers/party-fixture'
 import { makeParty } from '../helpers/party-fixture'
@@ -28,16 +30,12 @@ describe('the PDF of a pack that is sent', () => {
   })
   /** A pack that no job was started for, so that the test runs the job itself. */
   const storedPack = async () => {
-    const made = await party.tourManager.call('POST', '/api/packs', { showId })
-    const [row] = await db()
-      .select()
-      .from(pack)
-      .where(eq(pack.id, (made.body as { id: string }).id))
-    if (!row) throw new Error('the pack is there')
-    packId = randomUUID()
-    await db()
-      .insert(pack)
-      .values({ ...row, id: packId, pdfBlobId: null, pdfPages: null })
+    const { personId, sessionId } = party.tourManager
+    const actor: MemberActor = {
+      ...{ kind: 'person', personId, sessionId, name: 'The tour-manager', partyId: party.partyId },
+      ...{ roles: ['tour-manager'], address: 'test' },
+    }
+    packId = (await db().transaction((tx) => storePack(tx, actor, { of: { showId } }))).packId
   }
   const waitingMail = (holdSeconds: number) =>
     db().transaction((tx) =>

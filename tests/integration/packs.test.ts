@@ -81,7 +81,7 @@ describe('packs', () => {
     expect(file.links).toEqual([])
     const text = file.pages.map((page) => page.text).join(' ')
     for (const words of ['Test Hall', 'Tom 12', 'Ride 21', 'Tuning sheet, Tom 12']) expect(text).toContain(words)
-  })
+  }, 90_000)
 
   const fetchPdf = async (id: string): Promise<Uint8Array> => {
     const cookie = await encode({
