@@ -21,8 +21,8 @@ export function ClashNotice({ theirs, mine, reader, busy, onKeepMine, onTakeThei
       <p>
         <strong className="mr-2 text-plum">Not saved</strong>
         {theirs.removed
-          ? `Someone took ${theirs.name} out of the kit meanwhile. What you typed is kept below.`
-          : `Someone changed ${theirs.name} meanwhile. What you typed is kept below.`}
+          ? `Someone took ${theirs.name} out of the kit meanwhile. What you typed is kept above.`
+          : `Someone changed ${theirs.name} meanwhile. What you typed is kept above.`}
       </p>
       {rows.length > 0 && (
         <Table

@@ -24,7 +24,7 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
     drum.remark,
   ].filter(Boolean)
   return (
-    <div className="grid grid-cols-[7.5rem_minmax(0,1fr)] items-center gap-x-4 gap-y-3 py-3 lg:grid-cols-[7.5rem_minmax(11rem,1fr)_9rem_minmax(31rem,2.4fr)_auto]">
+    <div className="grid grid-cols-[7.5rem_minmax(0,1fr)] items-center gap-x-4 gap-y-3 py-3 xl:grid-cols-[7.5rem_15rem_8.5rem_minmax(0,1fr)_auto]">
       <div className="flex justify-center">
         <Hoop
           {...{ role: spec.role, diameterIn: spec.diameterIn, depthIn: spec.depthIn, lugs: spec.lugs, name: drum.name }}
@@ -39,7 +39,7 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
         </p>
         {asides.length > 0 && <p className="text-sm text-soft">{asides.join('; ')}</p>}
       </div>
-      <div className="max-lg:row-start-2 max-lg:pl-2">
+      <div className="max-xl:row-start-2 max-xl:pl-2">
         {spec.note && estimate ? (
           <>
             <p className="figures text-2xl leading-tight font-bold whitespace-nowrap">{hertz(estimate.noteHz)} Hz</p>
@@ -52,14 +52,14 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
           <p className="text-soft">No note yet</p>
         )}
       </div>
-      <div className="max-lg:col-span-2 max-lg:row-start-3">
+      <div className="max-xl:col-span-2 max-xl:row-start-3">
         <dl className="flex flex-col gap-1">
           <HeadLine side="batter" head={spec.batter} figures={estimate?.batter ?? null} ported={false} />
           <HeadLine side="resonant" head={spec.resonant} figures={estimate?.resonant ?? null} ported={spec.ported} />
         </dl>
         {spec.resonant && <p className="mt-0.5 text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>}
       </div>
-      <div className="max-lg:row-start-2 max-lg:justify-self-end">{actions}</div>
+      <div className="max-xl:row-start-2 max-xl:justify-self-end">{actions}</div>
     </div>
   )
 }

@@ -2,6 +2,8 @@ import { Button } from '@/components/ui/button'
 import { Menu } from '@/components/ui/menu'
 
 export interface EntryActionsProps {
+  /** Fixes the id of the Edit button, so that the focus can come back to it. */
+  editId: string
   name: string
   /** Null at the end where it cannot move further. */
   onUp: (() => void) | null
@@ -11,10 +13,10 @@ export interface EntryActionsProps {
 }
 
 /** What can be done with an entry. */
-export function EntryActions({ name, onUp, onDown, onEdit, onRemove }: EntryActionsProps) {
+export function EntryActions({ editId, name, onUp, onDown, onEdit, onRemove }: EntryActionsProps) {
   return (
     <div className="flex gap-1">
-      <Button onClick={onEdit}>
+      <Button id={editId} onClick={onEdit}>
         Edit<span className="sr-only"> {name}</span>
       </Button>
       <Menu

@@ -82,6 +82,8 @@ export function EntryForm<Form extends FieldValues>(props: EntryFormProps<Form>)
           title="Not saved yet: please look at these"
           errors={submitCount > 0 ? errorList(errors) : []}
         />
+        {children}
+        {/* Where the button was pressed: whoever saves from the foot must not look for the answer at the top. */}
         {saving.said && Object.keys(errors).length === 0 && (
           <Notice kind="error">{saving.said} What you typed is kept here.</Notice>
         )}
@@ -95,7 +97,6 @@ export function EntryForm<Form extends FieldValues>(props: EntryFormProps<Form>)
             }}
           />
         )}
-        {children}
         <WaitingForConnection busy={busy} tries={tries} what="What you typed" />
         <div className="flex flex-wrap gap-2 border-t border-line pt-3">
           <Button kind="primary" type="submit" busy={busy && 'Saving'}>

@@ -15,7 +15,7 @@ export interface HeadLineProps {
 /** One head of a drum in a list: what it is, its tap pitch with its interval, and the gauge as noted. */
 export function HeadLine({ side, head, figures, ported }: HeadLineProps) {
   return (
-    <div className="grid grid-cols-[4.75rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.75rem_minmax(0,1fr)_11.5rem_5rem]">
+    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_minmax(0,1fr)_11rem_4.5rem]">
       <dt className="text-sm text-soft">{side}</dt>
       <dd>{head ? headWords(head) : 'no head'}</dd>
       {head && (

@@ -1,7 +1,6 @@
 'use client'
 
-import { useState } from 'react'
-import { Button } from '@/components/ui/button'
+import { useEffect, useRef, useState } from 'react'
 import { Notice } from '@/components/ui/notice'
 import { showToast } from '@/components/ui/toast'
 import { useKit, useMarkEntry, useOrderKit } from '@/lib/client/kit'
@@ -10,6 +9,7 @@ import { entryKinds } from '@/lib/contracts/kit'
 import { AddToKit } from './add-to-kit'
 import { CopyKit } from './copy-kit'
 import type { KitSource } from './copy-kit'
+import { DraftNotice } from './draft-notice'
 import { EmptyKit } from './empty-kit'
 import { EntryActions } from './entry-actions'
 import { EntryEditor } from './entry-editor'
@@ -29,12 +29,15 @@ export interface KitListProps {
   mayEdit: boolean
 }
 
+const editId = (entryId: string) => `kit-edit-${entryId}`
+
 /** The kit of a rig by kind: read, added to, changed, ordered, taken out and put back. */
 export function KitList({ rigId, initial, sources, reader, mayEdit }: KitListProps) {
   const all = useKit(rigId, initial).data
   const entries = all.filter(({ removed }) => !removed)
   const [open, setOpen] = useState<{ target: EntryTarget; typed: EntryDraft['typed'] | null } | null>(null)
   const [draft, setDraft] = useState<EntryDraft | null>(() => keptDrafts.read(rigId))
+  const focusAfter = useRef<string | null>(null)
   const order = useOrderKit(rigId)
   const mark = useMarkEntry(rigId)
 
@@ -51,6 +54,15 @@ export function KitList({ rigId, initial, sources, reader, mayEdit }: KitListPro
             : showToast(`${after.name} is back in the kit.`),
       },
     )
+  const close = (entryId: string) => {
+    setOpen(null)
+    focusAfter.current = editId(entryId)
+  }
+  useEffect(() => {
+    if (open || !focusAfter.current) return
+    document.getElementById(focusAfter.current)?.focus()
+    focusAfter.current = null
+  }, [open])
   const forget = () => {
     keptDrafts.drop(rigId)
     setDraft(null)
@@ -61,44 +73,30 @@ export function KitList({ rigId, initial, sources, reader, mayEdit }: KitListPro
       key={open.target.id}
       {...{ rigId, reader, target: open.target, typed: open.typed }}
       onSaved={(saved) => {
-        setOpen(null)
+        close(saved.id)
         showToast(open.target.do === 'add' ? `${saved.name} is in the kit.` : `${saved.name} is saved.`)
       }}
-      onLeave={() => setOpen(null)}
+      onLeave={() => close(open.target.id)}
       onAbandon={(left) => {
         keptDrafts.keep(rigId, left)
         setDraft(left)
       }}
     />
   )
+  const beneath = draft && draft.target.id !== open?.target.id && (
+    <DraftNotice
+      name={draft.typed.name || draft.target.start.name}
+      onGoOn={() => {
+        setOpen(draft)
+        forget()
+      }}
+      onDrop={forget}
+    />
+  )
   const failed = order.error ?? mark.error
 
   return (
     <>
-      {draft && draft.target.id !== open?.target.id && (
-        <Notice
-          kind="wait"
-          word="Not saved"
-          className="mt-4"
-          action={
-            <span className="flex flex-wrap gap-2">
-              <Button
-                onClick={() => {
-                  setOpen(draft)
-                  forget()
-                }}
-              >
-                Go on with {draft.typed.name || draft.target.start.name}
-              </Button>
-              <Button kind="quiet" onClick={forget}>
-                Let it go
-              </Button>
-            </span>
-          }
-        >
-          What you typed for {draft.typed.name || draft.target.start.name} is kept here.
-        </Notice>
-      )}
       <WaitingForConnection
         busy={order.isPending || mark.isPending}
         tries={order.failureCount + mark.failureCount}
@@ -109,7 +107,7 @@ export function KitList({ rigId, initial, sources, reader, mayEdit }: KitListPro
           {failed.message}
         </Notice>
       )}
-      {entries.length === 0 && !open ? (
+      {entries.length === 0 && !open && !draft ? (
         <div className="mt-6">
           <EmptyKit
             rigId={rigId}
@@ -135,9 +133,13 @@ export function KitList({ rigId, initial, sources, reader, mayEdit }: KitListPro
               {...{ kind, reader, entries: ofKind }}
               add={mayEdit && <AddToKit kind={kind} onAdd={add} />}
               editing={open?.target.start.kind === kind ? { id: open.target.id, form: editor } : null}
+              beneath={
+                draft && beneath && draft.target.start.kind === kind ? { id: draft.target.id, notice: beneath } : null
+              }
               actionsOf={(entry, index) =>
                 mayEdit && (
                   <EntryActions
+                    editId={editId(entry.id)}
                     name={entry.name}
                     onUp={move(index, -1)}
                     onDown={move(index, 1)}

@@ -1,4 +1,3 @@
-import { Fragment } from 'react'
 import type { ReactNode } from 'react'
 import type { Entry, EntryKind } from '@/lib/contracts/kit'
 import { DrumRow } from './drum-row'
@@ -13,6 +12,8 @@ export interface KitSectionProps {
   add: ReactNode
   /** The open form, in place of the entry that it is for, or at the end for a new one. */
   editing: { id: string; form: ReactNode } | null
+  /** What stands beneath one entry, or at the end when that entry is not in the kit: typed text that is not saved. */
+  beneath: { id: string; notice: ReactNode } | null
   actionsOf: (entry: Entry, index: number) => ReactNode
 }
 
@@ -30,9 +31,10 @@ const nothing: Record<EntryKind, string> = {
 }
 
 /** One kind of entry of the kit, in its order. */
-export function KitSection({ kind, entries, reader, add, editing, actionsOf }: KitSectionProps) {
+export function KitSection({ kind, entries, reader, add, editing, beneath, actionsOf }: KitSectionProps) {
   const pieces = entries.reduce((sum, { count }) => sum + count, 0)
   const isNew = editing !== null && entries.every(({ id }) => id !== editing.id)
+  const beneathNew = beneath !== null && entries.every(({ id }) => id !== beneath.id)
   return (
     <section aria-labelledby={`kit-${kind}`} className="mt-8">
       <div className="flex flex-wrap items-end justify-between gap-x-4 gap-y-2 border-b-2 border-ink pb-2">
@@ -52,10 +54,16 @@ export function KitSection({ kind, entries, reader, add, editing, actionsOf }: K
             ) : (
               <PieceRow entry={entry} reader={reader} actions={actionsOf(entry, index)} />
             )}
+            {beneath?.id === entry.id && <div className="pb-3">{beneath.notice}</div>}
           </li>
         ))}
       </ul>
-      {isNew && <Fragment key={editing.id}>{<div className="pt-3">{editing.form}</div>}</Fragment>}
+      {beneathNew && <div className="pt-3">{beneath.notice}</div>}
+      {isNew && (
+        <div key={editing.id} className="pt-3">
+          {editing.form}
+        </div>
+      )}
     </section>
   )
 }

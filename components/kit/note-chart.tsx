@@ -67,5 +67,5 @@ function isTom({ spec }: DrumEntry): boolean {
 function marksOf({ from, to }: RangeScale, reader: KitReader) {
   return Array.from({ length: to - from + 1 }, (_, step) => from + step)
     .filter((semitone) => [0, 5, 9].includes(semitone % 12))
-    .map((at) => ({ at, name: noteName(at, reader.locale) }))
+    .map((at) => ({ at, name: noteName(at, reader.locale), minor: at % 12 !== 0 }))
 }

@@ -93,7 +93,8 @@ export function NotePlanner({ rigId, initial, reader, mayEdit, kitHref }: NotePl
       <div className="mt-6">
         <NoteChart drums={drums} reader={reader} stage={stage} onMove={editing ? move : null} />
       </div>
-      <ul className="mt-6 border-t-2 border-ink">
+      <h2 className="mt-8 border-b-2 border-ink pb-2 text-2xl">What each head needs</h2>
+      <ul>
         {drums.map((drum) => {
           const kept = inKit.find(({ id }) => id === drum.id)?.spec.note
           const differs = toSet.some(({ entryId }) => entryId === drum.id)

@@ -6,6 +6,7 @@ import type { KitReader } from './kit-reader'
 
 /** A cymbal, a piece of hardware or a microphone in the list of the kit. */
 export function PieceRow({ entry, reader, actions }: { entry: Entry; reader: KitReader; actions: ReactNode }) {
+  const words = pieceWords(entry, reader)
   return (
     <div className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 py-1.5 lg:grid-cols-[3rem_minmax(10rem,1fr)_minmax(12rem,1.4fr)_8rem_minmax(0,1fr)_auto]">
       <p className="figures max-lg:hidden">
@@ -16,14 +17,20 @@ export function PieceRow({ entry, reader, actions }: { entry: Entry; reader: Kit
         {entry.count > 1 && <span className="figures text-base font-normal lg:hidden">{entry.count} × </span>}
         {entry.name}
       </h3>
-      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{pieceWords(entry, reader)}</p>
-      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">{supplyWords[entry.supply]}</p>
+      <p className="max-lg:col-start-1 max-lg:text-sm max-lg:text-soft">
+        {words}
+        <span className="lg:hidden">
+          {words && ', '}
+          {supplyWords[entry.supply]}
+        </span>
+      </p>
+      <p className="max-lg:hidden">{supplyWords[entry.supply]}</p>
       {entry.remark ? (
         <p className="min-w-0 text-sm text-soft max-lg:col-start-1">{entry.remark}</p>
       ) : (
         <span className="max-lg:hidden" />
       )}
-      <div className="max-lg:col-start-2 max-lg:row-span-3 max-lg:row-start-1">{actions}</div>
+      <div className="max-lg:col-start-2 max-lg:row-span-2 max-lg:row-start-1">{actions}</div>
     </div>
   )
 }
@@ -35,7 +42,7 @@ function pieceWords(entry: EntryInput, reader: KitReader): string {
     case 'cymbal':
       return `${cymbalTypeWord(entry.spec.type)}, ${cymbalSizeWords(entry.spec.diameterIn, reader.units)}`
     case 'hardware':
-      return typeWords(entry.spec.type)
+      return entry.spec.type === 'other' ? '' : typeWords(entry.spec.type)
     case 'microphone': {
       const { type, stand, phantom } = entry.spec
       const held = stand === 'none' ? 'no stand' : stand === 'clip' ? 'on a clip' : `${typeWords(stand)} stand`

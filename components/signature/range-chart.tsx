@@ -1,5 +1,6 @@
 import { Fragment } from 'react'
 import { classes } from '@/components/ui/classes'
+import { classes } from '@/components/ui/classes'
 import { RangeBar, scalePercent } from './range-bar'
 import type { RangeBarProps, RangeScale } from './range-bar'
 
@@ -30,7 +31,7 @@ const barHeightPx = 32
 /** Every drum's range on one scale, the intervals drawn from bead to bead. */
 export function RangeChart({ scale, rows, marks }: RangeChartProps) {
   return (
-    <div className="grid grid-cols-[minmax(4.5rem,8rem)_1fr] gap-x-3">
+    <div className="grid grid-cols-[max-content_minmax(0,1fr)] gap-x-3 sm:grid-cols-[minmax(4.5rem,8rem)_1fr]">
       <div aria-hidden className="pt-6">
         {rows.map((row) => (
           <div key={row.id} className="name flex items-center" style={{ height: rowHeightPx }}>
