@@ -2,7 +2,7 @@ const browsers: readonly [RegExp, string][] = [
   [/\bEdg(e|A|iOS)?\//, 'Edge'],
   [/\b(Firefox|FxiOS)\//, 'Firefox'],
   [/\bSamsungBrowser\//, 'Samsung Internet'],
-  [/\b(Chrome|CriOS|Chromium)\//, 'Chrome or Chromium'],
+  [/(Chrome|CriOS|Chromium)\//, 'Chrome or Chromium'],
   [/\bSafari\//, 'Safari'],
 ]
 const systems: readonly [RegExp, string][] = [

@@ -19,6 +19,7 @@ import { AppError } from '@/lib/errors'
 
 const asNumber = (typed: unknown) => Number(String(typed).trim().replace(',', '.'))
 
+/** The values stand in the page as it is sent, not only once it has woken up. */
 export function SettingsForm({ party, readOnly }: { party: Party; readOnly: boolean }) {
   const router = useRouter()
   const change = useChangeParty()
@@ -68,34 +69,34 @@ export function SettingsForm({ party, readOnly }: { party: Party; readOnly: bool
         </Notice>
       )}
       <Field label="Name of the party" hint="Venues and suppliers read it on every page and mail." error={errors.name?.message}>
-        {(control) => <TextInput {...control} {...form.register('name')} autoComplete="off" />}
+        {(control) => <TextInput {...control} {...form.register('name')} defaultValue={party.name} autoComplete="off" />}
       </Field>
       <Field label="Lengths and places" hint="Drum sizes stay in inches, as the trade writes them." error={errors.units?.message}>
         {(control) => (
           <Select
             {...control}
-            {...form.register('units')}
+            {...form.register('units')} defaultValue={party.units}
             options={unitSystems.map((units) => ({ value: units, label: unitWords[units] }))}
           />
         )}
       </Field>
       <Field label="Reference pitch, A4" hint="415 to 466 Hz. Every note's frequency follows from it." error={errors.referenceHz?.message}>
         {(control) => (
-          <NumberInput {...control} unit="Hz" className="max-w-40" {...form.register('referenceHz', { setValueAs: asNumber })} />
+          <NumberInput {...control} unit="Hz" className="max-w-40" {...form.register('referenceHz', { setValueAs: asNumber })} defaultValue={party.referenceHz} />
         )}
       </Field>
       <Field label="Names of the notes" error={errors.locale?.message}>
         {(control) => (
           <Select
             {...control}
-            {...form.register('locale')}
+            {...form.register('locale')} defaultValue={party.locale}
             options={locales.map((locale) => ({ value: locale, label: localeWords[locale] }))}
           />
         )}
       </Field>
       <Field label="Paper" error={errors.paper?.message}>
         {(control) => (
-          <Select {...control} {...form.register('paper')} options={paperSizes.map((paper) => ({ value: paper, label: paper }))} />
+          <Select {...control} {...form.register('paper')} defaultValue={party.paper} options={paperSizes.map((paper) => ({ value: paper, label: paper }))} />
         )}
       </Field>
       {!readOnly && (
