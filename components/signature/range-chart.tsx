@@ -1,6 +1,5 @@
 import { Fragment } from 'react'
 import { classes } from '@/components/ui/classes'
-import { classes } from '@/components/ui/classes'
 import { RangeBar, scalePercent } from './range-bar'
 import type { RangeBarProps, RangeScale } from './range-bar'
 
