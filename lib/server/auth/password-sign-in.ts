@@ -5,7 +5,7 @@ import { emailSchema } from '@/lib/contracts/common'
 import { AppError } from '@/lib/errors'
 import { clientAddress } from '@/lib/server/http/client-address'
 import type { Limit } from '@/lib/server/http/rate-limit'
-import { takeFromLimit } from '@/lib/server/http/rate-limit'
+import { clearLimit, takeFromLimit } from '@/lib/server/http/rate-limit'
 import { passwordMatches } from './password'
 
 const perAddress: Limit = { name: 'sign-in-address', points: 60, seconds: 600 }
@@ -27,5 +27,6 @@ export async function passwordSignIn(credentials: unknown, headers: Record<strin
   }
   const person = await findPersonByEmail(db(), input.data.email)
   if (!(await passwordMatches(person?.passwordHash, input.data.password)) || !person) return null
+  await clearLimit(perPerson, input.data.email)
   return { id: person.id, name: person.name, email: person.email }
 }

@@ -25,11 +25,14 @@ function limiter(limit: Limit): RateLimiterPostgres {
   return made
 }
 
+function hashKey(key: string): string {
+  return createHash('sha256').update(key).digest('base64url').slice(0, 32)
+}
+
 /** Counts one try against a limit that every process shares. The key is hashed: it may be an address. */
 export async function takeFromLimit(limit: Limit, key: string): Promise<void> {
-  const hashed = createHash('sha256').update(key).digest('base64url').slice(0, 32)
   try {
-    await limiter(limit).consume(hashed)
+    await limiter(limit).consume(hashKey(key))
   } catch (refusal) {
     if (!(refusal instanceof RateLimiterRes)) throw refusal
     const seconds = Math.max(1, Math.ceil(refusal.msBeforeNext / 1000))
@@ -37,4 +40,9 @@ export async function takeFromLimit(limit: Limit, key: string): Promise<void> {
       details: { retryAfterSeconds: seconds },
     })
   }
+}
+
+/** Clears a key's count: a try that succeeded was no guess. */
+export async function clearLimit(limit: Limit, key: string): Promise<void> {
+  await limiter(limit).delete(hashKey(key))
 }
