@@ -1,6 +1,5 @@
-import { hoop, kick } from '@/plots/index'
+import { hoop, kick, ShapeDrawing } from '@/plots/index'
 import { round } from './round'
-import { ShapeDrawing } from './shape-drawing'
 
 export interface HoopDrawingProps {
   /** What the drum is; a kick lies on its side, so that from above it is its rectangle. */

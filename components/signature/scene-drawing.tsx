@@ -1,6 +1,6 @@
+import { ShapeDrawing } from '@/plots/index'
 import type { Scene } from '@/plots/index'
 import { round } from './round'
-import { ShapeDrawing } from './shape-drawing'
 
 export interface SceneDrawingProps {
   scene: Scene

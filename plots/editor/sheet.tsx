@@ -141,7 +141,7 @@ export function Sheet(props: SheetProps) {
       aria-describedby="plot-keys"
       tabIndex={0}
       onKeyDown={keyDown}
-      className="relative h-[60dvh] min-h-[26rem] overflow-hidden border border-line bg-paper lg:h-[calc(100dvh-20.5rem)]"
+      className="relative h-[52dvh] min-h-[22rem] lg:min-h-[26rem] overflow-hidden border border-line bg-paper lg:h-[calc(100dvh-20.5rem)]"
     >
       <p id="plot-keys" className="sr-only">
         Arrows move what is chosen 5 cm, with Shift 50, with Alt 1. Square brackets turn it. Delete takes it off. Plus,
@@ -153,7 +153,8 @@ export function Sheet(props: SheetProps) {
         className={`block size-full touch-none select-none ${isArmed ? 'cursor-crosshair' : 'cursor-default'}`}
         {...gestures.handlers}
         onPointerDown={(event) => {
-          frame.current?.focus({ preventScroll: true })
+          // So that the keys then work on what was pressed; a finger has no keys, and would only light the focus ring.
+          if (event.pointerType === 'mouse') frame.current?.focus({ preventScroll: true })
           gestures.handlers.onPointerDown(event)
         }}
       >
