@@ -9,6 +9,8 @@ export default defineConfig({
   timeout: 240_000,
   expect: { timeout: 15_000 },
   use: {
+    actionTimeout: 20_000,
+    navigationTimeout: 30_000,
     baseURL: process.env['BASE_URL'],
     viewport: { width: 1440, height: 900 },
     locale: 'en-GB',
