@@ -36,6 +36,9 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
       decisions: [{ id: crypto.randomUUID(), lineId: line.lineId, answerEventId: line.said?.id ?? '', ...decision }],
     }),
   )
+  // What can no longer be done about the line closes by itself when the page hears of it.
+  const mayStill = open === 'take down' ? line.state !== 'settled' : line.state === 'answered' || line.state === 'settled'
+  const shown = mayStill ? open : null
   const asked = line.state === 'unanswered' && line.decided
   const look = asked ? { state: 'changed' as const, word: 'asked again' } : looks[line.state]
   return (
@@ -51,23 +54,36 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
       detail={[...line.details, ...(line.insteadOf ? [`also welcome: ${line.insteadOf}`] : [])].join('; ')}
       word={look.word}
       actions={
-        <>
-          {maySettle && line.state === 'answered' && (
-            <Button kind="primary" busy={settle.busy && 'Settling'} onClick={() => settle.run({ decision: 'accept', remark: '' })}>
-              Settle<span className="sr-only"> line {line.number}</span>
-            </Button>
+        <div className="grid w-full gap-2 sm:w-80">
+          {line.said && <Said said={line.said} />}
+          {line.decided && (
+            <p className="text-sm text-soft">
+              {line.state === 'settled' ? 'Settled' : 'Asked again'} by {line.decided.byName}, <LocalTime iso={line.decided.at} />
+              {line.decided.remark !== '' && `: ${line.decided.remark}`}
+            </p>
           )}
-          {maySettle && (line.state === 'answered' || line.state === 'settled') && (
-            <Button aria-expanded={open === 'ask again'} onClick={() => setOpen(open === 'ask again' ? null : 'ask again')}>
-              Ask again<span className="sr-only"> about line {line.number}</span>
-            </Button>
-          )}
-          {mayTakeDown && line.state !== 'settled' && (
-            <Button kind="quiet" onClick={() => setOpen(open === 'take down' ? null : 'take down')} aria-expanded={open === 'take down'}>
-              Take an answer down<span className="sr-only"> for line {line.number}</span>
-            </Button>
-          )}
-        </>
+          <div className="flex flex-wrap gap-2">
+            {maySettle && line.state === 'answered' && (
+              <Button kind="primary" busy={settle.busy && 'Settling'} onClick={() => settle.run({ decision: 'accept', remark: '' })}>
+                Settle<span className="sr-only"> line {line.number}</span>
+              </Button>
+            )}
+            {maySettle && (line.state === 'answered' || line.state === 'settled') && (
+              <Button aria-expanded={shown === 'ask again'} onClick={() => setOpen(shown === 'ask again' ? null : 'ask again')}>
+                Ask again<span className="sr-only"> about line {line.number}</span>
+              </Button>
+            )}
+            {mayTakeDown && line.state !== 'settled' && (
+              <Button
+                kind={line.said ? 'quiet' : 'secondary'}
+                aria-expanded={shown === 'take down'}
+                onClick={() => setOpen(shown === 'take down' ? null : 'take down')}
+              >
+                Take an answer down<span className="sr-only"> for line {line.number}</span>
+              </Button>
+            )}
+          </div>
+        </div>
       }
     >
       {line.changes.length > 0 && (
@@ -76,13 +92,6 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
             <li key={change}>{change}</li>
           ))}
         </ul>
-      )}
-      {line.said && <Said said={line.said} />}
-      {line.decided && (
-        <p className="text-sm text-soft">
-          {line.state === 'settled' ? 'Settled' : 'Asked again'} by {line.decided.byName}, <LocalTime iso={line.decided.at} />
-          {line.decided.remark !== '' && `: ${line.decided.remark}`}
-        </p>
       )}
       {line.history.length > (line.said ? 1 : 0) && (
         <details className="mt-1 text-sm">
@@ -99,7 +108,7 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
         </details>
       )}
       {settle.trouble && <Notice kind="error">{settle.trouble}</Notice>}
-      {open === 'ask again' && (
+      {shown === 'ask again' && (
         <AskAgain
           busy={settle.busy}
           onAsk={(remark) => {
@@ -108,7 +117,7 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
           }}
         />
       )}
-      {open === 'take down' && <TakeDownForm of={of} line={line} onDone={() => setOpen(null)} />}
+      {shown === 'take down' && <TakeDownForm of={of} line={line} onDone={() => setOpen(null)} />}
     </StateLine>
   )
 }

@@ -27,9 +27,9 @@ export function LinkTools({ link, name, mayPrint, mayWithdraw }: { link: Advance
         )}
       </p>
       {works && (
-        <div className="flex flex-wrap gap-2">
+        <div className="-ml-4 flex flex-wrap">
           {mayPrint && (
-            <Button kind="quiet" className="px-0" busy={print.busy && 'Making a link'} onClick={() => print.run(link.grantId)}>
+            <Button kind="quiet" busy={print.busy && 'Making a link'} onClick={() => print.run(link.grantId)}>
               Print a fresh link<span className="sr-only"> for {name}</span>
             </Button>
           )}
