@@ -30,7 +30,7 @@ export function AskResetForm() {
     )
   }
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" noValidate onSubmit={submit} className="flex flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <Field label="E-mail" error={errors.email?.message}>
         {(control) => <TextInput {...control} {...form.register('email')} type="email" autoComplete="email" />}

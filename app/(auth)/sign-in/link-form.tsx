@@ -28,7 +28,7 @@ export function LinkForm({ next }: { next: string }) {
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4" aria-label="Sign in by a mailed link">
+    <form method="post" noValidate onSubmit={submit} className="flex flex-col gap-4" aria-label="Sign in by a mailed link">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <Field label="Mail address for the link" error={errors.email?.message}>
         {(control) => (

@@ -30,7 +30,7 @@ export function SignUpForm({ next }: { next: string | undefined }) {
     )
   }
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" noValidate onSubmit={submit} className="flex flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <Field label="Your name" hint="As your crew knows you." error={errors.name?.message}>
         {(control) => <TextInput {...control} {...form.register('name')} autoComplete="name" />}

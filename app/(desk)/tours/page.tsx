@@ -48,7 +48,7 @@ export default async function ToursPage({ searchParams }: PageProps<'/tours'>) {
         </div>
       ) : (
         <>
-          <div className="mt-6 flex flex-col gap-4">
+          <div className="mt-6 flex flex-col items-start gap-4">
             {mayEdit && <AddTour asksPlayer={players.length === 0} open={false} />}
             <ListTools path="/tours" query={query} searched="Name" filters={filters} />
           </div>
@@ -75,12 +75,17 @@ export default async function ToursPage({ searchParams }: PageProps<'/tours'>) {
               {rows.map((tour) => (
                 <TableRow key={tour.id}>
                   <TableCell>
-                    <Link href={`/tours/${tour.id}/run` as Route} className="name inline-flex min-h-7 items-center text-lg underline-offset-4 hover:underline">
+                    <Link
+                      href={`/tours/${tour.id}/run` as Route}
+                      className="name inline-flex min-h-7 items-center text-lg underline-offset-4 hover:underline"
+                    >
                       {tour.name}
                     </Link>
                   </TableCell>
                   <TableCell className="whitespace-nowrap">
-                    {tour.first && tour.last ? `${dateWords(tour.first)} to ${dateWords(tour.last)} ${tour.last.slice(0, 4)}` : 'no days yet'}
+                    {tour.first && tour.last
+                      ? `${dateWords(tour.first)} to ${dateWords(tour.last)} ${tour.last.slice(0, 4)}`
+                      : 'no days yet'}
                   </TableCell>
                   <TableCell numeric>{tour.days}</TableCell>
                   <TableCell numeric>{tour.shows}</TableCell>

@@ -31,7 +31,7 @@ export function JoinForm({ token, email, partyName }: { token: string; email: st
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" noValidate onSubmit={submit} className="flex flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <input type="hidden" name="username" autoComplete="username" value={email} readOnly />
       <Field label="Your name" hint="As your crew knows you." error={errors.name?.message}>

@@ -25,7 +25,7 @@ export function NewPasswordForm({ token }: { token: string }) {
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex flex-col gap-4">
+    <form method="post" noValidate onSubmit={submit} className="flex flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       <Field label="New password" hint="At least 10 characters. A few words you can remember are better than signs." error={errors.password?.message}>
         {(control) => (

@@ -31,7 +31,7 @@ export default async function PlayersPage({ searchParams }: PageProps<'/director
   return (
     <>
       <h1 className="text-4xl">Players</h1>
-      <div className="mt-6 flex flex-col gap-4">
+      <div className="mt-6 flex flex-col items-start gap-4">
         {nothingYet && (
           <EmptyState title="No player yet">
             {mayEdit

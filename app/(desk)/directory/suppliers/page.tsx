@@ -30,7 +30,7 @@ export default async function SuppliersPage({ searchParams }: PageProps<'/direct
   return (
     <>
       <h1 className="text-4xl">Suppliers</h1>
-      <div className="mt-6 flex flex-col gap-4">
+      <div className="mt-6 flex flex-col items-start gap-4">
         {nothingYet && (
           <EmptyState title="No supplier yet">
             {mayEdit

@@ -32,7 +32,7 @@ export function PasswordForm({ known }: { known: boolean }) {
   })
 
   return (
-    <form noValidate onSubmit={submit} className="flex max-w-md flex-col gap-4">
+    <form method="post" noValidate onSubmit={submit} className="flex max-w-md flex-col gap-4">
       {errors.root && <Notice kind="error">{errors.root.message}</Notice>}
       {saved && <Notice kind="success">Your new password is set. Every other device is signed out.</Notice>}
       {known && (

@@ -52,8 +52,9 @@ export function nextLinks(run: Run, steps: readonly NextStep[]): NextLink[] {
       case 'add a show':
         return `${base}/run#days`
       case 'start the kit':
-      case 'issue':
         return `${base}/kit?rig=${step.rigId}`
+      case 'issue':
+        return `${base}/revisions?rig=${step.rigId}`
       case 'give the zone':
         return `/directory/venues/${show?.venueId}`
       case 'add a contact':

@@ -44,7 +44,9 @@ export default async function RunPage({ params, searchParams }: PageProps<'/tour
   const shows = run.days.flatMap((day) => day.shows)
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 py-6 sm:px-6">
-      <RefreshOnLive topics={[...shows, ...run.hires].map(({ id }) => `advance:${id}`).concat(`directory:${actor.partyId}`)} />
+      <RefreshOnLive
+        topics={[...shows, ...run.hires].map(({ id }) => `advance:${id}`).concat(`directory:${actor.partyId}`)}
+      />
       <TourHeading tour={run.tour} mayEdit={may('tour:edit')} />
       <div className="mt-6 grid items-start gap-x-12 gap-y-10 lg:grid-cols-[minmax(0,5fr)_minmax(0,3fr)]">
         <section aria-labelledby="next" className="lg:order-last">
@@ -84,10 +86,12 @@ export default async function RunPage({ params, searchParams }: PageProps<'/tour
           hires={run.hires.map((hire) => ({
             hire,
             standing: hire.standing?.standing ?? null,
-            shows: shows.filter((show) => hire.showIds.includes(show.id)).map((show) => ({
-              id: show.id,
-              label: `${dateWords(show.date)}, ${show.venueName}`,
-            })),
+            shows: shows
+              .filter((show) => hire.showIds.includes(show.id))
+              .map((show) => ({
+                id: show.id,
+                label: `${dateWords(show.date)}, ${show.venueName}`,
+              })),
           }))}
           choices={choices.hire}
           mayEdit={may('hire:edit')}

@@ -101,7 +101,7 @@ export default async function ShowPage({ params }: PageProps<'/tours/[tourId]/sh
             ; a pack is sent to whoever looks after backline.
           </p>
         ) : (
-          <Facts facts={contacts.map((contact) => [contact.duties.join(', '), `${contact.name}, ${contact.phone || contact.email}`] as const)} />
+          <Facts facts={contacts.map((contact) => [contact.duties.join(', '), [contact.name, contact.email, contact.phone].filter(Boolean).join(', ')] as const)} />
         )}
       </section>
     </main>
@@ -112,7 +112,7 @@ function due(show: { answersDue: { date: string; time: string } | null; answersD
   if (!show.answersDue || !show.answersDueAt) return 'no date set'
   return (
     <>
-      {dateWords(show.answersDue.date)}, <span className="figures">{show.answersDue.time}</span> there{' '}
+      {dateWords(show.answersDue.date)}, {show.answersDue.time} there{' '}
       <span className="text-soft">({utcWords.format(new Date(show.answersDueAt))} UTC)</span>
     </>
   )
