@@ -1,7 +1,6 @@
 import type { Bench, BenchReading, BenchSignOff, ReadingInput, SignOffInput } from '@/lib/contracts/bench'
-import type { ErrorCode } from '@/lib/errors'
-import { AppError, errorCodes } from '@/lib/errors'
 import { listenLive } from '@/lib/client/live-events'
+import { plainCall } from '@/lib/client/plain-call'
 
 /** The bench's way to the server. */
 export interface BenchServer {
@@ -19,10 +18,10 @@ export type BenchPlace =
 export function benchServer(place: BenchPlace): BenchServer {
   const base = place.kind === 'link' ? `/api/b/${place.token}` : `/api/shows/${place.showId}/bench`
   return {
-    read: () => call<Bench>(base),
+    read: () => plainCall<Bench>(base),
     addReadings: async (readings) =>
-      (await call<{ readings: BenchReading[] }>(`${base}/readings`, { readings })).readings,
-    signOff: (signOff) => call<BenchSignOff>(`${base}/sign-offs`, signOff),
+      (await plainCall<{ readings: BenchReading[] }>(`${base}/readings`, { readings })).readings,
+    signOff: (signOff) => plainCall<BenchSignOff>(`${base}/sign-offs`, signOff),
     listen(changed, refused) {
       if (place.kind === 'link') return listenLive(`${base}/live`, changed, refused)
       const own = [`bench:${place.showId}`, `advance:${place.showId}`, 'resync']
@@ -35,29 +34,4 @@ export function benchServer(place: BenchPlace): BenchServer {
       )
     },
   }
-}
-
-/**
- * One call. The answer has passed its contract on the way out of our own server; reading it again by the same contract would
- * send the whole checker to a phone in poor signal.
- */
-async function call<Answer>(path: string, body?: unknown): Promise<Answer> {
-  let response: Response
-  try {
-    response = await fetch(
-      path,
-      body === undefined
-        ? {}
-        : { method: 'POST', body: JSON.stringify(body), headers: { 'Content-Type': 'application/json' } },
-    )
-    if (response.ok) return (await response.json()) as Answer
-  } catch (cause) {
-    throw new AppError('unavailable', 'No signal.', { cause })
-  }
-  const told = (await response.json().catch(() => undefined)) as
-    { error?: { code?: string; message?: string; details?: Record<string, unknown> } } | undefined
-  const code = errorCodes.find((known) => known === told?.error?.code) ?? ('unavailable' satisfies ErrorCode)
-  throw new AppError(code, told?.error?.message ?? `The server answered ${response.status}.`, {
-    details: told?.error?.details ?? {},
-  })
 }
