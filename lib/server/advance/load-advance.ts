@@ -34,16 +34,17 @@ export type Facts = { readonly shows: readonly ShowFacts[]; readonly hires: read
 
 /** Reads the advance of a tour, a show or a hire in seven statements, however many shows there are. */
 export async function loadAdvance(db: Db, scope: Scope, place: AdvancePlace): Promise<Facts> {
-  const [shows, hires] = await Promise.all([listAdvanceShows(db, scope, place), listAdvanceHires(db, scope, place)])
+  // One after the other: inside a transaction there is one connection, and it takes one statement at a time.
+  const shows = await listAdvanceShows(db, scope, place)
+  const hires = await listAdvanceHires(db, scope, place)
   const subjects: Subjects = { showIds: shows.map((row) => row.id), hireIds: hires.map((row) => row.id) }
   const rigIds = [...new Set([...shows.map((row) => row.rigId), ...hires.flatMap((row) => row.rigIds)])]
-  const [recipients, dispatches, answers, settlements, newest] = await Promise.all([
-    listRecipients(db, scope, { venueIds: shows.map((row) => row.venueId), supplierIds: hires.map((row) => row.supplierId) }),
-    listDispatches(db, scope, subjects),
-    listAnswerEvents(db, scope, subjects),
-    listSettlements(db, scope, subjects),
-    listNewestLines(db, scope, rigIds),
-  ])
+  const houses = { venueIds: shows.map((row) => row.venueId), supplierIds: hires.map((row) => row.supplierId) }
+  const recipients = await listRecipients(db, scope, houses)
+  const dispatches = await listDispatches(db, scope, subjects)
+  const answers = await listAnswerEvents(db, scope, subjects)
+  const settlements = await listSettlements(db, scope, subjects)
+  const newest = await listNewestLines(db, scope, rigIds)
   const factsOf = (
     subject: { id: string; rigIds: readonly string[]; answersDueAt: Date | null },
     own: (row: { showId: string | null; hireId: string | null }) => boolean,

@@ -20,7 +20,8 @@ export async function loadReply(db: Db, actor: LinkActor) {
     pack.document.lines.filter((line) => line.asked).map((line) => ({ ...line, revisionId: pack.revisionId, units: pack.document.units })),
   )
   const subjects = { showIds: actor.showId ? [actor.showId] : [], hireIds: actor.hireId ? [actor.hireId] : [] }
-  const [events, settlements] = await Promise.all([listAnswerEvents(db, actor, subjects), listSettlements(db, actor, subjects)])
+  const events = await listAnswerEvents(db, actor, subjects)
+  const settlements = await listSettlements(db, actor, subjects)
   const states = deriveLineStates(asked, events.flatMap(saidAnswer), settlements.map(decisionOf))
   const closed = events.findLast((row) => row.kind === 'close')
   return { packs, asked, states, closed: closed ? { byName: closed.byName, at: closed.at.toISOString() } : null }
