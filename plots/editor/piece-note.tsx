@@ -2,8 +2,10 @@
 
 import { Button } from '@/components/ui/button'
 import { Checkbox } from '@/components/ui/checkbox'
+import { Field } from '@/components/ui/field'
+import { Select } from '@/components/ui/select'
 import { pieceHeadingDeg } from '../model/heading'
-import { piecesInOrder, type Piece } from '../model/document'
+import { piecesInOrder, pieceSets, type Piece, type PieceSet } from '../model/document'
 import type { PlotAction } from '../model/command'
 import { outputsOf, pieceKindOf } from '../symbols/piece-kinds'
 import { TURN_DEG, turnBy } from '../tools/turn-pieces'
@@ -13,6 +15,12 @@ import { CommitInput } from './commit-input'
 import type { EditorParts } from './editor-context'
 import { boxUnit, lengthInBox, optionalLengthAction, placeAction, turnAction } from './piece-fields'
 import { kindWords, placeWords } from './piece-words'
+
+const setWords: Record<PieceSet, string> = {
+  ours: 'our set',
+  support: 'the support’s set',
+  changeover: 'the changeover',
+}
 
 /** A piece's particulars, in the margin. */
 export function PieceNote({ parts, piece, onRemove }: { parts: EditorParts; piece: Piece; onRemove: () => void }) {
@@ -153,6 +161,20 @@ export function PieceNote({ parts, piece, onRemove }: { parts: EditorParts; piec
         disabled={!mayEdit}
         onCommit={(typed) => does(edit({ label: typed }), 'Renamed')}
       />
+      <Field label="Belongs to">
+        {(control) => (
+          <Select
+            {...control}
+            options={pieceSets.map((set) => ({ value: set, label: setWords[set] }))}
+            value={piece.set}
+            disabled={!mayEdit}
+            onChange={(event) => {
+              const set = pieceSets.find((one) => one === event.currentTarget.value)
+              if (set) act([edit({ set })], `${name}: ${setWords[set]}`)
+            }}
+          />
+        )}
+      </Field>
       {mayEdit && (
         <>
           <Checkbox
@@ -177,6 +199,24 @@ export function PieceNote({ parts, piece, onRemove }: { parts: EditorParts; piec
             </Button>
           </div>
         </>
+      )}
+    </aside>
+  )
+}
+
+/** Several pieces chosen at once. */
+export function ManyNote({ count, mayEdit, onRemove }: { count: number; mayEdit: boolean; onRemove: () => void }) {
+  return (
+    <aside aria-label={`${count} pieces chosen`} className="flex flex-col items-start gap-3">
+      <h2 className="text-2xl">{count} pieces</h2>
+      <p className="text-sm text-soft">
+        {mayEdit ? 'They move and turn together. ' : ''}Press one with Shift to take it out, or an empty place to let
+        go.
+      </p>
+      {mayEdit && (
+        <Button className="px-3" onClick={onRemove}>
+          Take {count} pieces off the plot
+        </Button>
       )}
     </aside>
   )

@@ -2,6 +2,7 @@
 
 import { DndContext, DragOverlay } from '@dnd-kit/core'
 import { useCallback, useMemo, useState, type KeyboardEvent } from 'react'
+import { classes } from '@/components/ui/classes'
 import { LiveRegion } from '@/components/ui/live-region'
 import { showToast } from '@/components/ui/toast'
 import { kitPieces } from '@/lib/advance/kit-pieces'
@@ -23,7 +24,7 @@ import type { EditorParts } from './editor-context'
 import { EditorBar } from './editor-bar'
 import { PieceInHand, useShelfDrag } from './shelf-drag'
 import { PieceList } from './piece-list'
-import { PieceNote } from './piece-note'
+import { ManyNote, PieceNote } from './piece-note'
 import { placeWords } from './piece-words'
 import { PlotNotices } from './save-state'
 import { middleOf, Sheet } from './sheet'
@@ -135,7 +136,11 @@ export function PlotEditor(props: PlotEditorProps) {
   })
   const [onlyId] = chosen
   const only = chosen.size === 1 && onlyId !== undefined ? document.pieces[onlyId] : undefined
-  const note = only && <PieceNote key={only.id} parts={parts} piece={only} onRemove={() => remove([only.id])} />
+  const note = only ? (
+    <PieceNote key={only.id} parts={parts} piece={only} onRemove={() => remove([only.id])} />
+  ) : (
+    chosen.size > 1 && <ManyNote count={chosen.size} mayEdit={mayEdit} onRemove={() => remove([...chosen])} />
+  )
 
   return (
     <DndContext id="plot-shelf" {...drag.context}>
@@ -158,13 +163,14 @@ export function PlotEditor(props: PlotEditorProps) {
           onStage={(stage) => act([{ type: 'setStage', stage }], 'Stage resized')}
         />
         <PlotNotices state={state} session={session} nameOf={nameOf} />
-        <div className={mayEdit ? 'grid gap-4 lg:grid-cols-[13rem_minmax(0,1fr)]' : ''}>
+        {/* On a phone the sheet stays in sight above the note and the shelf, so that a finger can drag from one to the other. */}
+        <div className={classes('grid gap-4', mayEdit && 'lg:grid-cols-[13rem_minmax(0,1fr)]')}>
           {mayEdit && (
-            <div className="order-2 lg:order-none lg:max-h-[max(26rem,calc(100dvh-20.5rem))] lg:overflow-y-auto lg:pr-1">
+            <div className="order-3 lg:order-none lg:max-h-[max(26rem,calc(100dvh-20.5rem))] lg:overflow-y-auto lg:pr-1">
               <Shelf document={document} kit={kit} armed={armed} onArm={setArmed} onPlace={putByItself} />
             </div>
           )}
-          <div className="flex min-w-0 flex-col gap-4">
+          <div className="contents lg:flex lg:min-w-0 lg:flex-col lg:gap-4">
             {isList ? (
               <PieceList parts={parts} chosen={chosen} onChoose={choose} onRemove={(id) => remove([id])} />
             ) : (
@@ -198,7 +204,7 @@ export function PlotEditor(props: PlotEditorProps) {
                 )}
               </Sheet>
             )}
-            {(isList || !isWide) && note}
+            {(isList || !isWide) && note && <div className="order-2">{note}</div>}
           </div>
         </div>
         <LiveRegion>{said}</LiveRegion>

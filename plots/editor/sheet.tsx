@@ -141,7 +141,7 @@ export function Sheet(props: SheetProps) {
       aria-describedby="plot-keys"
       tabIndex={0}
       onKeyDown={keyDown}
-      className="relative h-[52dvh] min-h-[22rem] lg:min-h-[26rem] overflow-hidden border border-line bg-paper lg:h-[calc(100dvh-20.5rem)]"
+      className="sticky top-0 z-10 order-1 h-[45dvh] min-h-72 overflow-hidden border border-line bg-paper lg:relative lg:z-auto lg:h-[calc(100dvh-20.5rem)] lg:min-h-[26rem]"
     >
       <p id="plot-keys" className="sr-only">
         Arrows move what is chosen 5 cm, with Shift 50, with Alt 1. Square brackets turn it. Delete takes it off. Plus,

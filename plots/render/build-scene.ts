@@ -45,6 +45,8 @@ export interface SceneInput {
   readonly unlabelled?: (piece: Piece) => boolean
 }
 
+/** How bad it is to write over a piece: a cymbal is a thin line, a drum carries words of its own. */
+const OBSTACLE_WEIGHTS: Readonly<Record<string, number>> = { drum: 3, microphone: 1.5, cymbal: 0.4 }
 /** A kit piece drawn smaller than this many name heights is a mark among many, not a thing to read. */
 const SMALL_EM = 3.3
 
@@ -62,7 +64,7 @@ export function buildScene(input: SceneInput): Scene {
     for (const shape of drawPiece(document, piece, kit)) items.push({ ...shape, pieceId: piece.id })
     const footprint = pieceFootprint(document, piece, kit)
     const level = pieceLevel(piece, kit)
-    if (level >= 2) obstacles.push({ pieceId: piece.id, footprint, weight: level === 4 ? 3 : 1 })
+    if (level >= 2) obstacles.push({ pieceId: piece.id, footprint, weight: OBSTACLE_WEIGHTS[piece.kind] ?? 1 })
     if (!input.unlabelled?.(piece)) {
       const acrossM = footprint.shape === 'circle' ? footprint.radiusM * 2 : footprint.depthM
       const isSmall = acrossM < SMALL_EM * sizes.name

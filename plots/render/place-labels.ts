@@ -165,6 +165,7 @@ function costOf(candidate: Candidate, request: LabelRequest, obstacles: readonly
   // Words without their second line, or away from their piece, are a little worse than whole ones close by.
   let cost = candidate.lines.length < request.lines.length ? 0.5 : 0
   if (candidate.leaderFrom) cost += 0.25
+  if (request.prefer === 'inside' && !candidate.isInside) cost += 0.6
   for (const obstacle of obstacles) {
     if (obstacle.pieceId === request.pieceId) {
       if (!candidate.isInside && footprintsOverlap(label, obstacle.footprint)) cost += obstacle.weight
