@@ -58,7 +58,12 @@ export function ContactForm({ under, contact, onClose }: ContactFormProps) {
         <TextField form={form} name="email" label="E-mail" type="email" />
         <TextField form={form} name="phone" label="Phone" type="tel" optional />
       </div>
-      <TickSetField form={form} name="duties" legend="Duties: packs are offered to whoever has backline" options={dutyOptions} />
+      <TickSetField
+        form={form}
+        name="duties"
+        legend="Duties: packs are offered to whoever has backline"
+        options={dutyOptions}
+      />
     </SaveForm>
   )
 }

@@ -38,7 +38,10 @@ export function Contacts({ under, contacts, mayEdit }: ContactsProps) {
                   {contact.email}
                 </a>
                 {contact.phone && (
-                  <a className="figures underline underline-offset-4" href={`tel:${contact.phone.replace(/[^+\d]/g, '')}`}>
+                  <a
+                    className="figures underline underline-offset-4"
+                    href={`tel:${contact.phone.replace(/[^+\d]/g, '')}`}
+                  >
                     {contact.phone}
                   </a>
                 )}
@@ -69,7 +72,10 @@ export function Contacts({ under, contacts, mayEdit }: ContactsProps) {
       )}
       {mayEdit && (
         <div className="mt-3">
-          <OpenedForm action={contacts.length === 0 ? 'Add the first contact' : 'Add a contact'} kind={contacts.length === 0 ? 'primary' : 'secondary'}>
+          <OpenedForm
+            action={contacts.length === 0 ? 'Add the first contact' : 'Add a contact'}
+            kind={contacts.length === 0 ? 'primary' : 'secondary'}
+          >
             {(close) => <ContactForm under={under} contact={null} onClose={close} />}
           </OpenedForm>
         </div>

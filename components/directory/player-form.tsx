@@ -56,13 +56,22 @@ export function PlayerForm({ player, units, onClose }: PlayerFormProps) {
       action={player ? 'Save the player' : 'Add this player'}
       busy="Saving the player"
       names={names}
-      say={(field, value) => (field === 'throneHeightM' && typeof value === 'number' ? formatLength(value, units) : undefined)}
+      say={(field, value) =>
+        field === 'throneHeightM' && typeof value === 'number' ? formatLength(value, units) : undefined
+      }
       onClose={onClose}
     >
       <div className="grid gap-4 sm:grid-cols-3">
         <TextField form={form} name="name" label="Name" />
         <ChoiceField form={form} name="hand" label="Hand" options={handOptions} />
-        <LengthField form={form} name="throneHeightM" label="Throne height" units={units} optional hint="Top of the seat over the floor, such as 52 cm or 20 in" />
+        <LengthField
+          form={form}
+          name="throneHeightM"
+          label="Throne height"
+          units={units}
+          optional
+          hint="Top of the seat over the floor, such as 52 cm or 20 in"
+        />
       </div>
     </SaveForm>
   )

@@ -28,7 +28,10 @@ export function PlayerTools({ player, units }: { player: Player; units: LengthUn
         busy="Taking the player away"
         done={`${name} is gone`}
         remove={() => players.remove(id, version)}
-        undo={{ label: `Put ${name} back`, run: () => players.create('/api/players', id, { name, hand, throneHeightM }) }}
+        undo={{
+          label: `Put ${name} back`,
+          run: () => players.create('/api/players', id, { name, hand, throneHeightM }),
+        }}
       />
     </div>
   )

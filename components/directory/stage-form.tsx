@@ -51,7 +51,16 @@ export function StageForm({ venueId, stage, units, onClose }: StageFormProps) {
     // The two lengths are there to be typed: no stage has a size by itself.
     start: stage
       ? fieldsOf(stage)
-      : { name: 'Main stage', widthM: Number.NaN, depthM: Number.NaN, heightM: 0, access: [], volts: null, mainsHz: null, inlets: '' },
+      : {
+          name: 'Main stage',
+          widthM: Number.NaN,
+          depthM: Number.NaN,
+          heightM: 0,
+          access: [],
+          volts: null,
+          mainsHz: null,
+          inlets: '',
+        },
     version: stage?.version ?? null,
     key: 'stage',
     save: ({ id, version, fields }) =>
@@ -85,12 +94,27 @@ export function StageForm({ venueId, stage, units, onClose }: StageFormProps) {
       <div className="grid gap-4 sm:grid-cols-3">
         <LengthField form={form} name="widthM" label="Width" units={units} hint={typed} />
         <LengthField form={form} name="depthM" label="Depth" units={units} />
-        <LengthField form={form} name="heightM" label="Height of the deck" units={units} hint="0 when it is the floor" />
+        <LengthField
+          form={form}
+          name="heightM"
+          label="Height of the deck"
+          units={units}
+          hint="0 when it is the floor"
+        />
       </div>
       <TickSetField form={form} name="access" legend="The way in" options={accessOptions} />
       <div className="grid gap-4 sm:grid-cols-3">
         <NumberField form={form} name="volts" label="Supply" unit="V" optional />
-        <ChoiceField form={form} name="mainsHz" label="Mains frequency" options={mainsOptions} placeholder="Not known yet" optional emptyIsNull numeric />
+        <ChoiceField
+          form={form}
+          name="mainsHz"
+          label="Mains frequency"
+          options={mainsOptions}
+          placeholder="Not known yet"
+          optional
+          emptyIsNull
+          numeric
+        />
         <TextField form={form} name="inlets" label="Inlets" optional hint="Such as 32 A three phase, stage left" />
       </div>
     </SaveForm>

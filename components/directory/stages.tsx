@@ -36,7 +36,7 @@ export function Stages({ venueId, stages, units, mayEdit }: StagesProps) {
             <li key={stage.id} className="border-b border-line py-2">
               <div className="flex flex-wrap items-baseline gap-x-6">
                 <h3 className="text-xl">{stage.name}</h3>
-                <span className="figures">
+                <span>
                   {formatLength(stage.widthM, units)} wide, {formatLength(stage.depthM, units)} deep
                 </span>
                 <span>{stage.heightM > 0 ? `deck ${formatLength(stage.heightM, units)} high` : 'on the floor'}</span>
@@ -66,7 +66,10 @@ export function Stages({ venueId, stages, units, mayEdit }: StagesProps) {
       )}
       {mayEdit && (
         <div className="mt-3">
-          <OpenedForm action={stages.length === 0 ? 'Add the first stage' : 'Add a stage'} kind={stages.length === 0 ? 'primary' : 'secondary'}>
+          <OpenedForm
+            action={stages.length === 0 ? 'Add the first stage' : 'Add a stage'}
+            kind={stages.length === 0 ? 'primary' : 'secondary'}
+          >
             {(close) => <StageForm venueId={venueId} stage={null} units={units} onClose={close} />}
           </OpenedForm>
         </div>
@@ -76,7 +79,10 @@ export function Stages({ venueId, stages, units, mayEdit }: StagesProps) {
 }
 
 function stageWords({ access, volts, mainsHz, inlets }: Stage): string {
-  const way = access.length > 0 ? `in by ${access.map((one) => stageAccessWords[one]).join(', ')}` : 'way in not known yet'
-  const supply = volts ? [`${volts} V`, mainsHz ? `${mainsHz} Hz` : ''].filter(Boolean).join(', ') : 'supply not known yet'
+  const way =
+    access.length > 0 ? `in by ${access.map((one) => stageAccessWords[one]).join(', ')}` : 'way in not known yet'
+  const supply = volts
+    ? [`${volts} V`, mainsHz ? `${mainsHz} Hz` : ''].filter(Boolean).join(', ')
+    : 'supply not known yet'
   return [way, supply, inlets].filter(Boolean).join('; ')
 }

@@ -11,7 +11,14 @@ import type { Supplier, SupplierInput } from '@/lib/contracts/directory'
 import { supplierInputSchema, supplierSchema } from '@/lib/contracts/directory'
 
 const blank: SupplierInput = { name: '', town: '', country: '', zone: null, currency: null, remark: '' }
-const names = { name: 'Name', town: 'Town', country: 'Country', zone: 'Time zone', currency: 'Currency', remark: 'Remark' }
+const names = {
+  name: 'Name',
+  town: 'Town',
+  country: 'Country',
+  zone: 'Time zone',
+  currency: 'Currency',
+  remark: 'Remark',
+}
 
 function fieldsOf({ name, town, country, zone, currency, remark }: Supplier): SupplierInput {
   return { name, town, country, zone, currency, remark }

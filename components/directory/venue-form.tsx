@@ -52,7 +52,11 @@ export function VenueForm({ venue, onClose }: { venue: Venue | null; onClose: ()
         <TextField form={form} name="town" label="Town" optional />
         <TextField form={form} name="country" label="Country" optional />
       </div>
-      <ZoneField form={form} name="zone" hint="Every time of a show there is told in it. Leave it empty while it is not known yet." />
+      <ZoneField
+        form={form}
+        name="zone"
+        hint="Every time of a show there is told in it. Leave it empty while it is not known yet."
+      />
       <TextField form={form} name="remark" label="Remark" optional lines={3} />
     </SaveForm>
   )

@@ -26,7 +26,13 @@ export function ChoiceField<Fields extends FieldValues>(props: ChoiceFieldProps<
   const { form, name, label, options, placeholder, hint, optional, emptyIsNull, numeric, className } = props
   const read = (text: unknown) => (text === '' && emptyIsNull ? null : numeric ? Number(text) : text)
   return (
-    <Field label={label} hint={hint} optional={optional ?? false} error={fieldError(form, name)} {...(className ? { className } : {})}>
+    <Field
+      label={label}
+      hint={hint}
+      optional={optional ?? false}
+      error={fieldError(form, name)}
+      {...(className ? { className } : {})}
+    >
       {(control) => (
         <Select
           {...control}

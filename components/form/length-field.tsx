@@ -31,7 +31,13 @@ export function LengthField<Fields extends FieldValues>(props: LengthFieldProps<
     field.onChange(typed.trim() === '' ? null : (parseLength(typed, units) ?? Number.NaN))
   }
   return (
-    <Field label={label} hint={hint} optional={optional ?? false} error={fieldError(form, name)} {...(className ? { className } : {})}>
+    <Field
+      label={label}
+      hint={hint}
+      optional={optional ?? false}
+      error={fieldError(form, name)}
+      {...(className ? { className } : {})}
+    >
       {(control) => (
         <TextInput
           {...control}

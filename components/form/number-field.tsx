@@ -26,7 +26,13 @@ function readNumber(text: unknown): number | null {
 export function NumberField<Fields extends FieldValues>(props: NumberFieldProps<Fields>) {
   const { form, name, label, unit, hint, optional, className } = props
   return (
-    <Field label={label} hint={hint} optional={optional ?? false} error={fieldError(form, name)} {...(className ? { className } : {})}>
+    <Field
+      label={label}
+      hint={hint}
+      optional={optional ?? false}
+      error={fieldError(form, name)}
+      {...(className ? { className } : {})}
+    >
       {(control) => (
         <NumberInput {...control} {...form.register(name, { setValueAs: readNumber })} {...(unit ? { unit } : {})} />
       )}

@@ -24,10 +24,31 @@ export interface TextFieldProps<Fields extends FieldValues> {
 
 /** One text of a form, typed in one line or several. */
 export function TextField<Fields extends FieldValues>(props: TextFieldProps<Fields>) {
-  const { form, name, label, hint, optional, type = 'text', emptyIsNull, lines, list, autoComplete = 'off', className } = props
-  const registered = form.register(name, emptyIsNull ? { setValueAs: (text: unknown) => (text === '' ? null : text) } : {})
+  const {
+    form,
+    name,
+    label,
+    hint,
+    optional,
+    type = 'text',
+    emptyIsNull,
+    lines,
+    list,
+    autoComplete = 'off',
+    className,
+  } = props
+  const registered = form.register(
+    name,
+    emptyIsNull ? { setValueAs: (text: unknown) => (text === '' ? null : text) } : {},
+  )
   return (
-    <Field label={label} hint={hint} optional={optional ?? false} error={fieldError(form, name)} {...(className ? { className } : {})}>
+    <Field
+      label={label}
+      hint={hint}
+      optional={optional ?? false}
+      error={fieldError(form, name)}
+      {...(className ? { className } : {})}
+    >
       {(control) =>
         lines ? (
           <TextArea {...control} {...registered} rows={lines} />

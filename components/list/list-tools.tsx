@@ -20,7 +20,12 @@ export function ListTools({ path, query, searched, filters }: ListToolsProps) {
   const narrowed = query.q !== '' || query.filter !== 'all'
   return (
     // Filled afresh when the address changes, such as by the way back.
-    <Form key={`${query.q} ${query.filter}`} action={path} className="flex flex-wrap items-end gap-3" role="search">
+    <Form
+      key={`${query.q} ${query.filter}`}
+      action={path}
+      className="flex w-full flex-wrap items-end gap-3"
+      role="search"
+    >
       <input type="hidden" name="sort" value={query.sort} />
       <input type="hidden" name="order" value={query.order} />
       <Field label={searched} className="min-w-48 grow sm:max-w-72">

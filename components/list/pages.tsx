@@ -23,12 +23,18 @@ export function Pages({ path, query, total, words, size = pageSize }: PagesProps
         {last > 1 && `, ${first} to ${Math.min(total, query.page * size)} shown`}
       </span>
       {query.page > 1 && (
-        <Link className="flex min-h-control items-center font-bold text-ink underline underline-offset-4" href={listAddress(path, query, { page: query.page - 1 })}>
+        <Link
+          className="flex min-h-control items-center font-bold text-ink underline underline-offset-4"
+          href={listAddress(path, query, { page: query.page - 1 })}
+        >
           Page before
         </Link>
       )}
       {query.page < last && (
-        <Link className="flex min-h-control items-center font-bold text-ink underline underline-offset-4" href={listAddress(path, query, { page: query.page + 1 })}>
+        <Link
+          className="flex min-h-control items-center font-bold text-ink underline underline-offset-4"
+          href={listAddress(path, query, { page: query.page + 1 })}
+        >
           Next page
         </Link>
       )}

@@ -20,7 +20,11 @@ export function FestivalFields({ form }: { form: UseFormReturn<ShowInput, unknow
           hint="Changeover, line check and where a rolling riser may wait"
           checked={slot !== null}
           onChange={(event) =>
-            form.setValue('slot', event.target.checked ? { changeoverMin: 20, lineCheckMin: 15, riserParking: '' } : null, dirty)
+            form.setValue(
+              'slot',
+              event.target.checked ? { changeoverMin: 20, lineCheckMin: 15, riserParking: '' } : null,
+              dirty,
+            )
           }
         />
         {slot && (
@@ -37,13 +41,23 @@ export function FestivalFields({ form }: { form: UseFormReturn<ShowInput, unknow
           hint="The drums are played by other acts too"
           checked={sharedKit !== null}
           onChange={(event) =>
-            form.setValue('sharedKit', event.target.checked ? { owner: '', mayRetune: false, maySwap: '' } : null, dirty)
+            form.setValue(
+              'sharedKit',
+              event.target.checked ? { owner: '', mayRetune: false, maySwap: '' } : null,
+              dirty,
+            )
           }
         />
         {sharedKit && (
           <div className="mt-2 grid items-end gap-4 sm:grid-cols-3">
             <TextField form={form} name="sharedKit.owner" label="Whose it is" />
-            <TextField form={form} name="sharedKit.maySwap" label="What may be swapped" optional hint="Such as snare and cymbals" />
+            <TextField
+              form={form}
+              name="sharedKit.maySwap"
+              label="What may be swapped"
+              optional
+              hint="Such as snare and cymbals"
+            />
             <Checkbox label="May be retuned" {...form.register('sharedKit.mayRetune')} />
           </div>
         )}

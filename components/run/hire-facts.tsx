@@ -13,21 +13,32 @@ function windowWords(date: string | null, from: string | null, until: string | n
 export function HireFacts({ hire, shows }: { hire: Hire; shows: readonly { id: string; label: string }[] }) {
   const zone = hire.zone ? `${hire.zone} time` : 'zone not known yet'
   return (
-    <Facts
-      facts={[
-        ['Shows', shows.map((show) => show.label).join('; ')],
-        ['Delivery', windowWords(hire.deliveryDate, hire.deliveryFrom, hire.deliveryUntil) ?? 'not known yet'],
-        ['Collection', windowWords(hire.collectionDate, hire.collectionFrom, hire.collectionUntil) ?? 'not known yet'],
-        ['Times are', zone],
-        ['Answers due', hire.answersDue ? `${dateWords(hire.answersDue.date)}, ${hire.answersDue.time}` : 'no date set'],
-        ['Receiver', hire.receiver],
-        ['Condition on return', hire.conditionOnReturn],
-        ['PO number', hire.poNumber],
-        ['Rate', `by the ${hire.rateBasis}`],
-        ['Transport', hire.transportMinor === null || !hire.currency ? '' : formatMoney(hire.transportMinor, hire.currency)],
-        ['Tax', hire.taxBasisPoints === null ? '' : `${hire.taxBasisPoints / 100} %`],
-        ['Quote valid until', hire.validUntil ? dateWords(hire.validUntil) : ''],
-      ]}
-    />
+    <>
+      <p className="mt-1">{shows.map((show) => show.label).join('; ')}</p>
+      <Facts
+        facts={[
+          ['Delivery', windowWords(hire.deliveryDate, hire.deliveryFrom, hire.deliveryUntil) ?? 'not known yet'],
+          [
+            'Collection',
+            windowWords(hire.collectionDate, hire.collectionFrom, hire.collectionUntil) ?? 'not known yet',
+          ],
+          ['Times are', zone],
+          [
+            'Answers due',
+            hire.answersDue ? `${dateWords(hire.answersDue.date)}, ${hire.answersDue.time}` : 'no date set',
+          ],
+          ['Receiver', hire.receiver],
+          ['Condition on return', hire.conditionOnReturn],
+          ['PO number', hire.poNumber],
+          ['Rate', `by the ${hire.rateBasis}`],
+          [
+            'Transport',
+            hire.transportMinor === null || !hire.currency ? '' : formatMoney(hire.transportMinor, hire.currency),
+          ],
+          ['Tax', hire.taxBasisPoints === null ? '' : `${hire.taxBasisPoints / 100} %`],
+          ['Quote valid until', hire.validUntil ? dateWords(hire.validUntil) : ''],
+        ]}
+      />
+    </>
   )
 }

@@ -98,23 +98,30 @@ function HireFields({ tourId, hire, choices, onClose }: HireFormProps) {
       names={names}
       say={(field, value) => {
         if (field === 'supplierId') return labelOf(supplierOptions, value)
-        if (field === 'showIds' && Array.isArray(value)) return value.map((id) => labelOf(showOptions, id) ?? '').join('; ')
+        if (field === 'showIds' && Array.isArray(value))
+          return value.map((id) => labelOf(showOptions, id) ?? '').join('; ')
         return undefined
       }}
       onClose={onClose}
     >
       <div className="grid gap-4 sm:grid-cols-2">
-        <ChoiceField form={form} name="supplierId" label="Supplier" options={supplierOptions} placeholder="Choose a supplier" />
+        <ChoiceField
+          form={form}
+          name="supplierId"
+          label="Supplier"
+          options={supplierOptions}
+          placeholder="Choose a supplier"
+        />
         <TextField form={form} name="name" label="What it is" optional hint="Such as one van, full rig" />
       </div>
       <TickSetField form={form} name="showIds" legend="The shows it covers" options={showOptions} />
       <div className="grid gap-4 sm:grid-cols-3">
-        <TextField form={form} name="deliveryDate" label="Delivery" type="date" optional emptyIsNull />
-        <TextField form={form} name="deliveryFrom" label="from" type="time" optional emptyIsNull />
-        <TextField form={form} name="deliveryUntil" label="until" type="time" optional emptyIsNull />
-        <TextField form={form} name="collectionDate" label="Collection" type="date" optional emptyIsNull />
-        <TextField form={form} name="collectionFrom" label="from" type="time" optional emptyIsNull />
-        <TextField form={form} name="collectionUntil" label="until" type="time" optional emptyIsNull />
+        <TextField form={form} name="deliveryDate" label="Delivery day" type="date" optional emptyIsNull />
+        <TextField form={form} name="deliveryFrom" label="Delivery from" type="time" optional emptyIsNull />
+        <TextField form={form} name="deliveryUntil" label="Delivery until" type="time" optional emptyIsNull />
+        <TextField form={form} name="collectionDate" label="Collection day" type="date" optional emptyIsNull />
+        <TextField form={form} name="collectionFrom" label="Collection from" type="time" optional emptyIsNull />
+        <TextField form={form} name="collectionUntil" label="Collection until" type="time" optional emptyIsNull />
       </div>
       <ZoneField form={form} name="zone" hint="The windows above are told in it. Empty takes the supplier's." />
       <div className="grid gap-4 sm:grid-cols-3">

@@ -29,14 +29,33 @@ export function NewTourForm({ asksPlayer, onClose }: NewTourFormProps) {
   })
   const { form } = saving
   return (
-    <SaveForm saving={saving} label="New tour" action="Make this tour" busy="Making the tour" names={{}} onClose={onClose}>
-      <TextField form={form} name="name" label="Name of the tour" hint="Such as Autumn run" />
+    <SaveForm
+      saving={saving}
+      label="New tour"
+      action="Make this tour"
+      busy="Making the tour"
+      names={{}}
+      onClose={onClose}
+    >
       <div className="grid gap-4 sm:grid-cols-2">
-        <TextField form={form} name="rigName" label="First rig" hint="The way it is played: full rig, fly rig, acoustic" />
-        {asksPlayer && <TextField form={form} name="playerName" label="Player" hint="Who sits behind the kit; hand and throne height can follow" />}
+        <TextField form={form} name="name" label="Name of the tour" hint="Such as Autumn run" />
+        <TextField
+          form={form}
+          name="rigName"
+          label="First rig"
+          hint="The way it is played: full rig, fly rig, acoustic"
+        />
         <TextField form={form} name="firstDate" label="First date" type="date" />
         <TextField form={form} name="lastDate" label="Last date" type="date" />
       </div>
+      {asksPlayer && (
+        <TextField
+          form={form}
+          name="playerName"
+          label="Player"
+          hint="Who sits behind the kit; hand and throne height can follow"
+        />
+      )}
     </SaveForm>
   )
 }

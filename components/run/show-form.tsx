@@ -100,9 +100,21 @@ function ShowFields({ tourId, show, dayId, choices, onClose }: ShowFormProps) {
         <ChoiceField form={form} name="dayId" label="Day" options={options.dayId} />
         <ChoiceField form={form} name="stageId" label="Stage" options={options.stageId} placeholder="Choose a stage" />
         <ChoiceField form={form} name="rigId" label="Rig" options={options.rigId} />
-        <ChoiceField form={form} name="playerId" label="Player" options={options.playerId} placeholder="Choose a player" />
+        <ChoiceField
+          form={form}
+          name="playerId"
+          label="Player"
+          options={options.playerId}
+          placeholder="Choose a player"
+        />
       </div>
-      <TextField form={form} name="name" label="Name of the show" optional hint="Where the venue's name is not enough: a festival, a matinee" />
+      <TextField
+        form={form}
+        name="name"
+        label="Name of the show"
+        optional
+        hint="Where the venue's name is not enough: a festival, a matinee"
+      />
       <div className="grid gap-4 sm:grid-cols-3">
         <TextField form={form} name="loadInTime" label="Load-in" type="time" optional emptyIsNull />
         <TextField form={form} name="showTime" label="Show time" type="time" optional emptyIsNull />
@@ -120,7 +132,11 @@ function ShowFields({ tourId, show, dayId, choices, onClose }: ShowFormProps) {
       <ZoneField
         form={form}
         name="zone"
-        hint={venueZone ? `Empty takes the venue's: ${venueZone}` : "The venue's zone is not known yet; times stay as the wall there shows them."}
+        hint={
+          venueZone
+            ? `Empty takes the venue's: ${venueZone}`
+            : "The venue's zone is not known yet; times stay as the wall there shows them."
+        }
       />
       <WallField form={form} name="answersDue" label="Answers due" hint="As the wall at the venue shows it." />
       <FestivalFields form={form} />

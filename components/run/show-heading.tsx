@@ -27,7 +27,9 @@ export function ShowHeading({ tourId, show, choices, mayEdit }: ShowHeadingProps
         {show.venueName}
         {show.town && `, ${show.town}`}
       </h1>
-      <p className="mt-1 text-lg text-soft">{[dateWords(show.date), show.name, show.rigName].filter(Boolean).join(', ')}</p>
+      <p className="mt-1 text-lg text-soft">
+        {[dateWords(show.date), show.name, show.rigName].filter(Boolean).join(', ')}
+      </p>
       {mayEdit && (
         <div className="-ml-4 mt-1 flex flex-wrap items-center gap-x-2">
           <OpenedForm action="Change the show" kind="quiet">

@@ -5,14 +5,10 @@ export function ShowTimes({ show }: { show: Pick<Show, 'loadInTime' | 'showTime'
   const { loadInTime, showTime, showDayOffset, zone } = show
   return (
     <>
-      {loadInTime && (
-        <>
-          load-in <span className="figures">{loadInTime}</span>,{' '}
-        </>
-      )}
+      {loadInTime && <>load-in {loadInTime}, </>}
       {showTime ? (
         <>
-          show <span className="figures">{showTime}</span>
+          show {showTime}
           {showDayOffset > 0 && ' +1 day'}
         </>
       ) : (

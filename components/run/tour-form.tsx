@@ -27,7 +27,14 @@ export function TourForm({ tour, onClose }: { tour: Tour; onClose: () => void })
     },
   })
   return (
-    <SaveForm saving={saving} label={tour.name} action="Save the name" busy="Saving the name" names={{ name: 'Name' }} onClose={onClose}>
+    <SaveForm
+      saving={saving}
+      label={tour.name}
+      action="Save the name"
+      busy="Saving the name"
+      names={{ name: 'Name' }}
+      onClose={onClose}
+    >
       <TextField form={saving.form} name="name" label="Name of the tour" />
     </SaveForm>
   )

@@ -59,7 +59,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
   const here = showPlace === 'advance' || showPlace === 'bench' ? `/${showPlace}` : ''
   return (
     <>
-      <div className="flex flex-wrap items-center gap-x-6 px-4 sm:px-6 print:hidden">
+      <section aria-label="Tour" className="flex flex-wrap items-center gap-x-6 px-4 sm:px-6 print:hidden">
         <p className="min-w-0 truncate py-1 text-soft">
           {tourName}
           {chosen ? `, ${chosen.venue}` : ''}
@@ -82,7 +82,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
             ))}
           </nav>
         )}
-      </div>
+      </section>
       <RunStrip
         label={`The run of ${tourName}`}
         tour={{ href: `${base}/run` as Route, chosen: showId === undefined, note }}

@@ -3,7 +3,14 @@ import type { Db, Scope } from '@/db/client'
 import { day, show } from '@/db/schema/tour'
 import type { DayInput, DayKind } from '@/lib/contracts/tour'
 
-const columns = { id: day.id, tourId: day.tourId, date: day.date, kind: day.kind, remark: day.remark, version: day.version }
+const columns = {
+  id: day.id,
+  tourId: day.tourId,
+  date: day.date,
+  kind: day.kind,
+  remark: day.remark,
+  version: day.version,
+}
 
 /** A tour's days in order; a run is at most a few hundred. */
 export async function listDays(db: Db, scope: Scope, tourId: string) {
@@ -43,7 +50,15 @@ export async function insertDays(
 ) {
   const rows = await db
     .insert(day)
-    .values(input.dates.map((date) => ({ partyId: scope.partyId, tourId: input.tourId, date, kind: input.kind, remark: input.remark })))
+    .values(
+      input.dates.map((date) => ({
+        partyId: scope.partyId,
+        tourId: input.tourId,
+        date,
+        kind: input.kind,
+        remark: input.remark,
+      })),
+    )
     .onConflictDoNothing({ target: [day.tourId, day.date] })
     .returning(columns)
   return rows.sort((a, b) => a.date.localeCompare(b.date))
@@ -76,7 +91,12 @@ export async function deleteDay(db: Db, scope: Scope, input: { id: string; versi
   return rows.length > 0
 }
 
-export async function countShowsOfDay(db: Db, scope: Scope, dayId: string, exceptShowId: string | null): Promise<number> {
+export async function countShowsOfDay(
+  db: Db,
+  scope: Scope,
+  dayId: string,
+  exceptShowId: string | null,
+): Promise<number> {
   const rows = await db
     .select({ id: show.id })
     .from(show)

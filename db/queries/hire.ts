@@ -125,9 +125,24 @@ export async function findHireHangers(db: Db, scope: Scope, id: string) {
   const { partyId } = scope
   const rows = await db
     .select({
-      packs: sql<boolean>`${exists(db.select({ id: pack.id }).from(pack).where(and(eq(pack.partyId, partyId), eq(pack.hireId, id))))}`,
-      grants: sql<boolean>`${exists(db.select({ id: grant.id }).from(grant).where(and(eq(grant.partyId, partyId), eq(grant.hireId, id))))}`,
-      answers: sql<boolean>`${exists(db.select({ id: answerEvent.id }).from(answerEvent).where(and(eq(answerEvent.partyId, partyId), eq(answerEvent.hireId, id))))}`,
+      packs: sql<boolean>`${exists(
+        db
+          .select({ id: pack.id })
+          .from(pack)
+          .where(and(eq(pack.partyId, partyId), eq(pack.hireId, id))),
+      )}`,
+      grants: sql<boolean>`${exists(
+        db
+          .select({ id: grant.id })
+          .from(grant)
+          .where(and(eq(grant.partyId, partyId), eq(grant.hireId, id))),
+      )}`,
+      answers: sql<boolean>`${exists(
+        db
+          .select({ id: answerEvent.id })
+          .from(answerEvent)
+          .where(and(eq(answerEvent.partyId, partyId), eq(answerEvent.hireId, id))),
+      )}`,
     })
     .from(hire)
     .where(and(eq(hire.partyId, partyId), eq(hire.id, id)))

@@ -55,7 +55,11 @@ export async function findRig(db: Db, scope: Scope, id: string) {
 }
 
 /** Another rig of the tour with this name. */
-export async function rigNameTaken(db: Db, scope: Scope, input: { tourId: string; name: string; exceptId: string | null }) {
+export async function rigNameTaken(
+  db: Db,
+  scope: Scope,
+  input: { tourId: string; name: string; exceptId: string | null },
+) {
   const rows = await db
     .select({ id: rig.id })
     .from(rig)

@@ -130,13 +130,48 @@ export async function findShowHangers(db: Db, scope: Scope, id: string) {
   const { partyId } = scope
   const rows = await db
     .select({
-      hires: sql<boolean>`${exists(db.select({ id: hireShow.hireId }).from(hireShow).where(and(eq(hireShow.partyId, partyId), eq(hireShow.showId, id))))}`,
-      packs: sql<boolean>`${exists(db.select({ id: pack.id }).from(pack).where(and(eq(pack.partyId, partyId), eq(pack.showId, id))))}`,
-      grants: sql<boolean>`${exists(db.select({ id: grant.id }).from(grant).where(and(eq(grant.partyId, partyId), eq(grant.showId, id))))}`,
-      answers: sql<boolean>`${exists(db.select({ id: answerEvent.id }).from(answerEvent).where(and(eq(answerEvent.partyId, partyId), eq(answerEvent.showId, id))))}`,
-      readings: sql<boolean>`${exists(db.select({ id: reading.id }).from(reading).where(and(eq(reading.partyId, partyId), eq(reading.showId, id))))}`,
-      signOffs: sql<boolean>`${exists(db.select({ id: signOff.id }).from(signOff).where(and(eq(signOff.partyId, partyId), eq(signOff.showId, id))))}`,
-      moves: sql<boolean>`${exists(db.select({ id: plot.id }).from(plot).where(and(eq(plot.partyId, partyId), eq(plot.showId, id))))}`,
+      hires: sql<boolean>`${exists(
+        db
+          .select({ id: hireShow.hireId })
+          .from(hireShow)
+          .where(and(eq(hireShow.partyId, partyId), eq(hireShow.showId, id))),
+      )}`,
+      packs: sql<boolean>`${exists(
+        db
+          .select({ id: pack.id })
+          .from(pack)
+          .where(and(eq(pack.partyId, partyId), eq(pack.showId, id))),
+      )}`,
+      grants: sql<boolean>`${exists(
+        db
+          .select({ id: grant.id })
+          .from(grant)
+          .where(and(eq(grant.partyId, partyId), eq(grant.showId, id))),
+      )}`,
+      answers: sql<boolean>`${exists(
+        db
+          .select({ id: answerEvent.id })
+          .from(answerEvent)
+          .where(and(eq(answerEvent.partyId, partyId), eq(answerEvent.showId, id))),
+      )}`,
+      readings: sql<boolean>`${exists(
+        db
+          .select({ id: reading.id })
+          .from(reading)
+          .where(and(eq(reading.partyId, partyId), eq(reading.showId, id))),
+      )}`,
+      signOffs: sql<boolean>`${exists(
+        db
+          .select({ id: signOff.id })
+          .from(signOff)
+          .where(and(eq(signOff.partyId, partyId), eq(signOff.showId, id))),
+      )}`,
+      moves: sql<boolean>`${exists(
+        db
+          .select({ id: plot.id })
+          .from(plot)
+          .where(and(eq(plot.partyId, partyId), eq(plot.showId, id))),
+      )}`,
     })
     .from(show)
     .where(and(eq(show.partyId, partyId), eq(show.id, id)))

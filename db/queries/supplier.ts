@@ -133,7 +133,11 @@ export async function supplierIsNamed(db: Db, scope: Scope, supplierId: string):
 }
 
 /** The suppliers of these that have nobody to write to. */
-export async function listSuppliersWithoutContact(db: Db, scope: Scope, supplierIds: readonly string[]): Promise<string[]> {
+export async function listSuppliersWithoutContact(
+  db: Db,
+  scope: Scope,
+  supplierIds: readonly string[],
+): Promise<string[]> {
   if (supplierIds.length === 0) return []
   const rows = await db
     .select({ id: supplier.id })

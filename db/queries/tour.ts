@@ -106,8 +106,18 @@ export async function deleteTour(db: Db, scope: Scope, input: { id: string; vers
 export async function findTourHangers(db: Db, scope: Scope, id: string) {
   const rows = await db
     .select({
-      shows: sql<boolean>`${exists(db.select({ id: show.id }).from(show).where(and(eq(show.partyId, scope.partyId), eq(show.tourId, id))))}`,
-      hires: sql<boolean>`${exists(db.select({ id: hire.id }).from(hire).where(and(eq(hire.partyId, scope.partyId), eq(hire.tourId, id))))}`,
+      shows: sql<boolean>`${exists(
+        db
+          .select({ id: show.id })
+          .from(show)
+          .where(and(eq(show.partyId, scope.partyId), eq(show.tourId, id))),
+      )}`,
+      hires: sql<boolean>`${exists(
+        db
+          .select({ id: hire.id })
+          .from(hire)
+          .where(and(eq(hire.partyId, scope.partyId), eq(hire.tourId, id))),
+      )}`,
       revisions: sql<boolean>`${exists(
         db
           .select({ id: revision.id })

@@ -40,7 +40,9 @@ export interface SavingForm<Fields extends FieldValues> {
 }
 
 /** A form over one contract that keeps what was typed until it is saved, whatever becomes of the request. */
-export function useSavingForm<Fields extends FieldValues, Row>(options: SavingFormOptions<Fields, Row>): SavingForm<Fields> {
+export function useSavingForm<Fields extends FieldValues, Row>(
+  options: SavingFormOptions<Fields, Row>,
+): SavingForm<Fields> {
   const { schema, start, key, save, readCurrent, onSaved } = options
   const [id] = useState(() => crypto.randomUUID())
   // The version is the one seen when the form was opened, though the page behind it may be read again meanwhile.
@@ -57,7 +59,11 @@ export function useSavingForm<Fields extends FieldValues, Row>(options: SavingFo
     const own = Object.entries(fields).filter(([path]) => path.startsWith(`${key}.`))
     own.forEach(([path, message], index) =>
       // The path is the contract's own, read back by the route from the same schema.
-      form.setError(path.slice(key.length + 1) as Path<Fields>, { message: String(message) }, { shouldFocus: index === 0 }),
+      form.setError(
+        path.slice(key.length + 1) as Path<Fields>,
+        { message: String(message) },
+        { shouldFocus: index === 0 },
+      ),
     )
     return own.length > 0
   }
@@ -72,7 +78,11 @@ export function useSavingForm<Fields extends FieldValues, Row>(options: SavingFo
   }
 
   const troubleOf = (error: unknown, mine: Fields): Trouble<Fields> | null => {
-    if (!(error instanceof AppError)) return { kind: 'refused', message: 'Something failed on this page. What you typed is kept here; please try again.' }
+    if (!(error instanceof AppError))
+      return {
+        kind: 'refused',
+        message: 'Something failed on this page. What you typed is kept here; please try again.',
+      }
     if (error.code === 'unavailable') return { kind: 'lost' }
     const details = error.details ?? {}
     const current = error.code === 'stale' ? readCurrent?.(details['current']) : null

@@ -32,10 +32,7 @@ export const venueSchema = venueInputSchema.extend({ id: idSchema, version: vers
 export type Venue = z.infer<typeof venueSchema>
 
 const metres = (low: number, high: number) =>
-  z
-    .number('write a length such as 8 m, 26 ft or 7\'10"')
-    .min(low, `at least ${low} m`)
-    .max(high, `at most ${high} m`)
+  z.number('write a length such as 8 m, 26 ft or 7\'10"').min(low, `at least ${low} m`).max(high, `at most ${high} m`)
 
 export const stageInputSchema = z.object({
   name: nameSchema,

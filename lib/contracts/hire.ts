@@ -61,7 +61,12 @@ export const hireInputSchema = fields.superRefine((hire, context) => {
   if (!currencySchema.safeParse(hire.currency).success) return
   if (parseMoney(hire.transport, hire.currency) === null) {
     const digits = minorDigits(hire.currency)
-    say('transport', digits === 0 ? 'write an amount such as 1250' : `write an amount such as ${typedMoney(1250 * 10 ** digits, hire.currency)}`)
+    say(
+      'transport',
+      digits === 0
+        ? 'write an amount such as 1250'
+        : `write an amount such as ${typedMoney(1250 * 10 ** digits, hire.currency)}`,
+    )
   }
 })
 export type HireInput = z.infer<typeof hireInputSchema>

@@ -5,7 +5,12 @@ import { listQuerySchema } from './list'
 
 export const dayKinds = ['show', 'travel', 'off', 'rehearsal'] as const
 export type DayKind = (typeof dayKinds)[number]
-export const dayKindWords: Record<DayKind, string> = { show: 'show', travel: 'travel', off: 'day off', rehearsal: 'rehearsal' }
+export const dayKindWords: Record<DayKind, string> = {
+  show: 'show',
+  travel: 'travel',
+  off: 'day off',
+  rehearsal: 'rehearsal',
+}
 
 /** A run can be a season long; a span past this is a slip of the year. */
 const longestSpanDays = 400
@@ -15,7 +20,8 @@ const span = { firstDate: dateSchema, lastDate: dateSchema }
 function checkSpan(input: { firstDate: string; lastDate: string }, context: z.RefinementCtx): void {
   const say = (message: string) => context.addIssue({ code: 'custom', path: ['lastDate'], message })
   if (input.lastDate < input.firstDate) say('on or after the first date')
-  else if (daysBetween(input.firstDate, input.lastDate) >= longestSpanDays) say(`at most ${longestSpanDays} days at once`)
+  else if (daysBetween(input.firstDate, input.lastDate) >= longestSpanDays)
+    say(`at most ${longestSpanDays} days at once`)
 }
 
 export const rigInputSchema = z.object({
@@ -39,7 +45,11 @@ export const newTourInputSchema = z
   })
   .superRefine(checkSpan)
 export type NewTourInput = z.infer<typeof newTourInputSchema>
-export const createTourSchema = z.object({ id: idSchema.optional(), rigId: idSchema.optional(), tour: newTourInputSchema })
+export const createTourSchema = z.object({
+  id: idSchema.optional(),
+  rigId: idSchema.optional(),
+  tour: newTourInputSchema,
+})
 export const tourInputSchema = z.object({ name: nameSchema })
 export type TourInput = z.infer<typeof tourInputSchema>
 export const updateTourSchema = z.object({ version: versionSchema, tour: tourInputSchema })
@@ -54,7 +64,12 @@ export const createDaysSchema = z.object({ days: newDaysInputSchema })
 export const dayInputSchema = z.object({ kind: z.enum(dayKinds, 'choose what the day is'), remark: remarkSchema })
 export type DayInput = z.infer<typeof dayInputSchema>
 export const updateDaySchema = z.object({ version: versionSchema, day: dayInputSchema })
-export const daySchema = dayInputSchema.extend({ id: idSchema, tourId: idSchema, date: z.string(), version: versionSchema })
+export const daySchema = dayInputSchema.extend({
+  id: idSchema,
+  tourId: idSchema,
+  date: z.string(),
+  version: versionSchema,
+})
 export type Day = z.infer<typeof daySchema>
 /** The days that were made; those that were there already are left as they are. */
 export const madeDaysSchema = z.object({ days: z.array(daySchema), alreadyThere: z.number().int() })
@@ -80,22 +95,21 @@ export type SharedKit = z.infer<typeof sharedKitSchema>
 /** A date and a time as the wall at the place shows them. */
 export const wallSchema = z.object({ date: dateSchema, time: wallTimeSchema })
 
-export const showInputSchema = z
-  .object({
-    name: z.string().trim().max(120, 'at most 120 characters'),
-    dayId: z.uuid('choose a day of the run'),
-    rigId: z.uuid('choose a rig of this tour'),
-    stageId: z.uuid('choose a stage from the directory'),
-    playerId: z.uuid('choose a player'),
-    /** Null takes the venue's, and stays unknown while the venue's is. */
-    zone: zoneSchema.nullable(),
-    loadInTime: wallTimeSchema.nullable(),
-    showTime: wallTimeSchema.nullable(),
-    showDayOffset: z.union([z.literal(0), z.literal(1)], 'the same day or the day after'),
-    answersDue: wallSchema.nullable(),
-    slot: slotSchema.nullable(),
-    sharedKit: sharedKitSchema.nullable(),
-  })
+export const showInputSchema = z.object({
+  name: z.string().trim().max(120, 'at most 120 characters'),
+  dayId: z.uuid('choose a day of the run'),
+  rigId: z.uuid('choose a rig of this tour'),
+  stageId: z.uuid('choose a stage from the directory'),
+  playerId: z.uuid('choose a player'),
+  /** Null takes the venue's, and stays unknown while the venue's is. */
+  zone: zoneSchema.nullable(),
+  loadInTime: wallTimeSchema.nullable(),
+  showTime: wallTimeSchema.nullable(),
+  showDayOffset: z.union([z.literal(0), z.literal(1)], 'the same day or the day after'),
+  answersDue: wallSchema.nullable(),
+  slot: slotSchema.nullable(),
+  sharedKit: sharedKitSchema.nullable(),
+})
 export type ShowInput = z.infer<typeof showInputSchema>
 export const createShowSchema = z.object({ id: idSchema.optional(), show: showInputSchema })
 export const updateShowSchema = z.object({ version: versionSchema, show: showInputSchema })
@@ -132,7 +146,20 @@ export type Show = z.infer<typeof showSchema>
 export function showInputOf(show: Show): ShowInput {
   const { name, dayId, rigId, stageId, playerId, zone, loadInTime, showTime, answersDue, slot, sharedKit } = show
   const showDayOffset = show.showDayOffset === 1 ? 1 : 0
-  return { name, dayId, rigId, stageId, playerId, zone, loadInTime, showTime, showDayOffset, answersDue, slot, sharedKit }
+  return {
+    name,
+    dayId,
+    rigId,
+    stageId,
+    playerId,
+    zone,
+    loadInTime,
+    showTime,
+    showDayOffset,
+    answersDue,
+    slot,
+    sharedKit,
+  }
 }
 
 export const tourFilters = ['all', 'ahead', 'over'] as const

@@ -15,7 +15,12 @@ export function datesOf(first: string, last: string): string[] {
   return Array.from({ length: Math.max(0, daysBetween(first, last) + 1) }, (_, index) => dateAfter(first, index))
 }
 
-const dayFormat = new Intl.DateTimeFormat('en-GB', { weekday: 'short', day: 'numeric', month: 'short', timeZone: 'UTC' })
+const dayFormat = new Intl.DateTimeFormat('en-GB', {
+  weekday: 'short',
+  day: 'numeric',
+  month: 'short',
+  timeZone: 'UTC',
+})
 
 /** A date in words, "Thu 15 Oct". */
 export function dateWords(date: string): string {

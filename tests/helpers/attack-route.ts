@@ -22,7 +22,10 @@ export async function attackRoute(input: {
   const large = JSON.stringify({ padding: 'x'.repeat(300 * 1024) })
   expect((await input.ours(method, path, large)).status, `${told} too large`).toBe(413)
   expect((await input.ours(method, path, '{"half":')).status, `${told} no JSON`).toBe(422)
-  const crossSite = await input.ours(method, path, body, { 'sec-fetch-site': 'cross-site', origin: 'https://other.example' })
+  const crossSite = await input.ours(method, path, body, {
+    'sec-fetch-site': 'cross-site',
+    origin: 'https://other.example',
+  })
   expect(crossSite.status, `${told} from another site`).toBe(403)
 }
 

@@ -32,9 +32,30 @@ const attack = (method: string, path: string, body: unknown, theirs = true) =>
   })
 
 const venue = { name: 'Salle Nord', town: 'Arvic', country: 'Norland', zone: 'Europe/Paris', remark: '' }
-const stage = { name: 'Main', widthM: 10, depthM: 8, heightM: 1.2, access: ['dock'], volts: 230, mainsHz: 50, inlets: '32 A three phase' }
-const supplier = { name: 'Northline hire', town: 'Lisby', country: 'Norland', zone: 'Europe/Oslo', currency: 'EUR', remark: '' }
-const contact = { name: 'Crew desk', email: 'Desk@Northline.Example', phone: '+47 00 00 00', duties: ['backline', 'delivery'] }
+const stage = {
+  name: 'Main',
+  widthM: 10,
+  depthM: 8,
+  heightM: 1.2,
+  access: ['dock'],
+  volts: 230,
+  mainsHz: 50,
+  inlets: '32 A three phase',
+}
+const supplier = {
+  name: 'Northline hire',
+  town: 'Lisby',
+  country: 'Norland',
+  zone: 'Europe/Oslo',
+  currency: 'EUR',
+  remark: '',
+}
+const contact = {
+  name: 'Crew desk',
+  email: 'Desk@Northline.Example',
+  phone: '+47 00 00 00',
+  duties: ['backline', 'delivery'],
+}
 const player = { name: 'Ines', hand: 'left', throneHeightM: 0.52 }
 
 const routes = (): [method: string, path: string, body: unknown][] => [
@@ -55,10 +76,13 @@ const routes = (): [method: string, path: string, body: unknown][] => [
   ['PATCH', `/api/players/${party.playerId}`, { version: 1, player }],
   ['DELETE', `/api/players/${party.playerId}`, { version: 1 }],
 ]
-it.each(Array.from({ length: 16 }, (_, index) => index))('route %i keeps strangers, readers and other sites out', async (index) => {
-  const [method, path, body] = routes()[index] ?? ['', '', '']
-  await attack(method, path, body, path.split('/').length > 3)
-})
+it.each(Array.from({ length: 16 }, (_, index) => index))(
+  'route %i keeps strangers, readers and other sites out',
+  async (index) => {
+    const [method, path, body] = routes()[index] ?? ['', '', '']
+    await attack(method, path, body, path.split('/').length > 3)
+  },
+)
 
 it('a drum tech keeps players, not the directory', async () => {
   expect((await party.drumTech.call('POST', '/api/venues', { venue })).status).toBe(403)
@@ -125,7 +149,9 @@ describe('bad input names the field', () => {
     ['contact.duties.0', { duties: ['catering'] }],
     ['contact.phone', { phone: 'call me' }],
   ])('%s %#', async (field, over) => {
-    const answer = await manager()('POST', `/api/suppliers/${made.supplierId}/contacts`, { contact: { ...contact, ...over } })
+    const answer = await manager()('POST', `/api/suppliers/${made.supplierId}/contacts`, {
+      contact: { ...contact, ...over },
+    })
     expect(faultyFields(answer)).toEqual([field])
   })
 
@@ -152,7 +178,10 @@ describe('a stale change is refused with what stands now', () => {
     const first = await manager()('PATCH', path, { version: 1, [key]: { ...base, ...over } })
     expect(first).toMatchObject({ status: 200, body: { ...over, version: 2 } })
     const stale = await manager()('PATCH', path, { version: 1, [key]: base })
-    expect(stale).toMatchObject({ status: 409, body: { error: { code: 'stale', details: { current: { ...over, version: 2 } } } } })
+    expect(stale).toMatchObject({
+      status: 409,
+      body: { error: { code: 'stale', details: { current: { ...over, version: 2 } } } },
+    })
     expect((await manager()('DELETE', path, { version: 1 })).status).toBe(409)
   })
 })
@@ -176,15 +205,17 @@ describe('what is still in use is kept, with the reason', () => {
   })
 
   it('a contact who has had a link', async () => {
-    await db().insert(grant).values({
-      partyId: party.partyId,
-      purpose: 'reply',
-      hireId: made.hireId,
-      contactId: made.supplierContactId,
-      recipientName: 'Hire desk',
-      expiresAt: new Date('2032-01-01T00:00:00Z'),
-      createdBy: party.tourManager.personId,
-    })
+    await db()
+      .insert(grant)
+      .values({
+        partyId: party.partyId,
+        purpose: 'reply',
+        hireId: made.hireId,
+        contactId: made.supplierContactId,
+        recipientName: 'Hire desk',
+        expiresAt: new Date('2032-01-01T00:00:00Z'),
+        createdBy: party.tourManager.personId,
+      })
     const answer = await manager()('DELETE', `/api/contacts/${made.supplierContactId}`, { version: 1 })
     expect(answer).toMatchObject({ status: 409, body: { error: { code: 'conflict' } } })
   })

@@ -44,7 +44,8 @@ const hireOf = (over: Record<string, unknown> = {}) => ({
   confirmed: false,
   ...over,
 })
-const post = (over: Record<string, unknown> = {}) => manager()('POST', `/api/tours/${made.tourId}/hires`, { hire: hireOf(over) })
+const post = (over: Record<string, unknown> = {}) =>
+  manager()('POST', `/api/tours/${made.tourId}/hires`, { hire: hireOf(over) })
 
 it('strangers, readers, other parties and other sites are kept out of every route', async () => {
   for (const [method, path, body] of [
@@ -52,7 +53,14 @@ it('strangers, readers, other parties and other sites are kept out of every rout
     ['PATCH', `/api/hires/${made.hireId}`, { version: 1, hire: hireOf() }],
     ['DELETE', `/api/hires/${made.hireId}`, { version: 1 }],
   ] as const) {
-    await attackRoute({ method, path, body, reader: party.viewer.call, theirs: other.tourManager.call, ours: manager() })
+    await attackRoute({
+      method,
+      path,
+      body,
+      reader: party.viewer.call,
+      theirs: other.tourManager.call,
+      ours: manager(),
+    })
     expect((await party.drumTech.call(method, path, body)).status).toBe(403)
   }
 })
@@ -117,25 +125,34 @@ it('a stale change is refused with what stands now, and the shows it covers stay
   const stale = await manager()('PATCH', path, { version: 1, hire: hireOf() })
   expect(stale).toMatchObject({
     status: 409,
-    body: { error: { code: 'stale', details: { current: { poNumber: 'PO-8', confirmedAt, showIds: [made.showId], version: 2 } } } },
+    body: {
+      error: {
+        code: 'stale',
+        details: { current: { poNumber: 'PO-8', confirmedAt, showIds: [made.showId], version: 2 } },
+      },
+    },
   })
   // Confirmed once: a later change does not move the moment.
-  expect((await manager()('PATCH', path, { version: 2, hire: hireOf({ confirmed: true }) })).body).toMatchObject({ confirmedAt })
+  expect((await manager()('PATCH', path, { version: 2, hire: hireOf({ confirmed: true }) })).body).toMatchObject({
+    confirmedAt,
+  })
   expect((await manager()('DELETE', path, { version: 2 })).status).toBe(409)
   expect((await manager()('DELETE', path, { version: 3 })).status).toBe(200)
 })
 
 it('is kept once its supplier was asked', async () => {
   const hire = (await post()).body as { id: string }
-  await db().insert(grant).values({
-    partyId: party.partyId,
-    purpose: 'reply',
-    hireId: hire.id,
-    contactId: made.supplierContactId,
-    recipientName: 'Hire desk',
-    expiresAt: new Date('2032-01-01T00:00:00Z'),
-    createdBy: party.tourManager.personId,
-  })
+  await db()
+    .insert(grant)
+    .values({
+      partyId: party.partyId,
+      purpose: 'reply',
+      hireId: hire.id,
+      contactId: made.supplierContactId,
+      recipientName: 'Hire desk',
+      expiresAt: new Date('2032-01-01T00:00:00Z'),
+      createdBy: party.tourManager.personId,
+    })
   const answer = await manager()('DELETE', `/api/hires/${hire.id}`, { version: 1 })
   expect(answer).toMatchObject({ status: 409, body: { error: { code: 'conflict' } } })
 })

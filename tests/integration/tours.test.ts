@@ -33,7 +33,13 @@ const attack = (method: string, path: string, body: unknown, theirs = true) =>
     ours: manager(),
   })
 
-const newTour = { name: 'Autumn run', rigName: 'full rig', playerName: null, firstDate: '2031-09-01', lastDate: '2031-09-03' }
+const newTour = {
+  name: 'Autumn run',
+  rigName: 'full rig',
+  playerName: null,
+  firstDate: '2031-09-01',
+  lastDate: '2031-09-03',
+}
 const showOf = (over: Record<string, unknown> = {}) => ({
   name: '',
   dayId: made.dayId,
@@ -51,7 +57,9 @@ const showOf = (over: Record<string, unknown> = {}) => ({
 })
 
 async function addDays(firstDate: string, lastDate: string, tourId = made.tourId) {
-  const answer = await manager()('POST', `/api/tours/${tourId}/days`, { days: { firstDate, lastDate, kind: 'off', remark: '' } })
+  const answer = await manager()('POST', `/api/tours/${tourId}/days`, {
+    days: { firstDate, lastDate, kind: 'off', remark: '' },
+  })
   expect(answer.status).toBe(201)
   return answer.body as { days: { id: string; date: string; version: number }[]; alreadyThere: number }
 }
@@ -69,23 +77,34 @@ describe('a tour', () => {
     ['DELETE', `/api/tours/${made.tourId}`, { version: 1 }],
     ['POST', `/api/tours/${made.tourId}/rigs`, { rig: { name: 'fly rig', position: 1 } }],
     ['PATCH', `/api/rigs/${made.rigId}`, { version: 1, rig: { name: 'taken', position: 1 } }],
-    ['POST', `/api/tours/${made.tourId}/days`, { days: { firstDate: '2031-10-20', lastDate: '2031-10-20', kind: 'off', remark: '' } }],
+    [
+      'POST',
+      `/api/tours/${made.tourId}/days`,
+      { days: { firstDate: '2031-10-20', lastDate: '2031-10-20', kind: 'off', remark: '' } },
+    ],
     ['PATCH', `/api/days/${made.dayId}`, { version: 1, day: { kind: 'show', remark: 'taken' } }],
     ['DELETE', `/api/days/${made.dayId}`, { version: 1 }],
     ['POST', `/api/tours/${made.tourId}/shows`, { show: showOf() }],
     ['PATCH', `/api/shows/${made.showId}`, { version: 1, show: showOf() }],
     ['DELETE', `/api/shows/${made.showId}`, { version: 1 }],
   ]
-  it.each(Array.from({ length: 11 }, (_, index) => index))('route %i keeps strangers, readers and other sites out', async (index) => {
-    const [method, path, body] = routes()[index] ?? ['', '', '']
-    await attack(method, path, body, path !== '/api/tours')
-  })
+  it.each(Array.from({ length: 11 }, (_, index) => index))(
+    'route %i keeps strangers, readers and other sites out',
+    async (index) => {
+      const [method, path, body] = routes()[index] ?? ['', '', '']
+      await attack(method, path, body, path !== '/api/tours')
+    },
+  )
 
   it('is not changed by a drum tech, who may make rigs', async () => {
     const techs = party.drumTech.call
-    expect((await techs('PATCH', `/api/tours/${made.tourId}`, { version: 1, tour: { name: 'Taken' } })).status).toBe(403)
+    expect((await techs('PATCH', `/api/tours/${made.tourId}`, { version: 1, tour: { name: 'Taken' } })).status).toBe(
+      403,
+    )
     expect((await techs('POST', `/api/tours/${made.tourId}/shows`, { show: showOf() })).status).toBe(403)
-    expect((await techs('POST', `/api/tours/${made.tourId}/rigs`, { rig: { name: 'tech rig', position: 5 } })).status).toBe(201)
+    expect(
+      (await techs('POST', `/api/tours/${made.tourId}/rigs`, { rig: { name: 'tech rig', position: 5 } })).status,
+    ).toBe(201)
   })
 
   it('is made once however often it is asked for, with its rig and its days', async () => {
@@ -94,11 +113,20 @@ describe('a tour', () => {
     const again = await manager()('POST', '/api/tours', request)
     expect([first.status, again.status]).toEqual([201, 201])
     expect(again.body).toEqual(first.body)
-    expect(await addDays('2031-09-01', '2031-09-04', request.id)).toMatchObject({ alreadyThere: 3, days: [{ date: '2031-09-04' }] })
+    expect(await addDays('2031-09-01', '2031-09-04', request.id)).toMatchObject({
+      alreadyThere: 3,
+      days: [{ date: '2031-09-04' }],
+    })
     const audited = await db()
       .select({ action: auditEvent.action, actorId: auditEvent.actorId })
       .from(auditEvent)
-      .where(and(eq(auditEvent.partyId, party.partyId), eq(auditEvent.subjectId, request.id), eq(auditEvent.action, 'tour.added')))
+      .where(
+        and(
+          eq(auditEvent.partyId, party.partyId),
+          eq(auditEvent.subjectId, request.id),
+          eq(auditEvent.action, 'tour.added'),
+        ),
+      )
     expect(audited).toEqual([{ action: 'tour.added', actorId: party.tourManager.personId }])
   })
 
@@ -120,8 +148,12 @@ describe('a tour', () => {
   it('asks a party without players for one', async () => {
     const fresh = await makeParty()
     await db().execute(`delete from player where party_id = '${fresh.partyId}'`)
-    expect(faultyFields(await fresh.tourManager.call('POST', '/api/tours', { tour: newTour }))).toEqual(['tour.playerName'])
-    expect((await fresh.tourManager.call('POST', '/api/tours', { tour: { ...newTour, playerName: 'Ines' } })).status).toBe(201)
+    expect(faultyFields(await fresh.tourManager.call('POST', '/api/tours', { tour: newTour }))).toEqual([
+      'tour.playerName',
+    ])
+    expect(
+      (await fresh.tourManager.call('POST', '/api/tours', { tour: { ...newTour, playerName: 'Ines' } })).status,
+    ).toBe(201)
   })
 
   it('refuses a stale change with what stands now, and changes nothing', async () => {
@@ -151,10 +183,24 @@ describe('a rig', () => {
     expect((await manager()('POST', path, request)).status).toBe(201)
     expect((await manager()('POST', path, request)).body).toMatchObject({ id: request.id })
     expect(faultyFields(await manager()('POST', path, { rig: { name: 'fly rig', position: 2 } }))).toEqual(['rig.name'])
-    expect(faultyFields(await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'full rig', position: 1 } }))).toEqual(['rig.name'])
-    expect((await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'small rig', position: 3 } })).body).toMatchObject({ version: 2 })
-    expect((await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'tiny rig', position: 3 } })).status).toBe(409)
-    expect(faultyFields(await manager()('PATCH', `/api/rigs/${request.id}`, { version: 2, rig: { name: 'x', position: -1 } }))).toEqual(['rig.position'])
+    expect(
+      faultyFields(
+        await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'full rig', position: 1 } }),
+      ),
+    ).toEqual(['rig.name'])
+    expect(
+      (await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'small rig', position: 3 } }))
+        .body,
+    ).toMatchObject({ version: 2 })
+    expect(
+      (await manager()('PATCH', `/api/rigs/${request.id}`, { version: 1, rig: { name: 'tiny rig', position: 3 } }))
+        .status,
+    ).toBe(409)
+    expect(
+      faultyFields(
+        await manager()('PATCH', `/api/rigs/${request.id}`, { version: 2, rig: { name: 'x', position: -1 } }),
+      ),
+    ).toEqual(['rig.position'])
   })
 })
 
@@ -164,10 +210,14 @@ describe('a day', () => {
     const dayId = days[0]?.id ?? ''
     await addShow({ dayId, name: 'Matinee' })
     const second = await addShow({ dayId, name: 'Evening' })
-    expect(faultyFields(await manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf({ dayId }) }))).toEqual(['show.dayId'])
+    expect(
+      faultyFields(await manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf({ dayId }) })),
+    ).toEqual(['show.dayId'])
     const toOff = await manager()('PATCH', `/api/days/${dayId}`, { version: 2, day: { kind: 'off', remark: '' } })
     expect(toOff).toMatchObject({ status: 409, body: { error: { code: 'conflict' } } })
-    expect((await manager()('PATCH', `/api/days/${dayId}`, { version: 2, day: { kind: 'show', remark: 'Fair' } })).body).toMatchObject({ kind: 'show', version: 3 })
+    expect(
+      (await manager()('PATCH', `/api/days/${dayId}`, { version: 2, day: { kind: 'show', remark: 'Fair' } })).body,
+    ).toMatchObject({ kind: 'show', version: 3 })
     expect((await manager()('DELETE', `/api/days/${dayId}`, { version: 3 })).status).toBe(409)
     expect((await manager()('DELETE', `/api/shows/${second.id}`, { version: second.version })).status).toBe(200)
   })
@@ -175,7 +225,10 @@ describe('a day', () => {
   it('without a show can be taken off the run, by the version that was seen', async () => {
     const { days } = await addDays('2031-11-03', '2031-11-03')
     const day = days[0]
-    expect((await manager()('PATCH', `/api/days/${day?.id}`, { version: 1, day: { kind: 'travel', remark: 'ferry' } })).status).toBe(200)
+    expect(
+      (await manager()('PATCH', `/api/days/${day?.id}`, { version: 1, day: { kind: 'travel', remark: 'ferry' } }))
+        .status,
+    ).toBe(200)
     expect((await manager()('DELETE', `/api/days/${day?.id}`, { version: 1 })).body).toMatchObject({
       error: { code: 'stale', details: { current: { remark: 'ferry' } } },
     })
@@ -188,7 +241,9 @@ describe('a day', () => {
     const dayId = days[0]?.id ?? ''
     await addShow({ dayId })
     const answers = await Promise.all(
-      ['one', 'two', 'three'].map((name) => manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf({ dayId, name }) })),
+      ['one', 'two', 'three'].map((name) =>
+        manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf({ dayId, name }) }),
+      ),
     )
     expect(answers.map((answer) => answer.status).sort()).toEqual([201, 422, 422])
   })
@@ -218,7 +273,8 @@ describe('a show', () => {
   })
 
   it('names only what is of its tour and its party', async () => {
-    const post = (over: Record<string, unknown>) => manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf(over) })
+    const post = (over: Record<string, unknown>) =>
+      manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf(over) })
     expect(faultyFields(await post({ dayId: others.dayId }))).toEqual(['show.dayId'])
     expect(faultyFields(await post({ rigId: others.rigId }))).toEqual(['show.rigId'])
     expect(faultyFields(await post({ stageId: others.stageId }))).toEqual(['show.stageId'])
@@ -231,7 +287,11 @@ describe('a show', () => {
     ['two days after', { showDayOffset: 2 }, ['show.showDayOffset']],
     ['a deadline after the show', { answersDue: { date: '2031-10-15', time: '10:00' } }, ['show.answersDue']],
     ['half a deadline', { answersDue: { date: '2031-10-01', time: '' } }, ['show.answersDue.time']],
-    ['a slot of a day', { slot: { changeoverMin: 20, lineCheckMin: 1440, riserParking: '' } }, ['show.slot.lineCheckMin']],
+    [
+      'a slot of a day',
+      { slot: { changeoverMin: 20, lineCheckMin: 1440, riserParking: '' } },
+      ['show.slot.lineCheckMin'],
+    ],
     ['a shared kit of nobody', { sharedKit: { owner: '', mayRetune: true, maySwap: '' } }, ['show.sharedKit.owner']],
     ['no day', { dayId: 'monday' }, ['show.dayId']],
   ])('names the field: %s', async (_why, over, fields) => {
@@ -248,7 +308,11 @@ describe('a show', () => {
   })
 
   it('without a known zone has no deadline, and gets its zone when the venue does', async () => {
-    const venue = (await manager()('POST', '/api/venues', { venue: { name: 'Far Hall', town: 'Orrin', country: '', zone: null, remark: '' } })).body as { id: string }
+    const venue = (
+      await manager()('POST', '/api/venues', {
+        venue: { name: 'Far Hall', town: 'Orrin', country: '', zone: null, remark: '' },
+      })
+    ).body as { id: string }
     const stage = (
       await manager()('POST', `/api/venues/${venue.id}/stages`, {
         stage: { name: 'Main', widthM: 9, depthM: 7, heightM: 1, access: [], volts: null, mainsHz: null, inlets: '' },
@@ -256,7 +320,9 @@ describe('a show', () => {
     ).body as { id: string }
     const { days } = await addDays('2031-12-08', '2031-12-08')
     const over = { dayId: days[0]?.id, stageId: stage.id }
-    const early = await manager()('POST', `/api/tours/${made.tourId}/shows`, { show: showOf({ ...over, answersDue: { date: '2031-12-01', time: '10:00' } }) })
+    const early = await manager()('POST', `/api/tours/${made.tourId}/shows`, {
+      show: showOf({ ...over, answersDue: { date: '2031-12-01', time: '10:00' } }),
+    })
     expect(faultyFields(early)).toEqual(['show.answersDue'])
     const show = await addShow(over)
     expect(show.zone).toBeNull()
@@ -264,7 +330,10 @@ describe('a show', () => {
     expect((await manager()('PATCH', `/api/venues/${venue.id}`, { version: 1, venue: input })).status).toBe(200)
     const due = { answersDue: { date: '2031-12-01', time: '10:00' } }
     const stale = await manager()('PATCH', `/api/shows/${show.id}`, { version: 1, show: showOf({ ...over, ...due }) })
-    expect(stale).toMatchObject({ status: 409, body: { error: { details: { current: { zone: 'Asia/Tokyo', version: 2 } } } } })
+    expect(stale).toMatchObject({
+      status: 409,
+      body: { error: { details: { current: { zone: 'Asia/Tokyo', version: 2 } } } },
+    })
     const saved = await manager()('PATCH', `/api/shows/${show.id}`, { version: 2, show: showOf({ ...over, ...due }) })
     expect(saved.body).toMatchObject({ zone: 'Asia/Tokyo', answersDueAt: '2031-12-01T01:00:00.000Z' })
     // The wall at the venue says ten o'clock wherever the venue turns out to be.
@@ -275,19 +344,27 @@ describe('a show', () => {
 
   it('is kept while something hangs on it, with the reason', async () => {
     const covered = await manager()('DELETE', `/api/shows/${made.showId}`, { version: 1 })
-    expect(covered).toMatchObject({ status: 409, body: { error: { code: 'conflict', message: expect.stringContaining('hire') } } })
+    expect(covered).toMatchObject({
+      status: 409,
+      body: { error: { code: 'conflict', message: expect.stringContaining('hire') } },
+    })
     const { days } = await addDays('2031-12-11', '2031-12-11')
     const show = await addShow({ dayId: days[0]?.id })
-    await db().insert(grant).values({
-      partyId: party.partyId,
-      purpose: 'bench',
-      showId: show.id,
-      recipientName: 'Whoever stands there',
-      expiresAt: new Date('2032-01-01T00:00:00Z'),
-      createdBy: party.drumTech.personId,
-    })
+    await db()
+      .insert(grant)
+      .values({
+        partyId: party.partyId,
+        purpose: 'bench',
+        showId: show.id,
+        recipientName: 'Whoever stands there',
+        expiresAt: new Date('2032-01-01T00:00:00Z'),
+        createdBy: party.drumTech.personId,
+      })
     const sent = await manager()('DELETE', `/api/shows/${show.id}`, { version: 1 })
-    expect(sent).toMatchObject({ status: 409, body: { error: { code: 'conflict', message: expect.stringContaining('kept') } } })
+    expect(sent).toMatchObject({
+      status: 409,
+      body: { error: { code: 'conflict', message: expect.stringContaining('kept') } },
+    })
   })
 
   it('that was taken off the run can be put back as it was', async () => {

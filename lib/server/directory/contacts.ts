@@ -17,7 +17,8 @@ export async function createContact(
   assertCan(actor, 'directory:edit')
   const { of } = input
   return db().transaction(async (tx) => {
-    const there = 'venueId' in of ? await findVenue(tx, actor, of.venueId) : await findSupplier(tx, actor, of.supplierId)
+    const there =
+      'venueId' in of ? await findVenue(tx, actor, of.venueId) : await findSupplier(tx, actor, of.supplierId)
     if (!there) throw notThere('venueId' in of ? 'venue' : 'supplier')
     const made = await insertContact(tx, actor, { ...input.contact, ...of, id: input.id })
     if (!made) return thereAlready(input.id ? await findContact(tx, actor, input.id) : undefined)
@@ -39,11 +40,17 @@ export async function changeContact(
     const changed = await updateContact(tx, actor, { id: before.id, version: input.version, contact: input.contact })
     const contact = await changedOr('contact', changed, () => findContact(tx, actor, before.id))
     const fields = (['name', 'email', 'phone'] as const).filter((field) => before[field] !== contact[field])
-    await audit(tx, actor, 'contact.changed', { type: 'contact', id: contact.id }, {
-      fields,
-      from: { duties: before.duties },
-      to: { duties: contact.duties },
-    })
+    await audit(
+      tx,
+      actor,
+      'contact.changed',
+      { type: 'contact', id: contact.id },
+      {
+        fields,
+        from: { duties: before.duties },
+        to: { duties: contact.duties },
+      },
+    )
     await notifyLive(tx, actor.partyId, [`directory:${actor.partyId}`])
     return contact
   })
@@ -55,7 +62,9 @@ export async function removeContact(actor: Actor, input: { contactId: string; ve
     const contact = await findContact(tx, actor, input.contactId)
     if (!contact) throw notThere('contact')
     if (await contactWasWrittenTo(tx, actor, contact.id)) {
-      throw stillInUse(`${contact.name} has had mail or a link, and the record of it names this contact. Change the contact instead.`)
+      throw stillInUse(
+        `${contact.name} has had mail or a link, and the record of it names this contact. Change the contact instead.`,
+      )
     }
     const gone = await deleteContact(tx, actor, { id: contact.id, version: input.version })
     await changedOr('contact', gone ? contact : undefined, () => findContact(tx, actor, contact.id))

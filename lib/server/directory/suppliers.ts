@@ -56,7 +56,13 @@ export async function changeSupplier(
       supplier: input.supplier,
     })
     const supplier = await changedOr('supplier', changed, () => findSupplier(tx, actor, before.id))
-    await audit(tx, actor, 'supplier.changed', { type: 'supplier', id: supplier.id }, { from: before, to: input.supplier })
+    await audit(
+      tx,
+      actor,
+      'supplier.changed',
+      { type: 'supplier', id: supplier.id },
+      { from: before, to: input.supplier },
+    )
     await notifyLive(tx, actor.partyId, [`directory:${actor.partyId}`])
     return supplier
   })

@@ -27,7 +27,11 @@ import { instantOfWallTime, wallTimeOfInstant } from '@/lib/staging/wall-time'
 export async function readHires(actor: Actor, tourId: string): Promise<Hire[]> {
   assertCan(actor, 'party:read')
   const rows = await listHires(db(), actor, tourId)
-  const covered = await listHireShows(db(), actor, rows.map((row) => row.id))
+  const covered = await listHireShows(
+    db(),
+    actor,
+    rows.map((row) => row.id),
+  )
   return rows.map((row) => hireAnswer(row, covered))
 }
 
@@ -118,7 +122,10 @@ async function checkHire(tx: Db, actor: MemberActor, tourId: string, hire: HireI
   if (showIds.some((id) => !ofTour.has(id))) throw fieldFault('hire.showIds', 'choose shows of this tour')
   const zone = hire.zone ?? supplier.zone
   if (answersDue && !zone) {
-    throw fieldFault('hire.answersDue', 'the zone is not known yet, so no moment follows from this; give the zone first')
+    throw fieldFault(
+      'hire.answersDue',
+      'the zone is not known yet, so no moment follows from this; give the zone first',
+    )
   }
   return {
     ...same,

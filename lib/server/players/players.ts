@@ -25,7 +25,10 @@ export async function readPlayerNames(actor: Actor) {
   return listPlayerNames(db(), actor)
 }
 
-export async function createPlayer(actor: Actor, input: { id?: string | undefined; player: PlayerInput }): Promise<Player> {
+export async function createPlayer(
+  actor: Actor,
+  input: { id?: string | undefined; player: PlayerInput },
+): Promise<Player> {
   assertCan(actor, 'player:edit')
   return db().transaction(async (tx) => {
     const made = await insertPlayer(tx, actor, { ...input.player, id: input.id })
@@ -46,10 +49,16 @@ export async function changePlayer(
     if (!before) throw notThere('player')
     const changed = await updatePlayer(tx, actor, { id: before.id, version: input.version, player: input.player })
     const player = await changedOr('player', changed, () => findPlayer(tx, actor, before.id))
-    await audit(tx, actor, 'player.changed', { type: 'player', id: player.id }, {
-      from: { hand: before.hand, throneHeightM: before.throneHeightM },
-      to: { hand: player.hand, throneHeightM: player.throneHeightM },
-    })
+    await audit(
+      tx,
+      actor,
+      'player.changed',
+      { type: 'player', id: player.id },
+      {
+        from: { hand: before.hand, throneHeightM: before.throneHeightM },
+        to: { hand: player.hand, throneHeightM: player.throneHeightM },
+      },
+    )
     await notifyLive(tx, actor.partyId, [`directory:${actor.partyId}`])
     return player
   })

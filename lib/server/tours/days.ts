@@ -20,7 +20,13 @@ export async function createDays(
     if (!(await lockTour(tx, actor, input.tourId))) throw notThere('tour')
     const dates = datesOf(firstDate, lastDate)
     const days = await insertDays(tx, actor, { tourId: input.tourId, dates, kind, remark })
-    await audit(tx, actor, 'days.added', { type: 'tour', id: input.tourId }, { firstDate, lastDate, kind, made: days.length })
+    await audit(
+      tx,
+      actor,
+      'days.added',
+      { type: 'tour', id: input.tourId },
+      { firstDate, lastDate, kind, made: days.length },
+    )
     await notifyLive(tx, actor.partyId, [`run:${input.tourId}`])
     return { days, alreadyThere: dates.length - days.length }
   })
@@ -48,7 +54,9 @@ export async function removeDay(actor: Actor, input: { dayId: string; version: n
     const day = await lockDay(tx, actor, input.dayId)
     if (!day) throw notThere('day')
     if ((await countShowsOfDay(tx, actor, day.id, null)) > 0) {
-      throw stillInUse(`${dateWords(day.date)} holds a show. Move the show to another day or take it off the run first.`)
+      throw stillInUse(
+        `${dateWords(day.date)} holds a show. Move the show to another day or take it off the run first.`,
+      )
     }
     const gone = await deleteDay(tx, actor, { id: day.id, version: input.version })
     await changedOr('day', gone ? day : undefined, () => findDay(tx, actor, day.id))

@@ -72,8 +72,16 @@ export async function readNextUp(actor: Actor, run: Run): Promise<NextStep[]> {
   const shows = run.days.flatMap((day) => day.shows)
   const [rigs, silentVenues, silentSuppliers] = await Promise.all([
     listRigFacts(db(), actor, run.tour.id),
-    listVenuesWithoutContact(db(), actor, shows.map((show) => show.venueId)),
-    listSuppliersWithoutContact(db(), actor, run.hires.map((hire) => hire.supplierId)),
+    listVenuesWithoutContact(
+      db(),
+      actor,
+      shows.map((show) => show.venueId),
+    ),
+    listSuppliersWithoutContact(
+      db(),
+      actor,
+      run.hires.map((hire) => hire.supplierId),
+    ),
   ])
   const may = (permission: Permission) => rolesMay(actor.roles, permission)
   const rigOfShow = new Map(shows.map((show) => [show.id, show.rigId]))

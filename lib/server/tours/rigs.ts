@@ -38,7 +38,8 @@ export async function changeRig(actor: Actor, input: { rigId: string; version: n
   return db().transaction(async (tx) => {
     const before = await findRig(tx, actor, input.rigId)
     if (!before || !(await lockTour(tx, actor, before.tourId))) throw notThere('rig')
-    if (await rigNameTaken(tx, actor, { tourId: before.tourId, name: input.rig.name, exceptId: before.id })) throw nameTaken()
+    if (await rigNameTaken(tx, actor, { tourId: before.tourId, name: input.rig.name, exceptId: before.id }))
+      throw nameTaken()
     const changed = await updateRig(tx, actor, { id: before.id, version: input.version, rig: input.rig })
     const rig = await changedOr('rig', changed, () => findRig(tx, actor, before.id))
     await audit(tx, actor, 'rig.changed', { type: 'rig', id: rig.id }, { from: before, to: input.rig })

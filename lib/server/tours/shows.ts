@@ -56,7 +56,13 @@ export async function changeShow(
     const now = showAnswer(await shownNow(tx, actor, before.id))
     await changedOr('show', changed ? now : undefined, () => Promise.resolve(now))
     if (before.dayId !== values.dayId) await makeShowDay(tx, actor, values.dayId)
-    await audit(tx, actor, 'show.changed', { type: 'show', id: before.id }, { from: showAnswer(before), to: input.show })
+    await audit(
+      tx,
+      actor,
+      'show.changed',
+      { type: 'show', id: before.id },
+      { from: showAnswer(before), to: input.show },
+    )
     await notifyLive(tx, actor.partyId, [`run:${before.tourId}`, `advance:${before.id}`, `bench:${before.id}`])
     return now
   })
@@ -106,7 +112,10 @@ async function checkShow(tx: Db, actor: MemberActor, tourId: string, show: ShowI
   if (!(await findPlayer(tx, actor, show.playerId))) throw fieldFault('show.playerId', 'choose a player')
   const zone = show.zone ?? stage.zone
   if (answersDue && !zone) {
-    throw fieldFault('show.answersDue', 'the zone is not known yet, so no moment follows from this; give the zone first')
+    throw fieldFault(
+      'show.answersDue',
+      'the zone is not known yet, so no moment follows from this; give the zone first',
+    )
   }
   if (answersDue && answersDue.date > day.date) {
     throw fieldFault('show.answersDue', 'at the latest on the day of the show')
