@@ -8,7 +8,17 @@ const nothing = { editRun: false, editKit: false, issue: false, editDirectory: f
 const full = { id: 'full', name: 'full rig', entries: 9, revision: 7 }
 
 function subject(id: string, date: string, over: Partial<NextSubject> = {}): NextSubject {
-  return { id, about: id, date, rigIds: ['full'], zoneKnown: true, hasContact: true, sent: true, standing: 'out', ...over }
+  return {
+    id,
+    about: id,
+    date,
+    rigIds: ['full'],
+    zoneKnown: true,
+    hasContact: true,
+    sent: true,
+    standing: 'out',
+    ...over,
+  }
 }
 
 function facts(over: Partial<NextUpFacts>): NextUpFacts {
@@ -21,9 +31,9 @@ describe('what a run needs next', () => {
   it('begins with days, then a show, then the kit', () => {
     expect(kinds({ dayCount: 0 })).toEqual(['add days: the run'])
     expect(kinds({})).toEqual(['add a show: the run'])
-    expect(kinds({ rigs: [{ ...full, entries: 0, revision: null }], shows: [subject('Arvic', '2026-10-15')] })).toEqual([
-      'start the kit: full rig',
-    ])
+    expect(kinds({ rigs: [{ ...full, entries: 0, revision: null }], shows: [subject('Arvic', '2026-10-15')] })).toEqual(
+      ['start the kit: full rig'],
+    )
   })
 
   it('asks to issue before it asks to send, and then to send', () => {
@@ -68,7 +78,10 @@ describe('what a run needs next', () => {
     expect(
       kinds({
         shows: [subject('played', '2026-09-30', { standing: 'not delivered' })],
-        hires: [subject('Northline', '2026-10-12', { standing: 'answered' }), subject('old van', '2026-09-12', { standing: 'answered' })],
+        hires: [
+          subject('Northline', '2026-10-12', { standing: 'answered' }),
+          subject('old van', '2026-09-12', { standing: 'answered' }),
+        ],
       }),
     ).toEqual(['settle: Northline'])
   })
@@ -84,14 +97,20 @@ describe('what a run needs next', () => {
     expect(kinds({ may: nothing, dayCount: 0 })).toEqual([])
     const drumTech = { ...nothing, editKit: true, issue: true }
     expect(
-      kinds({ may: drumTech, rigs: [{ ...full, revision: null }], shows: [subject('Arvic', '2026-10-15', { standing: 'answered' })] }),
+      kinds({
+        may: drumTech,
+        rigs: [{ ...full, revision: null }],
+        shows: [subject('Arvic', '2026-10-15', { standing: 'answered' })],
+      }),
     ).toEqual(['issue: full rig'])
   })
 
   it('says which show, hire or rig each step is about', () => {
     const [send] = nextUp(facts({ shows: [subject('Arvic', '2026-10-15', { standing: 'answered' })] }))
     expect(send).toMatchObject({ showId: 'Arvic', hireId: null, rigId: null })
-    const [settle] = nextUp(facts({ shows: [subject('x', '2026-10-15')], hires: [subject('van', '2026-10-15', { standing: 'answered' })] }))
+    const [settle] = nextUp(
+      facts({ shows: [subject('x', '2026-10-15')], hires: [subject('van', '2026-10-15', { standing: 'answered' })] }),
+    )
     expect(settle).toMatchObject({ showId: null, hireId: 'van' })
   })
 })

@@ -54,7 +54,12 @@ export interface NextUpFacts {
     readonly settle: boolean
   }
   readonly dayCount: number
-  readonly rigs: readonly { readonly id: string; readonly name: string; readonly entries: number; readonly revision: number | null }[]
+  readonly rigs: readonly {
+    readonly id: string
+    readonly name: string
+    readonly entries: number
+    readonly revision: number | null
+  }[]
   readonly shows: readonly NextSubject[]
   readonly hires: readonly NextSubject[]
 }
@@ -106,12 +111,24 @@ export function nextUp(facts: NextUpFacts): NextStep[] {
   }
   const hiresAhead = facts.hires.filter((hire) => hire.date >= today)
   for (const hire of hiresAhead) steps.push(...advance(hire, 'hire', may, issued))
-  return steps.map((step) => ({ step, press: pressing(step, today) })).sort((a, b) => a.press - b.press || (a.step.key < b.step.key ? -1 : 1)).map(({ step }) => step)
+  return steps
+    .map((step) => ({ step, press: pressing(step, today) }))
+    .sort((a, b) => a.press - b.press || (a.step.key < b.step.key ? -1 : 1))
+    .map(({ step }) => step)
 }
 
-function advance(subject: NextSubject, what: 'show' | 'hire', may: NextUpFacts['may'], issued: ReadonlySet<string>): NextStep[] {
+function advance(
+  subject: NextSubject,
+  what: 'show' | 'hire',
+  may: NextUpFacts['may'],
+  issued: ReadonlySet<string>,
+): NextStep[] {
   if (!subject.hasContact && may.editDirectory) return [of(subject, 'add a contact', what)]
-  const kind = subject.sent ? byStanding[subject.standing] : subject.rigIds.some((id) => issued.has(id)) ? 'send' : undefined
+  const kind = subject.sent
+    ? byStanding[subject.standing]
+    : subject.rigIds.some((id) => issued.has(id))
+      ? 'send'
+      : undefined
   if (!kind || !subject.hasContact) return []
   const allowed = kind === 'settle' || kind === 'take down' ? may.settle : may.send
   return allowed ? [of(subject, kind, what)] : []
