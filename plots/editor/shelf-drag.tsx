@@ -111,7 +111,7 @@ export function useShelfDrag(input: { onDrop: (item: ShelfItem, at: ScreenPoint)
   }
 }
 
-/** What is carried, drawn at the size it will have on the sheet. */
+/** What is carried, drawn at the size it will have on the sheet, about the middle of the shelf line that is dragged. */
 export function PieceInHand({ item, kit, pxPerM }: { item: ShelfItem; kit: KitById; pxPerM: number }) {
   const piece = pieceOf(item, 'in-hand', plotPoint(0, 0), emptyDocument)
   const box = footprintBounds(pieceFootprint(emptyDocument, piece, kit))
@@ -125,7 +125,7 @@ export function PieceInHand({ item, kit, pxPerM }: { item: ShelfItem; kit: KitBy
       width={widthM * pxPerM}
       height={depthM * pxPerM}
       viewBox={[(box.minXM - pad) * 1000, -(box.maxYM + pad) * 1000, widthM * 1000, depthM * 1000].join(' ')}
-      className="overflow-visible opacity-80"
+      className="absolute top-1/2 left-1/2 -translate-x-1/2 -translate-y-1/2 overflow-visible opacity-80"
     >
       {shapes.map((shape, index) => (
         <ShapeDrawing key={index} item={{ ...shape, pieceId: null }} />
