@@ -1,3 +1,4 @@
+import type { Route } from 'next'
 import Form from 'next/form'
 import { Button } from '@/components/ui/button'
 import { ButtonLink } from '@/components/ui/button-link'
@@ -22,7 +23,7 @@ export function ListTools({ path, query, searched, filters }: ListToolsProps) {
     // Filled afresh when the address changes, such as by the way back.
     <Form
       key={`${query.q} ${query.filter}`}
-      action={path}
+      action={path as Route}
       className="flex w-full flex-wrap items-end gap-3"
       role="search"
     >

@@ -17,12 +17,14 @@ export default async function Page({ params }: { params: Promise<{ token: string
   return 'ended' in found ? <EndedLink reason={found.ended} token={token} /> : <ReplyPage initial={found.reply} token={token} />
 }
 
-async function open(token: string, address: string) {
+type Opened = { reply: Awaited<ReturnType<typeof readReply>> } | { ended: 'withdrawn' | 'expired' }
+
+async function open(token: string, address: string): Promise<Opened> {
   try {
     return { reply: await readReply(await linkActor(token, 'reply', address)) }
   } catch (error) {
     if (!(error instanceof AppError)) throw error
-    if (error.code === 'gone') return { ended: error.details?.['reason'] === 'withdrawn' ? ('withdrawn' as const) : ('expired' as const) }
+    if (error.code === 'gone') return { ended: error.details?.['reason'] === 'withdrawn' ? 'withdrawn' : 'expired' }
     if (error.code === 'not-found') notFound()
     throw error
   }
