@@ -1,6 +1,6 @@
 import { randomInt } from 'node:crypto'
 import type { Answer } from './http-client'
-import { baseUrl } from './http-client'
+import { baseUrl, ONE_CALL } from './http-client'
 
 /** A browser as far as cookies go: keeps what the app sets, sends it back, follows nothing by itself. */
 export class CookieJar {
@@ -29,6 +29,7 @@ export class CookieJar {
       method,
       redirect: 'manual',
       headers: {
+        ...ONE_CALL,
         cookie: [...this.#cookies].map(([name, value]) => `${name}=${value}`).join('; '),
         'x-forwarded-for': this.address,
         'user-agent': this.userAgent,

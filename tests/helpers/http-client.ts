@@ -10,11 +10,14 @@ export function baseUrl(): string {
 export type Answer = { status: number; body: unknown; headers: Headers }
 export type HttpClient = (method: string, path: string, body?: unknown, headers?: Record<string, string>) => Promise<Answer>
 
+/** One connection a call: one kept open may be closed by the server at the moment the next call begins. */
+export const ONE_CALL = { connection: 'close' }
+
 async function call(method: string, path: string, body: unknown, headers: Record<string, string>): Promise<Answer> {
   const response = await fetch(new URL(path, baseUrl()), {
     method,
     redirect: 'manual',
-    headers: { ...(body === undefined ? {} : { 'content-type': 'application/json' }), ...headers },
+    headers: { ...ONE_CALL, ...(body === undefined ? {} : { 'content-type': 'application/json' }), ...headers },
     ...(body === undefined ? {} : { body: typeof body === 'string' ? body : JSON.stringify(body) }),
   })
   const text = await response.text()
