@@ -71,7 +71,7 @@ const fullRig: KitThing[] = [
     entry: drum(kick, { semitone: 33, gauge: 58, muffling: 'one soft pad, touching the batter' }),
     at: { xM: -0.14, yM: 4.6 },
   },
-  { key: 'snare', entry: drum(snare, { semitone: 56, gauge: 88, supply: 'carried' }), at: { xM: 0.14, yM: 5.46 } },
+  { key: 'snare', entry: drum(snare, { semitone: 52, gauge: 88, supply: 'carried' }), at: { xM: 0.14, yM: 5.46 } },
   { key: 'tom 12', entry: drum(newDrum('tom'), { semitone: 50, gauge: 76 }), at: { xM: 0.17, yM: 5.06 } },
   {
     key: 'tom 14',
@@ -82,7 +82,7 @@ const fullRig: KitThing[] = [
   {
     key: 'spare snare',
     entry: {
-      ...drum(newDrum('snare', { depthIn: 5.5 }), { name: 'Spare snare 14', semitone: 57, gauge: 88 }),
+      ...drum(newDrum('snare', { depthIn: 5.5 }), { name: 'Spare snare 14', semitone: 53, gauge: 88 }),
       remark: 'stays in its case, side stage',
     },
   },
@@ -161,7 +161,7 @@ const flyRig: KitThing[] = [
     entry: drum(newDrum('kick', { diameterIn: 20, depthIn: 14 }), { semitone: 36, gauge: 60, supply: 'venue' }),
     at: { xM: -0.12, yM: 4.62 },
   },
-  { key: 'snare', entry: drum(snare, { semitone: 56, gauge: 88, supply: 'carried' }), at: { xM: 0.14, yM: 5.46 } },
+  { key: 'snare', entry: drum(snare, { semitone: 52, gauge: 88, supply: 'carried' }), at: { xM: 0.14, yM: 5.46 } },
   { key: 'tom 12', entry: drum(newDrum('tom'), { semitone: 50, gauge: 76 }), at: { xM: 0.1, yM: 5.04 } },
   {
     key: 'floor 14',
