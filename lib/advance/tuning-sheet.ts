@@ -1,18 +1,14 @@
-import { AcousticsError } from '@/lib/acoustics/acoustics-error'
-import { headEstimate } from '@/lib/acoustics/head-estimate'
 import type { HeadCaution } from '@/lib/acoustics/head-estimate'
-import { nearestNote, noteFrequencyHz } from '@/lib/acoustics/note'
+import { nearestNote } from '@/lib/acoustics/note'
 import { noteName } from '@/lib/acoustics/note-name'
-import { resonantTargetHz } from '@/lib/tuning/head-relation'
+import type { SideEstimate } from '@/lib/tuning/drum-estimate'
+import { drumEstimate } from '@/lib/tuning/drum-estimate'
 import { evenLugAngles, lugsFacing } from '@/lib/tuning/lug-angles'
 import { lugOrder } from '@/lib/tuning/lug-order'
 import type { FrozenDrum, FrozenHead } from './frozen-kit'
 import type { Units } from './kit-words'
 import { drumRoleWord, drumSizeWords, headWords } from './kit-words'
 import { noteLocale } from './note-locale'
-
-const METRE_PER_INCH = 0.0254
-const KG_PER_G = 1e-3
 
 /** A note as it stands on a sheet: the frequency, and beside it the nearest name and what is over it. */
 export interface SheetNote {
@@ -70,20 +66,10 @@ export function tuningSheet(
   reader: { readonly locale: string; readonly units: Units; readonly referenceHz: number },
 ): TuningSheet {
   const { spec } = drum
-  const batterHz = spec.note ? noteFrequencyHz(spec.note, reader.referenceHz) : null
+  const figures = drumEstimate(spec, { referenceHz: reader.referenceHz })
   const heads = [
-    sheetHead(drum, 'batter', spec.batter, batterHz, reader),
-    ...(spec.resonant
-      ? [
-          sheetHead(
-            drum,
-            'resonant',
-            spec.resonant,
-            batterHz === null ? null : resonantTargetHz(batterHz, spec.headRelationCents),
-            reader,
-          ),
-        ]
-      : []),
+    sheetHead(drum, 'batter', spec.batter, figures?.batter ?? null, reader),
+    ...(spec.resonant ? [sheetHead(drum, 'resonant', spec.resonant, figures?.resonant ?? null, reader)] : []),
   ]
   return {
     entryId: drum.id,
@@ -110,7 +96,7 @@ function sheetHead(
   drum: FrozenDrum,
   side: SheetHead['side'],
   head: FrozenHead,
-  noteHz: number | null,
+  figures: SideEstimate | null,
   reader: { readonly locale: string; readonly referenceHz: number },
 ): SheetHead {
   const { spec } = drum
@@ -124,39 +110,26 @@ function sheetHead(
     lugs: lugsFacing(side, evenLugAngles(spec.lugs)).map(({ lug, x, y }) => ({ lug, x, y, turn: turns.get(lug) ?? 0 })),
   }
   const bare = { ...common, tap: null, rodPullN: null, cautions: [] }
-  if (noteHz === null)
+  if (figures === null)
     return { ...bare, note: null, without: 'No note is set for this drum: tune it even and ask the drum tech.' }
-  const note = sheetNote(noteHz, reader)
-  try {
-    const estimate = headEstimate({
-      plyMils: [...head.plyMils],
-      coatingKgPerM2: head.coatingGPerM2 * KG_PER_G,
-      diameterM: spec.diameterIn * METRE_PER_INCH,
-      noteHz,
-      lugs: spec.lugs,
-      role: spec.role,
-      side,
-    })
-    return {
-      ...common,
-      note,
-      tap: {
-        hz: estimate.tapHz,
-        lowHz: estimate.interval.tapLowHz,
-        highHz: estimate.interval.tapHighHz,
-        name: sheetNote(estimate.tapHz, reader).name,
-      },
-      rodPullN: estimate.rodPullN,
-      cautions: estimate.cautions,
-      without: null,
-    }
-  } catch (error) {
-    if (!(error instanceof AcousticsError)) throw error
-    return {
-      ...bare,
-      note,
-      without: 'This head cannot be estimated at this note: ask the drum tech before you bring it up.',
-    }
+  const note = sheetNote(figures.noteHz, reader)
+  const { estimate } = figures
+  if (estimate === null) {
+    const without = 'This head cannot be estimated at this note: ask the drum tech before you bring it up.'
+    return { ...bare, note, without }
+  }
+  return {
+    ...common,
+    note,
+    tap: {
+      hz: estimate.tapHz,
+      lowHz: estimate.interval.tapLowHz,
+      highHz: estimate.interval.tapHighHz,
+      name: sheetNote(estimate.tapHz, reader).name,
+    },
+    rodPullN: estimate.rodPullN,
+    cautions: estimate.cautions,
+    without: null,
   }
 }
 
