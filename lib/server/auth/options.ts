@@ -40,8 +40,8 @@ const emailLink: EmailConfig = {
   sendVerificationRequest: sendSignInMail,
 }
 
+/** Its secret is not said here: next-auth takes NEXTAUTH_SECRET itself when it is called, and a build must need no settings. */
 export const authOptions: NextAuthOptions = {
-  secret: env().NEXTAUTH_SECRET,
   adapter: authAdapter,
   session: { strategy: 'jwt', maxAge: sessionSeconds },
   pages: { signIn: '/sign-in', signOut: '/sign-in', verifyRequest: '/sign-in/sent', error: '/sign-in' },
