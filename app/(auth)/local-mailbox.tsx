@@ -1,5 +1,10 @@
-/** On a set-up of one's own no mail leaves the machine; this is where it lies. */
-export function LocalMailbox({ url }: { url: string | undefined }) {
+import { connection } from 'next/server'
+import { env } from '@/lib/env'
+
+/** On a set-up of one's own no mail leaves the machine; this is where it lies. Asked at each request: a build knows no settings. */
+export async function LocalMailbox() {
+  await connection()
+  const url = env().MAILBOX_URL
   if (!url) return null
   return (
     <p className="mt-6 border-t border-line pt-4 text-sm text-soft">

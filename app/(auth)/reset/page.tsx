@@ -1,5 +1,4 @@
 import type { Metadata } from 'next'
-import { env } from '@/lib/env'
 import { DoorHeading } from '../door-heading'
 import { LocalMailbox } from '../local-mailbox'
 import { AskResetForm } from './ask-reset-form'
@@ -13,7 +12,7 @@ export default function ResetPage() {
         <p>We mail you a link to choose one. Your present password holds until you do.</p>
       </DoorHeading>
       <AskResetForm />
-      <LocalMailbox url={env().MAILBOX_URL} />
+      <LocalMailbox />
     </>
   )
 }

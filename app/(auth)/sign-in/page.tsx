@@ -49,7 +49,7 @@ export default async function SignInPage({ searchParams }: { searchParams: Query
           Begin with your name and mail address
         </Link>
       </p>
-      <LocalMailbox url={env().MAILBOX_URL} />
+      <LocalMailbox />
     </>
   )
 }

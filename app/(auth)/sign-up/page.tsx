@@ -1,7 +1,6 @@
 import type { Metadata } from 'next'
 import Link from 'next/link'
 import { sitePath } from '@/lib/contracts/sign-in'
-import { env } from '@/lib/env'
 import { DoorHeading } from '../door-heading'
 import { LocalMailbox } from '../local-mailbox'
 import { SignUpForm } from './sign-up-form'
@@ -23,7 +22,7 @@ export default async function SignUpPage({ searchParams }: { searchParams: Query
           Sign in
         </Link>
       </p>
-      <LocalMailbox url={env().MAILBOX_URL} />
+      <LocalMailbox />
     </>
   )
 }

@@ -1,6 +1,5 @@
 import type { Metadata } from 'next'
 import { ButtonLink } from '@/components/ui/button-link'
-import { env } from '@/lib/env'
 import { DoorHeading } from '../../door-heading'
 import { LocalMailbox } from '../../local-mailbox'
 
@@ -14,7 +13,7 @@ export default function SentPage() {
         <p>Nothing after a few minutes? Look among the unwanted mail, or check the address and ask again.</p>
       </DoorHeading>
       <ButtonLink href="/sign-in">Back to signing in</ButtonLink>
-      <LocalMailbox url={env().MAILBOX_URL} />
+      <LocalMailbox />
     </>
   )
 }
