@@ -126,11 +126,12 @@ async function startServer({ programs, home, processes, throwaway }) {
 }
 
 /** Makes sure of the app's role, its password and its database. Returns whether the database is new. */
-function settleDatabase({ programs, home, port, password }) {
+function settleDatabase({ programs, home, port, password, throwaway }) {
   const known = (query) => mustPsql(programs, home, port, query) === '1'
   const role = known(`select 1 from pg_roles where rolname = '${ROLE}'`)
-  // The password is set at every start, so that lost secrets do not lock the data away.
-  mustPsql(programs, home, port, `${role ? 'alter' : 'create'} role ${ROLE} login password '${password}'`)
+  // The password is set at every start, so that lost secrets do not lock the data away. Some tests make databases of their own.
+  const rights = throwaway ? 'login createdb' : 'login'
+  mustPsql(programs, home, port, `${role ? 'alter' : 'create'} role ${ROLE} ${rights} password '${password}'`)
   if (known(`select 1 from pg_database where datname = '${DATABASE}'`)) return false
   mustPsql(programs, home, port, `create database ${DATABASE} owner ${ROLE}`)
   return true
@@ -156,7 +157,7 @@ export async function openCluster({ home, programs: newest, processes, password,
     await makeCluster({ programs, home, processes, throwaway })
   }
   const { port, service } = await startServer({ programs, home, processes, throwaway })
-  settleDatabase({ programs, home, port, password })
+  settleDatabase({ programs, home, port, password, throwaway })
   const where = home.elsewhere ? `, data in ${home.folder} because its user cannot use the project's folder` : ''
   say(`${isNew ? 'new cluster, ' : ''}127.0.0.1:${port}, as user ${home.user.name}${where}`)
   return { port, service, programs, url: databaseUrl({ port, password }), folder: fromRoot(home.folder) }

@@ -1,4 +1,4 @@
-/** The command that runs one of the project's TypeScript programs outside Next, as the server code it is. */
+/** The command that runs one of the project's TypeScript programs outside Next. */
 export function typescriptCommand(file) {
-  return [process.execPath, ['--conditions=react-server', '--import', 'tsx', file]]
+  return [process.execPath, ['--import', 'tsx', file]]
 }
