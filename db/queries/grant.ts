@@ -1,10 +1,13 @@
-import { and, desc, eq, isNull, sql } from 'drizzle-orm'
+import { and, desc, eq, gt, isNull, lt, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { grant, grantToken } from '@/db/schema/grant'
 import { hire } from '@/db/schema/hire'
 import { show } from '@/db/schema/tour'
 
-/** The one look-up that has no party yet: the token's hash is what finds it. */
+/** A key that was mailed afresh works for two weeks although its grant has run out; the keys before it stay run out. */
+const freshKeyEnds = sql`case when ${grantToken.madeFor} = 'fresh' then ${grantToken.createdAt} + interval '14 days' end`
+
+/** The one look-up that has no party yet: the token's hash is what finds it. `expiresAt` is this very key's. */
 export async function findGrantByTokenHash(db: Db, tokenHash: string) {
   const rows = await db
     .select({
@@ -16,7 +19,7 @@ export async function findGrantByTokenHash(db: Db, tokenHash: string) {
       hireId: grant.hireId,
       recipientName: grant.recipientName,
       recipientEmail: grant.recipientEmail,
-      expiresAt: grant.expiresAt,
+      expiresAt: sql`greatest(${grant.expiresAt}, ${freshKeyEnds})`.mapWith(grant.expiresAt),
       withdrawnAt: grant.withdrawnAt,
     })
     .from(grantToken)
@@ -88,6 +91,22 @@ export async function renewGrant(
     .where(and(eq(grant.partyId, scope.partyId), eq(grant.id, input.grantId)))
 }
 
+/** Moves the end of the links of one show or hire to no sooner than a moment; what was withdrawn or has run out stays so. */
+export async function extendGrants(db: Db, scope: Scope, input: GrantSubject & { expiresAt: Date }): Promise<void> {
+  await db
+    .update(grant)
+    .set({ expiresAt: input.expiresAt })
+    .where(
+      and(
+        eq(grant.partyId, scope.partyId),
+        ofSubject(input),
+        isNull(grant.withdrawnAt),
+        gt(grant.expiresAt, sql`now()`),
+        lt(grant.expiresAt, input.expiresAt),
+      ),
+    )
+}
+
 export async function insertGrantToken(
   db: Db,
   scope: Scope,
@@ -128,7 +147,7 @@ export async function withdrawGrant(db: Db, scope: Scope, grantId: string): Prom
   return rows.length === 1
 }
 
-/** The links of one show or hire, newest first, with how many keys each has and when one was last used. */
+/** The links of one show or hire, newest first, with how many keys each has, when one was last used and when the last runs out. */
 export async function listGrants(db: Db, scope: Scope, subject: GrantSubject) {
   return db
     .select({
@@ -136,7 +155,7 @@ export async function listGrants(db: Db, scope: Scope, subject: GrantSubject) {
       purpose: grant.purpose,
       contactId: grant.contactId,
       recipientName: grant.recipientName,
-      expiresAt: grant.expiresAt,
+      expiresAt: sql`greatest(${grant.expiresAt}, max(${freshKeyEnds}))`.mapWith(grant.expiresAt),
       withdrawnAt: grant.withdrawnAt,
       createdAt: grant.createdAt,
       tokens: sql<number>`count(${grantToken.id})::int`,

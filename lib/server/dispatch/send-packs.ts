@@ -10,6 +10,7 @@ import { audit } from '@/lib/server/audit/audit'
 import type { Actor, MemberActor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
 import { grantExpiry } from '@/lib/server/grants/grant-expiry'
+import { lastDayOfHire } from '@/lib/server/grants/last-day-of-hire'
 import { makeGrantToken, openGrant } from '@/lib/server/grants/open-grant'
 import { enqueue } from '@/lib/server/jobs/enqueue'
 import { notifyLive } from '@/lib/server/live/notify-live'
@@ -101,8 +102,7 @@ async function readSubject(tx: Db, actor: MemberActor, recipient: SendRecipient)
   const [hire] = await listAdvanceHires(tx, actor, { hireId: recipient.hireId ?? '' })
   if (!hire) throw new AppError('not-found', 'There is no such hire in this party.')
   const { id, tourId, zone } = hire
-  const dates = [hire.collectionDate, hire.lastDate].filter((date) => date !== null).sort()
-  return { id, tourId, zone, houseId: hire.supplierId, houseName: hire.supplierName, lastDate: dates.at(-1) ?? null }
+  return { id, tourId, zone, houseId: hire.supplierId, houseName: hire.supplierName, lastDate: lastDayOfHire(hire) }
 }
 
 /** The key behind the QR code on the sheets: for whoever tunes at that show. */

@@ -1,6 +1,6 @@
 import { db } from '@/db/client'
 import { findRecipient } from '@/db/queries/dispatch'
-import { findGrant, findGrantByTokenHash, renewGrant } from '@/db/queries/grant'
+import { findGrant, findGrantByTokenHash } from '@/db/queries/grant'
 import { env } from '@/lib/env'
 import { AppError } from '@/lib/errors'
 import { audit } from '@/lib/server/audit/audit'
@@ -11,14 +11,13 @@ import { takeFromLimit } from '@/lib/server/http/rate-limit'
 import { letterHtml, letterText } from '@/lib/server/mail/letter'
 import { linkPlace } from '@/lib/server/mail/link-place'
 import { queueMail } from '@/lib/server/mail/queue-mail'
-import { grantExpiry } from './grant-expiry'
 import { makeGrantToken } from './open-grant'
 
 const perLink: Limit = { name: 'fresh-link', points: 3, seconds: 24 * 60 * 60 }
 
 /**
- * Whoever holds a link that has run out may have a fresh one mailed, to the address we know and to no other: the old link alone
- * opens nothing. The answer never says what that address is.
+ * Whoever holds a link that has run out may have a fresh one mailed, to the address we know and to no other: the old link
+ * stays run out. The answer never says what that address is.
  */
 export async function mailFreshLink(input: { token: string; address: string }): Promise<{ sent: true }> {
   const key = /^[\w-]{43}$/.test(input.token) ? await findGrantByTokenHash(db(), hashToken(input.token)) : undefined
@@ -39,12 +38,6 @@ export async function mailFreshLink(input: { token: string; address: string }): 
       throw new AppError('conflict', 'No address is known for this link. Please ask whoever gave it to you for a new one.')
     }
     const tokenId = await makeGrantToken(tx, actor, grant.id, 'fresh')
-    await renewGrant(tx, actor, {
-      grantId: grant.id,
-      recipientName: contact.name,
-      recipientEmail: contact.email,
-      expiresAt: grantExpiry({ lastDate: null, zone: null, now: new Date() }),
-    })
     const letter = {
       greeting: `Hello ${contact.name},`,
       paragraphs: ['Here is your fresh link. It opens what you were asked, with everything you have answered so far.', 'If you did not ask for it, you need do nothing.'],

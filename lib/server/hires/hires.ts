@@ -19,6 +19,7 @@ import type { Hire, HireInput } from '@/lib/contracts/hire'
 import { audit } from '@/lib/server/audit/audit'
 import type { Actor, MemberActor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
+import { extendLinksOfHire } from '@/lib/server/grants/extend-links'
 import { notifyLive } from '@/lib/server/live/notify-live'
 import { changedOr, fieldFault, notThere, stillInUse, thereAlready } from '@/lib/server/refusals'
 import { parseMoney } from '@/lib/staging/money'
@@ -72,6 +73,7 @@ export async function changeHire(
     const changed = await updateHire(tx, actor, { id: before.id, version: input.version, hire: values })
     await changedOr('hire', changed ? was : undefined, () => hireNow(tx, actor, before.id))
     await replaceHireShows(tx, actor, { hireId: before.id, showIds: input.hire.showIds })
+    await extendLinksOfHire(tx, actor, before.id)
     await audit(tx, actor, 'hire.changed', { type: 'hire', id: before.id }, { from: was, to: input.hire })
     await notifyLive(tx, actor.partyId, [`run:${before.tourId}`, `advance:${before.id}`])
     return hireNow(tx, actor, before.id)

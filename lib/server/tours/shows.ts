@@ -12,6 +12,7 @@ import type { Show, ShowInput } from '@/lib/contracts/tour'
 import { audit } from '@/lib/server/audit/audit'
 import type { Actor, MemberActor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
+import { extendLinksOfShow } from '@/lib/server/grants/extend-links'
 import { notifyLive } from '@/lib/server/live/notify-live'
 import { changedOr, fieldFault, notThere, stillInUse, thereAlready } from '@/lib/server/refusals'
 import { instantOfWallTime } from '@/lib/staging/wall-time'
@@ -55,7 +56,10 @@ export async function changeShow(
     const changed = await updateShow(tx, actor, { id: before.id, version: input.version, show: values })
     const now = showAnswer(await shownNow(tx, actor, before.id))
     await changedOr('show', changed ? now : undefined, () => Promise.resolve(now))
-    if (before.dayId !== values.dayId) await makeShowDay(tx, actor, values.dayId)
+    if (before.dayId !== values.dayId) {
+      await makeShowDay(tx, actor, values.dayId)
+      await extendLinksOfShow(tx, actor, before.id)
+    }
     await audit(
       tx,
       actor,
