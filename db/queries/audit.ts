@@ -1,8 +1,14 @@
-import { and, asc, desc, eq, lt, sql } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, lt, sql } from 'drizzle-orm'
+import { unionAll } from 'drizzle-orm/pg-core'
 import type { Db, Scope } from '@/db/client'
 import { auditEvent } from '@/db/schema/audit'
+import { contact, stage, supplier, venue } from '@/db/schema/directory'
 import { grant } from '@/db/schema/grant'
+import { hire } from '@/db/schema/hire'
+import { kitEntry } from '@/db/schema/kit'
+import { player } from '@/db/schema/party'
 import { person } from '@/db/schema/person'
+import { rig, show } from '@/db/schema/tour'
 
 export type AuditRow = typeof auditEvent.$inferInsert
 
@@ -61,4 +67,42 @@ export async function listAuditActions(db: Db, scope: Scope): Promise<string[]> 
     .orderBy(asc(auditEvent.action))
     .limit(200)
   return rows.map((row) => row.action)
+}
+
+/** What the things of the trail are called now, by id; what is gone has no name any more. A show goes by its venue, a hire by its supplier. */
+export async function listAuditNames(db: Db, scope: Scope, ids: readonly string[]): Promise<Map<string, string>> {
+  if (ids.length === 0) return new Map()
+  const wanted = [...new Set(ids)]
+  const named = (table: typeof contact | typeof player | typeof supplier | typeof venue | typeof rig | typeof kitEntry) =>
+    db
+      .select({ id: table.id, name: table.name })
+      .from(table)
+      .where(and(eq(table.partyId, scope.partyId), inArray(table.id, wanted)))
+  const shows = db
+    .select({ id: show.id, name: venue.name })
+    .from(show)
+    .innerJoin(stage, and(eq(stage.partyId, show.partyId), eq(stage.id, show.stageId)))
+    .innerJoin(venue, and(eq(venue.partyId, stage.partyId), eq(venue.id, stage.venueId)))
+    .where(and(eq(show.partyId, scope.partyId), inArray(show.id, wanted)))
+  const hires = db
+    .select({ id: hire.id, name: supplier.name })
+    .from(hire)
+    .innerJoin(supplier, and(eq(supplier.partyId, hire.partyId), eq(supplier.id, hire.supplierId)))
+    .where(and(eq(hire.partyId, scope.partyId), inArray(hire.id, wanted)))
+  const links = db
+    .select({ id: grant.id, name: grant.recipientName })
+    .from(grant)
+    .where(and(eq(grant.partyId, scope.partyId), inArray(grant.id, wanted)))
+  const rows = await unionAll(
+    named(contact),
+    named(player),
+    named(supplier),
+    named(venue),
+    named(rig),
+    named(kitEntry),
+    shows,
+    hires,
+    links,
+  ).limit(wanted.length)
+  return new Map(rows.map(({ id, name }) => [id, name]))
 }

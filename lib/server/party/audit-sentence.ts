@@ -1,12 +1,8 @@
-import type { Role } from '@/lib/contracts/common'
 import { roleWords, roles } from '@/lib/contracts/common'
-
-type Detail = Record<string, unknown>
-
-const text = (detail: Detail, key: string) => {
-  const value = detail[key]
-  return typeof value === 'string' || typeof value === 'number' ? String(value) : ''
-}
+import type { Role } from '@/lib/contracts/common'
+import type { Told } from './told'
+import { tell } from './told'
+import { workSentences } from './work-sentences'
 
 function roleList(value: unknown): string {
   const known = (Array.isArray(value) ? value : [value]).filter((role): role is Role => (roles as readonly unknown[]).includes(role))
@@ -21,39 +17,47 @@ const settingWords: Record<string, string> = {
   locale: 'note names',
 }
 
-function settings(detail: Detail): string {
-  const changed = detail['changed']
+function settings(changed: unknown): string {
   const entries = changed && typeof changed === 'object' ? Object.entries(changed) : []
   return entries.map(([key, value]) => `${settingWords[key] ?? key} ${String(value)}`).join(', ') || 'nothing'
 }
 
-const sentences: Record<string, (detail: Detail) => string> = {
-  'party.create': (detail) => `made the party ${text(detail, 'name')}`,
-  'party.change': (detail) => `changed the settings of the party: ${settings(detail)}`,
-  'member.change-roles': (detail) =>
-    `changed the roles of ${text(detail, 'name')} from ${roleList(detail['before'])} to ${roleList(detail['after'])}`,
-  'member.remove': (detail) => `took ${text(detail, 'name')} out of the party`,
-  'invitation.send': (detail) => `invited ${text(detail, 'email')} as ${roleList(detail['roles'])}`,
-  'invitation.send-again': (detail) => `sent the invitation to ${text(detail, 'email')} again`,
-  'invitation.withdraw': (detail) => `withdrew the invitation to ${text(detail, 'email')}`,
-  'invitation.accept': (detail) => `joined the party as ${roleList(detail['roles'])}`,
-  'stand-in.lend': (detail) =>
-    `lent ${text(detail, 'name')} the role ${roleList(detail['role'])} until ${text(detail, 'untilAt').slice(0, 16).replace('T', ' ')} UTC`,
-  'stand-in.end': (detail) => `ended the loan of the role ${roleList(detail['role'])} to ${text(detail, 'name')}`,
+const partySentences: Record<string, (told: Told) => string> = {
+  'party.create': ({ text }) => `made the party ${text('name')}`,
+  'party.change': ({ detail }) => `changed the settings of the party: ${settings(detail['changed'])}`,
+  'member.change-roles': ({ text, detail }) =>
+    `changed the roles of ${text('name')} from ${roleList(detail['before'])} to ${roleList(detail['after'])}`,
+  'member.remove': ({ text }) => `took ${text('name')} out of the party`,
+  'invitation.send': ({ text, detail }) => `invited ${text('email')} as ${roleList(detail['roles'])}`,
+  'invitation.send-again': ({ text }) => `sent the invitation to ${text('email')} again`,
+  'invitation.withdraw': ({ text }) => `withdrew the invitation to ${text('email')}`,
+  'invitation.accept': ({ detail }) => `joined the party as ${roleList(detail['roles'])}`,
+  'stand-in.lend': ({ text, detail }) =>
+    `lent ${text('name')} the role ${roleList(detail['role'])} until ${text('untilAt').slice(0, 16).replace('T', ' ')} UTC`,
+  'stand-in.end': ({ text, detail }) => `ended the loan of the role ${roleList(detail['role'])} to ${text('name')}`,
   'session.start': () => 'signed in',
   'session.end': () => 'signed out one device',
-  'session.end-all': (detail) => `signed out everywhere, on ${text(detail, 'count')} devices`,
+  'session.end-all': ({ text }) => `signed out everywhere, on ${text('count')} devices`,
+  'password.change': () => 'changed their password',
+  'password.reset': () => 'set a new password by the mailed link',
 }
 
+const sentences = { ...partySentences, ...workSentences }
+
 /**
- * What was done, to stand behind the name of who did it. An action without a sentence of its own is told by its own
- * words, thing first, with whatever name the record kept.
+ * What was done, to stand behind the name of who did it. Names are those of the things as they are called now, by id.
+ * An action without a sentence of its own is told by its own words, thing first, with whatever name the record kept.
  */
-export function auditSentence(action: string, detail: unknown): string {
-  const record: Detail = detail && typeof detail === 'object' ? (detail as Detail) : {}
+export function auditSentence(
+  action: string,
+  detail: unknown,
+  subjectId = '',
+  names: ReadonlyMap<string, string> = new Map(),
+): string {
+  const told = tell(detail, subjectId, names)
   const own = sentences[action]
-  if (own) return own(record)
-  const name = ['name', 'title', 'number', 'email'].map((key) => text(record, key)).find(Boolean)
+  if (own) return own(told)
+  const name = ['name', 'title', 'number', 'email'].map((key) => told.text(key)).find(Boolean)
   return `${action.replace(/[.-]/g, ' ')}${name ? `: ${name}` : ''}`
 }
 

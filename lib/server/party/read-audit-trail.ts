@@ -1,11 +1,13 @@
 import type { z } from 'zod'
 import { db } from '@/db/client'
-import { listAuditActions, listAuditEvents } from '@/db/queries/audit'
+import { listAuditActions, listAuditEvents, listAuditNames } from '@/db/queries/audit'
 import { listMembers } from '@/db/queries/member'
+import { idSchema } from '@/lib/contracts/common'
 import type { auditPageSchema, AuditQuery } from '@/lib/contracts/member'
 import type { Actor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
 import { actionWords, auditSentence } from './audit-sentence'
+import { keptIds } from './told'
 
 const pageLines = 50
 
@@ -29,12 +31,17 @@ export async function readAuditTrail(actor: Actor, query: AuditQuery): Promise<z
   assertCan(actor, 'audit:read')
   const rows = await listAuditEvents(db(), actor, { ...query, limit: pageLines + 1 })
   const shown = rows.slice(0, pageLines)
+  const names = await listAuditNames(
+    db(),
+    actor,
+    shown.flatMap((row) => [row.subjectId, ...keptIds(row.detail)]).filter((id) => idSchema.safeParse(id).success),
+  )
   return {
     lines: shown.map((row) => ({
       id: row.id,
       at: row.at.toISOString(),
       who: who(row),
-      sentence: auditSentence(row.action, row.detail),
+      sentence: auditSentence(row.action, row.detail, row.subjectId, names),
       address: row.address,
     })),
     older: rows.length > pageLines ? (shown.at(-1)?.id ?? null) : null,
