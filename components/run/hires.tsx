@@ -43,14 +43,12 @@ export function Hires({ tourId, hires, choices, mayEdit }: HiresProps) {
                 {hire.name && <span>{hire.name}</span>}
                 <StandingBadge standing={standing ?? 'not sent'} />
                 <span className="text-soft">{hire.confirmedAt ? 'confirmed' : 'not confirmed'}</span>
-                {shows[0] && (
-                  <Link
-                    href={`/tours/${tourId}/shows/${shows[0].id}/advance` as Route}
-                    className="inline-flex min-h-7 items-center font-bold underline underline-offset-4"
-                  >
-                    Its advance
-                  </Link>
-                )}
+                <Link
+                  href={`/tours/${tourId}/hires/${hire.id}/advance` as Route}
+                  className="inline-flex min-h-7 items-center font-bold underline underline-offset-4"
+                >
+                  Its advance<span className="sr-only">, {hire.supplierName}</span>
+                </Link>
               </div>
               <HireFacts hire={hire} shows={shows} />
               {mayEdit && (

@@ -17,7 +17,7 @@ export interface TourSpineProps {
   rigs: readonly { id: string; name: string }[]
   note: string
   days: readonly (Omit<RunStripDay, 'shows'> & { shows: readonly SpineShow[] })[]
-  hires: readonly RunStripHire[]
+  hires: readonly (Omit<RunStripHire, 'chosen'> & { name: string; href: Route })[]
 }
 
 const rigPlaces = [
@@ -36,6 +36,9 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
   const showId = place === 'shows' ? segments[1] : undefined
   const showPlace = segments[2] ?? ''
   const chosen = days.flatMap((day) => day.shows).find((show) => show.id === showId)
+  const hireId = place === 'hires' ? segments[1] : undefined
+  const chosenHire = hires.find((hire) => hire.id === hireId)
+  const chosenName = chosen?.venue ?? chosenHire?.name
   const rigId = chosen?.rigId ?? params.get('rig') ?? rigs[0]?.id
   const atRig = rigPlaces.some(({ segment }) => segment === place)
   const ofRig = (path: string, rig: string | undefined) => (rig ? `${path}?rig=${rig}` : path) as Route
@@ -54,6 +57,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
           { href: `${base}/shows/${chosen.id}/bench` as Route, label: 'Bench', current: showPlace === 'bench' },
         ]
       : []),
+    ...(chosenHire ? [{ href: chosenHire.href, label: 'Advance', current: true }] : []),
   ]
   // Going along the strip stays at the same place of the next show.
   const here = showPlace === 'advance' || showPlace === 'bench' ? `/${showPlace}` : ''
@@ -62,7 +66,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
       <section aria-label="Tour" className="flex flex-wrap items-center gap-x-6 px-4 sm:px-6 print:hidden">
         <p className="min-w-0 truncate py-1 text-soft">
           {tourName}
-          {chosen ? `, ${chosen.venue}` : ''}
+          {chosenName ? `, ${chosenName}` : ''}
         </p>
         <NavLinks label="Places of this tour" links={links} />
         {atRig && rigs.length > 1 && (
@@ -85,7 +89,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
       </section>
       <RunStrip
         label={`The run of ${tourName}`}
-        tour={{ href: `${base}/run` as Route, chosen: showId === undefined, note }}
+        tour={{ href: `${base}/run` as Route, chosen: showId === undefined && hireId === undefined, note }}
         days={days.map((day) => ({
           ...day,
           shows: day.shows.map((show) => ({
@@ -94,7 +98,7 @@ export function TourSpine({ tourId, tourName, rigs, note, days, hires }: TourSpi
             chosen: show.id === showId,
           })),
         }))}
-        hires={hires}
+        hires={hires.map((hire) => ({ ...hire, chosen: hire.id === hireId }))}
       />
     </>
   )

@@ -34,6 +34,7 @@ export interface RunStripHire {
   lastDate: string
   state: 'settled' | 'waiting' | 'changed' | 'none'
   href?: Route
+  chosen?: boolean
 }
 
 export interface RunStripProps {
@@ -85,7 +86,7 @@ export function RunStrip({ label, tour, days, hires }: RunStripProps) {
           <span className="name text-lg">Tour</span>
           <span className={classes('text-xs', tour.chosen ? 'text-paper' : 'text-soft')}>{tour.note}</span>
         </Link>
-        <ol className="grid grow pb-1" style={{ gridTemplateColumns: `repeat(${days.length}, minmax(5.75rem, 1fr))` }}>
+        <ol className="grid grow pb-1" style={{ gridTemplateColumns: `repeat(${days.length}, minmax(5.125rem, 1fr))` }}>
           {days.map((day, index) => (
             <li key={day.id} className="row-start-1 flex min-w-0" style={{ gridColumn: index + 1 }}>
               {day.shows.length === 0 ? (
@@ -143,11 +144,15 @@ function Tape({ hire, torn }: { hire: RunStripHire; torn: { left: boolean; right
   const right = torn.right
     ? '100% 100%, calc(100% - 4px) 75%, 100% 50%, calc(100% - 4px) 25%, 100% 0'
     : '100% 100%, 100% 0'
-  const className = classes('block truncate px-2.5 py-0.5 text-xs text-ink', tapes[hire.state])
+  const className = classes(
+    'block truncate px-2.5 py-0.5 text-xs',
+    hire.chosen ? 'bg-ink text-paper' : classes('text-ink', tapes[hire.state]),
+  )
   const style = { clipPath: `polygon(${left}, ${right})` }
   return hire.href ? (
     <Link
       href={hire.href}
+      aria-current={hire.chosen ? 'page' : undefined}
       className={classes(className, 'underline-offset-2 hover:underline focus-visible:-outline-offset-3')}
       style={style}
       title={hire.label}

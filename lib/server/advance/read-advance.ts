@@ -68,7 +68,7 @@ function titleOf(subject: Subject): string {
   }
   const { name, supplierName, firstDate, lastDate, showIds } = subject.hire
   const span = firstDate && lastDate ? (firstDate === lastDate ? dateWords(firstDate) : `${dateWords(firstDate)} to ${dateWords(lastDate)}`) : ''
-  return [name || supplierName, span, showIds.length === 1 ? '1 show' : `${showIds.length} shows`].filter(Boolean).join(', ')
+  return [supplierName, name, span, showIds.length === 1 ? '1 show' : `${showIds.length} shows`].filter(Boolean).join(', ')
 }
 
 function zoneOf(subject: Subject): string | null {

@@ -60,8 +60,7 @@ export function nextLinks(run: Run, steps: readonly NextStep[]): NextLink[] {
       case 'add a contact':
         return show ? `/directory/venues/${show.venueId}#contacts` : `/directory/suppliers/${hire?.supplierId}#contacts`
       default:
-        // A hire is asked from the first show it covers.
-        return `${base}/shows/${show?.id ?? hire?.showIds[0]}/advance`
+        return show ? `${base}/shows/${show.id}/advance` : `${base}/hires/${step.hireId}/advance`
     }
   }
   return steps.map((step) => ({

@@ -7,11 +7,18 @@ import { rolesMay } from '@/lib/contracts/permissions'
 import { readAdvance } from '@/lib/server/advance/read-advance'
 import { pageActor } from '@/lib/server/auth/page-actor'
 import { pageAnswer } from '@/lib/server/auth/page-answer'
+import { pageRun } from '../../../page-run'
 
-export const metadata: Metadata = { title: 'Advance' }
+type Props = PageProps<'/tours/[tourId]/hires/[hireId]/advance'>
+
+export async function generateMetadata({ params }: Props): Promise<Metadata> {
+  const { tourId, hireId } = await params
+  const hire = (await pageRun(tourId)).hires.find(({ id }) => id === hireId)
+  return { title: hire ? `Advance, ${hire.supplierName} hire` : 'Advance' }
+}
 
 /** The advance of one hire; answers arrive while it is open. */
-export default async function HireAdvancePage({ params }: PageProps<'/tours/[tourId]/hires/[hireId]/advance'>) {
+export default async function HireAdvancePage({ params }: Props) {
   const { tourId, hireId } = await params
   const actor = await pageActor()
   if (!idSchema.safeParse(tourId).success || !idSchema.safeParse(hireId).success) notFound()
