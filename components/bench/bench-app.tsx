@@ -33,7 +33,7 @@ export function BenchApp({ initial, place, owner, ownName }: BenchAppProps) {
             All drums
           </a>
         ) : (
-          <span className="name text-lg">Hoopwright</span>
+          place.kind === 'link' && <span className="name text-lg">Hoopwright</span>
         )}
         {place.kind === 'link' && <ThemeToggle place="bench" />}
       </div>

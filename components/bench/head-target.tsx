@@ -30,7 +30,8 @@ function TapTarget({ head }: { head: BenchHead }) {
     <>
       <p className="text-soft">Every lug to a tap of</p>
       <p className="figures text-6xl leading-none font-bold">
-        {hzWords(head.tap.hz)} <span className="text-3xl">Hz</span>
+        {hzWords(head.tap.hz)}
+        <span className="text-3xl"> Hz</span>
       </p>
       <p className="mt-1 text-soft">
         <span className="figures">
@@ -49,7 +50,8 @@ function GaugeTarget({ gauge }: { gauge: number | null }) {
     <>
       <p className="text-soft">The drum tech’s own gauge read</p>
       <p className="figures text-6xl leading-none font-bold">
-        {gauge} <span className="text-3xl">on the gauge</span>
+        {gauge}
+        <span className="text-3xl"> on the gauge</span>
       </p>
     </>
   )

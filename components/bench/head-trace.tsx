@@ -12,9 +12,11 @@ export function HeadTrace(props: {
   view: HeadView
   centre: ReactNode
   nowLug?: number
+  /** One of many side by side, without the steps from lug to lug. */
+  small?: boolean
   className?: string
 }) {
-  const { drum, head, view, centre, nowLug, className } = props
+  const { drum, head, view, centre, nowLug, small, className } = props
   const out = view.judged ? outWords(view.state) : null
   return (
     <Trace
@@ -24,9 +26,8 @@ export function HeadTrace(props: {
       bandInner={view.judged ? view.bandInner : 1}
       bandOuter={view.judged ? view.bandOuter : 1}
       centre={centre}
-      order={view.order}
       nowLug={nowLug}
-      badge
+      {...(small ? { small } : { order: view.order, badge: true })}
       {...(className ? { className } : {})}
     />
   )

@@ -12,7 +12,7 @@ export function ReadingLog({ bench, drum, head }: { bench: Bench; drum: BenchDru
   return (
     <details className="mt-2">
       <summary className="min-h-control py-1 underline underline-offset-4">
-        {readings.length === 1 ? '1 reading' : `${readings.length} readings`}
+        {head.side}: {readings.length === 1 ? '1 reading' : `${readings.length} readings`}
       </summary>
       <Table
         caption={`Readings of ${drum.name}, ${head.side}, newest first`}

@@ -7,6 +7,8 @@ export interface TraceRodProps {
   hoopRadius: number
   /** To be read now: its number is ringed. */
   now?: boolean
+  /** One of many side by side: a larger number and no word. */
+  small?: boolean
   /** Which way this rod is to be turned now, if it is. */
   move: TraceMove['turn'] | null
 }
@@ -21,7 +23,7 @@ function lugWord(lug: TraceLug): string | null {
  * One claw with its rod and number. Filled: read. Hollow: not read yet. A wedge pointing out (high) or in (low),
  * with the word: out of tolerance. A key on the rod: turn it now, the way its arrow goes.
  */
-export function TraceRod({ lug, hoopRadius, now, move }: TraceRodProps) {
+export function TraceRod({ lug, hoopRadius, now, small, move }: TraceRodProps) {
   const word = lugWord(lug)
   const turnDeg = round((lug.angleRad * 180) / Math.PI)
   const label = clockPoint(lug.angleRad, move ? 116 : word ? 106 : 94)
@@ -49,14 +51,14 @@ export function TraceRod({ lug, hoopRadius, now, move }: TraceRodProps) {
       {now && <circle cx={label.x} cy={label.y} r={9.5} strokeWidth={1.8} className="fill-none stroke-spike" />}
       <text
         x={label.x}
-        y={round(label.y + 3.5)}
+        y={round(label.y + (small ? 5 : 3.5))}
         textAnchor="middle"
-        fontSize={10}
+        fontSize={small ? 14 : 10}
         className={word || move || now ? 'figures fill-spike-text font-bold' : 'figures fill-soft'}
       >
         {lug.number}
       </text>
-      {word && (
+      {word && !small && (
         <text
           x={label.x}
           y={round(label.y + (label.y < -20 ? -7 : 13) + (now ? (label.y < -20 ? -5 : 5) : 0))}

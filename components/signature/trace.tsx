@@ -24,6 +24,8 @@ export interface TraceProps {
   badge?: boolean
   /** Lug numbers in the order in which they are gone round; drawn as steps from lug to lug while nothing was read. */
   order?: readonly number[]
+  /** One of many side by side: larger lug numbers, and no words on the rods; the words stand beside it. */
+  small?: boolean
   /** Paper prints in black and white; stage is for the dark. Inherits the page's theme if not given. */
   mode?: 'stage' | 'paper'
   className?: string
@@ -42,7 +44,7 @@ function points(line: readonly { x: number; y: number }[]): string {
  * outside it is marked by its shape and by a word.
  */
 export function Trace(props: TraceProps) {
-  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], nowLug, badge, order, mode, className } = props
+  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], nowLug, badge, order, small = false, mode, className } = props
   const inner = round(bandInner * targetRadius)
   const outer = round(Math.min(bandOuter * targetRadius, headRadius))
   const steps =
@@ -50,7 +52,7 @@ export function Trace(props: TraceProps) {
   return (
     <div data-theme={mode} className={classes('mx-auto w-full max-w-md', className)}>
       <div className="relative aspect-square">
-        <svg role="img" aria-label={label} viewBox="-134 -134 268 268" className="block w-full">
+        <svg role="img" aria-label={label} viewBox={small ? '-116 -116 232 232' : '-134 -134 268 268'} className="block w-full">
           <g fill="none" stroke="currentColor" className="text-ink">
             <circle r={hoopRadius} strokeWidth={1.6} />
             <circle r={hoopRadius - 4} strokeWidth={1.6} />
@@ -126,6 +128,7 @@ export function Trace(props: TraceProps) {
               key={lug.number}
               lug={lug}
               now={lug.number === nowLug}
+              small={small}
               hoopRadius={hoopRadius}
               move={highlightLugs.find((move) => move.number === lug.number)?.turn ?? null}
             />
