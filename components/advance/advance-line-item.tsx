@@ -47,7 +47,7 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
       state={look.state}
       title={
         <span>
-          <span className="figures mr-2 font-normal text-soft">{line.number}</span>
+          <span className="figures mr-1 font-normal text-soft">{line.number}</span>{' '}
           {line.words}
         </span>
       }

@@ -16,7 +16,7 @@ export interface EntryActionsProps {
 export function EntryActions({ editId, name, onUp, onDown, onEdit, onRemove }: EntryActionsProps) {
   return (
     <div className="flex gap-1">
-      <Button id={editId} onClick={onEdit}>
+      <Button kind="quiet" id={editId} onClick={onEdit}>
         Edit<span className="sr-only"> {name}</span>
       </Button>
       <Menu

@@ -76,7 +76,7 @@ export function PlanBar({ toms, reader, onPlan }: PlanBarProps) {
           />
         )}
       </Field>
-      <Field label="at the note, or Hz" hint="empty: the middle of its range" error={problem ?? undefined}>
+      <Field label="At the note, or Hz" hint="empty: the middle of its range" error={problem ?? undefined}>
         {(control) => (
           <NumberInput
             {...control}

@@ -24,7 +24,7 @@ export function RevisionTable({ tourId, revisions }: { tourId: string; revisions
         <TableRow key={revision.id}>
           <TableCell>
             <Link
-              className="inline-flex min-h-control items-center font-bold underline underline-offset-4"
+              className="inline-flex min-h-7 items-center font-bold whitespace-nowrap underline underline-offset-4"
               href={`/tours/${tourId}/revisions/${revision.id}` as Route}
             >
               Revision {revision.number}

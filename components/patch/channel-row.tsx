@@ -50,7 +50,6 @@ export function ChannelRow({ channel, choices, taken, isGone, mayEdit, onChange,
   }
   const box = (field: 'number' | 'name' | 'stand', value: string) => ({
     value: draft[field] ?? value,
-    disabled: !mayEdit,
     'aria-label': `${label}, ${field}`,
     onChange: (event: React.ChangeEvent<HTMLInputElement>) =>
       setDraft({ ...draft, [field]: event.currentTarget.value }),
@@ -64,6 +63,17 @@ export function ChannelRow({ channel, choices, taken, isGone, mayEdit, onChange,
     },
   })
 
+  if (!mayEdit) {
+    return (
+      <TableRow>
+        <TableCell className="figures w-20">{number}</TableCell>
+        <TableCell>{name}</TableCell>
+        <TableCell>{isGone ? 'gone from the plot' : taken}</TableCell>
+        <TableCell>{stand}</TableCell>
+        <TableCell>{phantom ? '48 V' : '–'}</TableCell>
+      </TableRow>
+    )
+  }
   return (
     <TableRow>
       <TableCell className="w-20">
@@ -80,7 +90,6 @@ export function ChannelRow({ channel, choices, taken, isGone, mayEdit, onChange,
       <TableCell className="min-w-52">
         <Select
           aria-label={`${label}, takes`}
-          disabled={!mayEdit}
           placeholder={isGone ? taken : 'nothing yet'}
           options={choices}
           value={pieceId === null || isGone ? '' : choiceValue(pieceId, output)}
@@ -102,19 +111,16 @@ export function ChannelRow({ channel, choices, taken, isGone, mayEdit, onChange,
         <input
           type="checkbox"
           aria-label={`${label}, phantom`}
-          className="mt-2 size-5 accent-ink"
+          className="size-5 translate-y-1 accent-ink"
           checked={phantom}
-          disabled={!mayEdit}
           onChange={(event) => void save({ phantom: event.currentTarget.checked })}
         />
       </TableCell>
-      {mayEdit && (
-        <TableCell>
-          <Button kind="quiet" className="px-1" aria-label={`Take channel ${number} off the patch`} onClick={onRemove}>
-            Take off
-          </Button>
-        </TableCell>
-      )}
+      <TableCell>
+        <Button kind="quiet" className="px-1" aria-label={`Take channel ${number} off the patch`} onClick={onRemove}>
+          Take off
+        </Button>
+      </TableCell>
     </TableRow>
   )
 }

@@ -130,7 +130,11 @@ export function ChannelTable({
                 <TableHead>Takes</TableHead>
                 <TableHead>Stand</TableHead>
                 <TableHead>Phantom</TableHead>
-                {mayEdit && <TableHead>Off</TableHead>}
+                {mayEdit && (
+                  <TableHead>
+                    <span className="sr-only">Take off</span>
+                  </TableHead>
+                )}
               </>
             }
           >

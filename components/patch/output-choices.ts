@@ -1,3 +1,4 @@
+import { outputWords } from '@/lib/advance/kit-words'
 import type { Channel } from '@/lib/contracts/channel'
 import { channelRank, outputsOf, piecesInOrder, pieceName } from '@/plots/index'
 import type { KitById, Piece, PlotDocument } from '@/plots/index'
@@ -42,5 +43,5 @@ function sourceWords(document: PlotDocument, kit: KitById, piece: Piece, output:
   const name = pieceName(piece, kit)
   const aimed = piece.aim ? document.pieces[piece.aim.pieceId] : undefined
   if (aimed) return `${name} on ${pieceName(aimed, kit)}`
-  return output === 'mic' ? name : `${name}, ${output}`
+  return output === 'mic' ? name : `${name}, ${outputWords(output)}`
 }

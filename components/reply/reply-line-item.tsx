@@ -35,10 +35,10 @@ export function ReplyLineItem({ line, open, focus, refusal, onOpen, onAnswer }: 
       id={`line-${line.lineId}`}
       className={open && !settled ? 'outline-2 -outline-offset-2 outline-ink' : undefined}
       title={
-        <h2 ref={heading} tabIndex={-1} className="font-text text-base leading-snug font-bold">
-          <span className="figures mr-2 font-normal text-soft">{line.number}</span>
+        <h3 ref={heading} tabIndex={-1} className="font-text text-base leading-snug font-bold">
+          <span className="figures mr-1 font-normal text-soft">{line.number}</span>{' '}
           {line.words}
-        </h2>
+        </h3>
       }
       detail={open || settled ? line.details.join('; ') : undefined}
       word={

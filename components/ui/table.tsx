@@ -47,7 +47,7 @@ export function TableHead({ numeric, sorted, sortHref, className, children, ...r
       {...rest}
       aria-sort={sorted}
       className={classes(
-        'px-2 py-1.5 align-bottom text-sm font-bold first:pl-0 last:pr-0',
+        'px-2 py-1.5 align-baseline text-sm font-bold first:pl-0 last:pr-0',
         numeric && 'text-right',
         className,
       )}
@@ -76,7 +76,7 @@ export function TableCell({ numeric, className, ...rest }: TableCellProps) {
   return (
     <td
       {...rest}
-      className={classes('px-2 py-1.5 align-top first:pl-0 last:pr-0', numeric && 'figures text-right', className)}
+      className={classes('px-2 py-1.5 align-baseline first:pl-0 last:pr-0', numeric && 'figures text-right', className)}
     />
   )
 }

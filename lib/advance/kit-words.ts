@@ -58,9 +58,14 @@ export function cymbalTypeWord(type: FrozenCymbalSpec['type']): string {
   return cymbalWords[type]
 }
 
-/** A kind of hardware or microphone, or a stand, from its stored name: "boom stand". */
+/** A kind of hardware or microphone, or a stand, from its stored name: "boom stand"; a clip-on keeps its hyphen. */
 export function typeWords(type: string): string {
-  return type.replaceAll('-', ' ')
+  return type === 'clip-on' ? type : type.replaceAll('-', ' ')
+}
+
+/** An output of a piece, as it is said: "DI", "click", "L". */
+export function outputWords(output: string): string {
+  return output === 'di' ? 'DI' : output
 }
 
 /** A head by kind, never by maker: "10 mil one-ply coated", "7 + 7 mil two-ply clear with gel". */

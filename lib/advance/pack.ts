@@ -5,7 +5,7 @@ import { changeSentences, compareSpecs } from './compare-specs'
 import type { FrozenDrum, FrozenEntry } from './frozen-kit'
 import { entriesInOrder } from './frozen-kit'
 import { kitPieces } from './kit-pieces'
-import { typeWords } from './kit-words'
+import { outputWords, typeWords } from './kit-words'
 import { insteadOfWords, lineDetails, lineWords } from './line-content'
 import type {
   Fact,
@@ -187,7 +187,7 @@ function packChannels(document: RevisionDocument, locale: string): PackChannel[]
         ? [
             pieceName(piece, kit),
             ...(aimed ? [` on ${pieceName(aimed, kit)}`] : []),
-            ...(outputsOf(piece).length > 1 && output !== '' ? [`, ${output}`] : []),
+            ...(outputsOf(piece).length > 1 && output !== '' ? [`, ${outputWords(output)}`] : []),
           ].join('')
         : ''
       return { number, name, source, stand: typeWords(stand), phantom }

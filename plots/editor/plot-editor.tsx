@@ -30,6 +30,7 @@ import { PlotNotices } from './save-state'
 import { middleOf, Sheet } from './sheet'
 import { Shelf } from './shelf'
 import { kitBounds, piecesBounds, stageBounds } from './use-scene'
+import { useListView } from './use-list-view'
 import { useView } from './use-view'
 
 export interface PlotEditorProps {
@@ -71,7 +72,7 @@ export function PlotEditor(props: PlotEditorProps) {
   const [chosen, setChosen] = useState<ReadonlySet<string>>(none)
   const [armed, setArmed] = useState<ShelfItem | null>(null)
   const [isSnapping, setIsSnapping] = useState(true)
-  const [isList, setIsList] = useState(false)
+  const [isList, setIsList] = useListView()
   const [said, setSaid] = useState('')
 
   const nameOf = useCallback((piece: Piece) => pieceName(piece, kit), [kit])

@@ -8,9 +8,11 @@ export default async function PartyLayout({ children }: { children: ReactNode })
   const person = await pagePerson()
   const actor = person.partyId ? await currentActor() : undefined
   return (
-    <main id="main" className="mx-auto max-w-5xl px-4 pt-4 pb-16 sm:px-6">
+    <>
       {actor && <PartyPlaces seesAudit={rolesMay(actor.roles, 'audit:read')} />}
-      {children}
-    </main>
+      <main id="main" className="mx-auto max-w-5xl px-4 pt-8 pb-16 sm:px-6">
+        {children}
+      </main>
+    </>
   )
 }

@@ -13,10 +13,11 @@ export function PartyPlaces({ seesAudit }: { seesAudit: boolean }) {
     { href: '/party/you', label: 'You' },
   ]
   return (
-    <NavLinks
-      label="Party"
-      className="mb-6"
-      links={places.map((place) => ({ ...place, href: place.href as Route, current: path === place.href }))}
-    />
+    <div className="border-b-2 border-ink px-4 sm:px-6 print:hidden">
+      <NavLinks
+        label="Party"
+        links={places.map((place) => ({ ...place, href: place.href as Route, current: path === place.href }))}
+      />
+    </div>
   )
 }
