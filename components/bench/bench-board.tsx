@@ -24,7 +24,10 @@ function DrumBoard({ bench, drum }: { bench: Bench; drum: BenchDrum }) {
   return (
     <section
       aria-labelledby={id}
-      className={classes('min-w-0 border-t border-l-4 border-t-ink pt-2 pl-3', signOff ? 'border-l-reed' : 'border-l-line')}
+      className={classes(
+        'min-w-0 border-t border-l-4 border-t-ink pt-2 pl-3',
+        signOff ? 'border-l-reed' : 'border-l-line',
+      )}
     >
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <h2 id={id} className="text-xl">

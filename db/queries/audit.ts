@@ -22,40 +22,45 @@ export async function listAuditEvents(
   scope: Scope,
   input: { before?: number | undefined; person?: string | undefined; action?: string | undefined; limit: number },
 ) {
-  return db
-    .select({
-      id: auditEvent.id,
-      actorKind: auditEvent.actorKind,
-      actorId: auditEvent.actorId,
-      personName: person.name,
-      recipientName: grant.recipientName,
-      action: auditEvent.action,
-      subjectType: auditEvent.subjectType,
-      subjectId: auditEvent.subjectId,
-      detail: auditEvent.detail,
-      address: auditEvent.address,
-      at: auditEvent.at,
-    })
-    .from(auditEvent)
-    // Actor ids are text because a job is named by a word; the cast stands on their side so that the keys' indexes serve.
-    .leftJoin(person, sql`${person.id} = case when ${auditEvent.actorKind} = 'person' then ${auditEvent.actorId}::uuid end`)
-    .leftJoin(
-      grant,
-      and(
-        eq(grant.partyId, scope.partyId),
-        sql`${grant.id} = case when ${auditEvent.actorKind} = 'link' then ${auditEvent.actorId}::uuid end`,
-      ),
-    )
-    .where(
-      and(
-        eq(auditEvent.partyId, scope.partyId),
-        input.before ? lt(auditEvent.id, input.before) : undefined,
-        input.person ? and(eq(auditEvent.actorKind, 'person'), eq(auditEvent.actorId, input.person)) : undefined,
-        input.action ? eq(auditEvent.action, input.action) : undefined,
-      ),
-    )
-    .orderBy(desc(auditEvent.id))
-    .limit(Math.min(input.limit, 200))
+  return (
+    db
+      .select({
+        id: auditEvent.id,
+        actorKind: auditEvent.actorKind,
+        actorId: auditEvent.actorId,
+        personName: person.name,
+        recipientName: grant.recipientName,
+        action: auditEvent.action,
+        subjectType: auditEvent.subjectType,
+        subjectId: auditEvent.subjectId,
+        detail: auditEvent.detail,
+        address: auditEvent.address,
+        at: auditEvent.at,
+      })
+      .from(auditEvent)
+      // Actor ids are text because a job is named by a word; the cast stands on their side so that the keys' indexes serve.
+      .leftJoin(
+        person,
+        sql`${person.id} = case when ${auditEvent.actorKind} = 'person' then ${auditEvent.actorId}::uuid end`,
+      )
+      .leftJoin(
+        grant,
+        and(
+          eq(grant.partyId, scope.partyId),
+          sql`${grant.id} = case when ${auditEvent.actorKind} = 'link' then ${auditEvent.actorId}::uuid end`,
+        ),
+      )
+      .where(
+        and(
+          eq(auditEvent.partyId, scope.partyId),
+          input.before ? lt(auditEvent.id, input.before) : undefined,
+          input.person ? and(eq(auditEvent.actorKind, 'person'), eq(auditEvent.actorId, input.person)) : undefined,
+          input.action ? eq(auditEvent.action, input.action) : undefined,
+        ),
+      )
+      .orderBy(desc(auditEvent.id))
+      .limit(Math.min(input.limit, 200))
+  )
 }
 
 /** Every action in the party's trail, for the filter. */
@@ -73,7 +78,9 @@ export async function listAuditActions(db: Db, scope: Scope): Promise<string[]> 
 export async function listAuditNames(db: Db, scope: Scope, ids: readonly string[]): Promise<Map<string, string>> {
   if (ids.length === 0) return new Map()
   const wanted = [...new Set(ids)]
-  const named = (table: typeof contact | typeof player | typeof supplier | typeof venue | typeof rig | typeof kitEntry) =>
+  const named = (
+    table: typeof contact | typeof player | typeof supplier | typeof venue | typeof rig | typeof kitEntry,
+  ) =>
     db
       .select({ id: table.id, name: table.name })
       .from(table)

@@ -4,14 +4,18 @@ import { auditSentence } from './audit-sentence'
 describe('the audit trail in sentences', () => {
   it('says both sides of a change of roles', () => {
     expect(
-      auditSentence('member.change-roles', { name: 'Jo Berg', before: ['viewer'], after: ['drum-tech', 'tour-manager'] }),
+      auditSentence('member.change-roles', {
+        name: 'Jo Berg',
+        before: ['viewer'],
+        after: ['drum-tech', 'tour-manager'],
+      }),
     ).toBe('changed the roles of Jo Berg from production viewer to drum tech, tour manager')
   })
 
   it('says until when a role is lent', () => {
-    expect(auditSentence('stand-in.lend', { name: 'Jo Berg', role: 'tour-manager', untilAt: '2031-10-14T23:30:00.000Z' })).toBe(
-      'lent Jo Berg the role tour manager until 2031-10-14 23:30 UTC',
-    )
+    expect(
+      auditSentence('stand-in.lend', { name: 'Jo Berg', role: 'tour-manager', untilAt: '2031-10-14T23:30:00.000Z' }),
+    ).toBe('lent Jo Berg the role tour manager until 2031-10-14 23:30 UTC')
   })
 
   it('tells an action it does not know by its own words and the name kept with it', () => {
@@ -40,8 +44,12 @@ describe('the work in sentences', () => {
     expect(told('bench.read', { readings: 6, entryIds: ['d1', 'd2'] }, 's1')).toBe(
       'logged 6 readings of Tom 12, Floor 16 at Salle Nord',
     )
-    expect(told('bench.sign-off', { entryId: 'd1', name: 'Sanna' }, 's1')).toBe('signed off Tom 12 at Salle Nord as Sanna')
-    expect(told('revision.issue', { rigId: 'r1', number: 3, lines: 19 })).toBe('issued revision 3 of full rig, 19 lines')
+    expect(told('bench.sign-off', { entryId: 'd1', name: 'Sanna' }, 's1')).toBe(
+      'signed off Tom 12 at Salle Nord as Sanna',
+    )
+    expect(told('revision.issue', { rigId: 'r1', number: 3, lines: 19 })).toBe(
+      'issued revision 3 of full rig, 19 lines',
+    )
   })
 
   it('says what was changed from what', () => {

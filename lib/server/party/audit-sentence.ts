@@ -5,7 +5,9 @@ import { tell } from './told'
 import { workSentences } from './work-sentences'
 
 function roleList(value: unknown): string {
-  const known = (Array.isArray(value) ? value : [value]).filter((role): role is Role => (roles as readonly unknown[]).includes(role))
+  const known = (Array.isArray(value) ? value : [value]).filter((role): role is Role =>
+    (roles as readonly unknown[]).includes(role),
+  )
   return known.map((role) => roleWords[role]).join(', ') || 'no role'
 }
 

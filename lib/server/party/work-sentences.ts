@@ -7,7 +7,8 @@ import type { Told } from './told'
 const after = (words: string, name: string) => (name ? ` ${words} ${name}` : '')
 /** Whose advance it was: a show's venue or a hire's supplier. */
 const whose = ({ named }: Told) => named('showId') || named('hireId')
-const countOf = (number: string, one: string, many: string) => (number === '1' ? `1 ${one}` : `${number || 'some'} ${many}`)
+const countOf = (number: string, one: string, many: string) =>
+  number === '1' ? `1 ${one}` : `${number || 'some'} ${many}`
 const day = (date: string) => (date ? dateWords(date) : 'a day')
 const kind = (words: string) => dayKindWords[words as DayKind] ?? words
 /** From one name to another, or just the name where it stayed. */
@@ -61,7 +62,9 @@ export const workSentences: Record<string, (told: Told) => string> = {
   },
   'plot.changed': ({ itself, detail }) => {
     const commands = detail['commands']
-    const words = Array.isArray(commands) ? commands.map((type) => commandWords[String(type)] ?? String(type)).join(', ') : ''
+    const words = Array.isArray(commands)
+      ? commands.map((type) => commandWords[String(type)] ?? String(type)).join(', ')
+      : ''
     return `changed the plot${after('of', itself)}${words ? `: ${words}` : ''}`
   },
   'channel.added': ({ text, named }) =>
@@ -90,7 +93,8 @@ export const workSentences: Record<string, (told: Told) => string> = {
     `logged ${countOf(told.text('readings'), 'reading', 'readings')}${after('of', told.allNamed('entryIds'))}${after('at', told.itself)}`,
   'bench.sign-off': (told) =>
     `signed off ${told.named('entryId') || 'a drum'}${after('at', told.itself)} as ${told.text('name')}`,
-  'bench.take-back': (told) => `took back the sign-off of ${told.named('entryId') || 'a drum'}${after('at', told.itself)}`,
+  'bench.take-back': (told) =>
+    `took back the sign-off of ${told.named('entryId') || 'a drum'}${after('at', told.itself)}`,
   'venue.added': ({ text }) => `added the venue ${text('name')}`,
   'venue.changed': ({ text }) => `changed the venue ${renamed(text('from.name'), text('to.name'))}`,
   'venue.removed': ({ text }) => `took the venue ${text('was.name')} out of the directory`,
