@@ -6,7 +6,8 @@ import { Figures, Heading, Plain } from '../words'
 import { LugDrawing } from './lug-drawing'
 
 const drawingMm = 47
-const rowMm = 5.8
+/** A row's height and, over thirteen of them, the room of a table: fewer lugs have taller rows, easier to write in. */
+const rowMm = { least: 5.8, most: 8.5 }
 const blankColumns = ['gauge', 'tap Hz', 'gauge', 'tap Hz'] as const
 
 /** One head of a drum: its note largest, then the tap, the gauge to start from, the drawn order, and room for readings. */
@@ -73,10 +74,11 @@ function noteWords({ name, cents }: { name: string; cents: number }): string {
 
 /** Blank columns for two passes, the lugs in the order in which they are turned. */
 function ReadingTable({ head }: { head: SheetHead }) {
+  const heightMm = Math.min(rowMm.most, (13 * rowMm.least) / (head.order.length + 1))
   const cell = {
     flex: 1,
     borderLeft: `0.4pt solid ${ink.soft}`,
-    height: mm(rowMm),
+    height: mm(heightMm),
     justifyContent: 'center',
     alignItems: 'center',
   } as const

@@ -4,11 +4,12 @@ import type { PackDocument, PackLine } from '@/lib/advance/pack-document'
 import { ink } from '../ink'
 import { mm } from '../paper-measure'
 import { Figures, Heading, Plain } from '../words'
+import { Cautions } from './cautions'
 import { PageFrame } from './page-frame'
 import { RuledTable } from './ruled-table'
 
-/** The numbered lines with tick boxes: a filled and photographed page is an answer too. */
-export function LinePage({ pack }: { pack: PackDocument }) {
+/** The numbered lines with tick boxes: a filled and photographed page is an answer too. The last page holds the cautions. */
+export function LinePage({ pack, last }: { pack: PackDocument; last: boolean }) {
   const asked = pack.lines.filter((line) => line.asked).length
   return (
     <PageFrame pack={pack} title="Lines">
@@ -39,6 +40,11 @@ export function LinePage({ pack }: { pack: PackDocument }) {
         <Blank label="Name" widthMm={55} />
         <Blank label="Date" widthMm={35} />
       </View>
+      {last && (
+        <View style={{ marginTop: mm(10) }}>
+          <Cautions pack={pack} />
+        </View>
+      )}
     </PageFrame>
   )
 }

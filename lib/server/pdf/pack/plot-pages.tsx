@@ -3,9 +3,11 @@ import { planningCaution } from '@/lib/advance/cautions'
 import type { PackDocument, PackPlot } from '@/lib/advance/pack-document'
 import { areaWords } from '@/plots/symbols/length-words'
 import { contentMm, mm } from '../paper-measure'
+import type { PlotSheet } from '../plot-sheet'
 import { plotSheet } from '../plot-sheet'
 import { SceneSvg } from '../scene-svg'
 import { Figures, Heading, Plain } from '../words'
+import { KitKey } from './kit-key'
 import { PageFrame } from './page-frame'
 import { PlotLegend } from './plot-legend'
 
@@ -13,6 +15,8 @@ const sideMm = 52
 const gapMm = 4
 /** Height kept for the line of words over the inset. */
 const insetHeadMm = 9
+/** Width of the key beside the inset, which stands there when the drawing leaves the room. */
+const keyMm = 62
 
 /** The stage to scale with its legend, and the kit drawn large on a page of its own. */
 export function PlotPages({ pack, plot }: { pack: PackDocument; plot: PackPlot }) {
@@ -65,16 +69,27 @@ export function PlotPages({ pack, plot }: { pack: PackDocument; plot: PackPlot }
           <View
             style={{
               height: mm(underHead(contentMm(pack.paper, sheet.inset.orientation)).heightMm),
-              alignItems: 'center',
-              justifyContent: 'center',
+              flexDirection: 'row',
             }}
           >
-            <SceneSvg scene={sheet.inset.scene} scale={sheet.inset.scale} />
+            {leavesRoomForKey(sheet.inset, pack) && (
+              <View style={{ width: mm(keyMm), marginRight: mm(gapMm) }}>
+                <KitKey pack={pack} plot={plot} />
+              </View>
+            )}
+            <View style={{ flex: 1, alignItems: 'center', justifyContent: 'center' }}>
+              <SceneSvg scene={sheet.inset.scene} scale={sheet.inset.scale} />
+            </View>
           </View>
         </PageFrame>
       )}
     </>
   )
+}
+
+function leavesRoomForKey({ scene, scale, orientation }: NonNullable<PlotSheet['inset']>, pack: PackDocument): boolean {
+  const drawnMm = ((scene.bounds.maxXM - scene.bounds.minXM) * 1000) / scale
+  return contentMm(pack.paper, orientation).widthMm - drawnMm >= keyMm + gapMm
 }
 
 function underHead({ widthMm, heightMm }: { widthMm: number; heightMm: number }) {

@@ -4,12 +4,11 @@ import type { PackDocument } from '@/lib/advance/pack-document'
 import { ink } from '../ink'
 import { mm } from '../paper-measure'
 import { Heading, Plain } from '../words'
-import { PageFrame } from './page-frame'
 
 /** The cautions that belong to what the pack asks for. */
-export function CautionPage({ pack }: { pack: PackDocument }) {
+export function Cautions({ pack }: { pack: PackDocument }) {
   return (
-    <PageFrame pack={pack} title="Cautions">
+    <>
       {pack.cautions.map(({ name, words }) => (
         <View
           key={name}
@@ -23,6 +22,6 @@ export function CautionPage({ pack }: { pack: PackDocument }) {
       <Plain size={10} bold>
         {planningCaution}
       </Plain>
-    </PageFrame>
+    </>
   )
 }
