@@ -8,6 +8,7 @@ import { Checkbox } from '../ui/checkbox'
 /** "All as asked except …": ticks are the exceptions; everything else of what is open is answered in one press. */
 export function AllAsAsked({ lines, onAnswer, onClose }: { lines: readonly ReplyLine[]; onAnswer: (lines: readonly ReplyLine[]) => void; onClose: () => void }) {
   const [except, setExcept] = useState<ReadonlySet<string>>(new Set())
+  const severalSpecs = new Set(lines.map((line) => line.spec)).size > 1
   const rest = lines.filter((line) => !except.has(line.lineId))
   return (
     <section aria-labelledby="all-as-asked" className="border-2 border-ink bg-sheet p-3">
@@ -19,7 +20,7 @@ export function AllAsAsked({ lines, onAnswer, onClose }: { lines: readonly Reply
         {lines.map((line) => (
           <Checkbox
             key={line.lineId}
-            label={line.words}
+            label={severalSpecs ? `${line.words}, ${line.spec}` : line.words}
             checked={except.has(line.lineId)}
             onChange={(event) => {
               const next = new Set(except)

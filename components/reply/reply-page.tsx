@@ -33,6 +33,9 @@ export function ReplyPage({ initial, token }: { initial: Reply; token: string })
   const lines = linesWithWaiting(state.reply, state.waiting)
   const open = lines.filter(isOpen)
   const answered = lines.length - open.length
+  // A line's number is its own only within the rig that asks for it.
+  const specs = [...new Set(lines.map((line) => line.spec))]
+  const settled = lines.every((line) => line.state === 'settled')
   const closing = state.waiting.some((event) => event.kind === 'close')
 
   function withName(lineId: string | null, act: (name: string) => void) {
@@ -86,26 +89,33 @@ export function ReplyPage({ initial, token }: { initial: Reply; token: string })
       {allOpen ? (
         <AllAsAsked lines={open} onAnswer={answerAll} onClose={() => setAllOpen(false)} />
       ) : (
-        <ol className="grid gap-2">
-          {lines.map((line) =>
-            wanting?.lineId === line.lineId ? (
-              <li key={line.lineId}>{nameForm}</li>
-            ) : (
-              <ReplyLineItem
-                key={line.lineId}
-                line={line}
-                open={openId === line.lineId}
-                focus={moved}
-                refusal={state.refusals[line.lineId]}
-                onOpen={() => {
-                  setOpenId(line.lineId)
-                  setMoved(true)
-                }}
-                onAnswer={(said) => answer(line, said)}
-              />
-            ),
-          )}
-        </ol>
+        specs.map((spec) => (
+          <section key={spec} aria-label={spec} className="grid gap-2">
+            <h2 className={specs.length > 1 ? 'text-xl first-letter:uppercase' : 'sr-only'}>{spec}</h2>
+            <ol className="grid gap-2">
+              {lines
+                .filter((line) => line.spec === spec)
+                .map((line) =>
+                  wanting?.lineId === line.lineId ? (
+                    <li key={line.lineId}>{nameForm}</li>
+                  ) : (
+                    <ReplyLineItem
+                      key={line.lineId}
+                      line={line}
+                      open={openId === line.lineId}
+                      focus={moved}
+                      refusal={state.refusals[line.lineId]}
+                      onOpen={() => {
+                        setOpenId(line.lineId)
+                        setMoved(true)
+                      }}
+                      onAnswer={(said) => answer(line, said)}
+                    />
+                  ),
+                )}
+            </ol>
+          </section>
+        ))
       )}
       {open.length > 1 && !allOpen && (
         <Button kind="quiet" onClick={() => setAllOpen(true)}>
@@ -114,7 +124,11 @@ export function ReplyPage({ initial, token }: { initial: Reply; token: string })
       )}
       {lines.length > 0 && !allOpen && (
         <section aria-label="When you are done" className="grid gap-2 border-t border-ink pt-4">
-          {state.reply.closed || closing ? (
+          {settled ? (
+            <Notice kind="success" word="Settled">
+              Every line is settled. Nothing more is asked of you.
+            </Notice>
+          ) : state.reply.closed || closing ? (
             <Notice kind="success" word="All from you">
               You said that this is all. Until a line is settled you can still change it.
             </Notice>
@@ -149,7 +163,7 @@ function ReplyHead({ reply, token }: { reply: Reply; token: string }) {
         {reply.party} asks {reply.recipient}
       </p>
       <h1 className="mt-1 text-3xl">{reply.title}</h1>
-      <p className="mt-2 text-soft">
+      <p className="mt-2 text-soft first-letter:uppercase">
         {reply.spec}.{reply.due && ` Please answer by ${reply.due}, your time.`}
       </p>
       {reply.shows.length > 1 && (
@@ -171,7 +185,7 @@ function ReplyHead({ reply, token }: { reply: Reply; token: string }) {
             download
             className="inline-flex min-h-control items-center underline underline-offset-4"
           >
-            {reply.pdfs.length > 1 ? `Download ${pdf.name}` : 'Download the pack'}
+            {reply.pdfs.length > 1 ? `Download the pack, ${pdf.spec}` : 'Download the pack'}
             {pdf.pages !== null && ` (PDF, ${pdf.pages} pages)`}
           </a>
         </p>

@@ -82,6 +82,8 @@ export const replyLineSchema = z.object({
   lineId: idSchema,
   hash: z.string(),
   number: z.number().int(),
+  /** The rig and revision that ask for it: "fly rig, revision 1". */
+  spec: z.string(),
   kind: z.string(),
   count: z.number().int(),
   words: z.string(),
@@ -104,14 +106,14 @@ export const replySchema = z.object({
   party: z.string(),
   recipient: z.string(),
   title: z.string(),
-  /** "Full rig, revision 7". */
+  /** "Full rig, revision 7"; each of them where the shows play several rigs. */
   spec: z.string(),
   due: z.string().nullable(),
   shows: z.array(z.object({ title: z.string(), date: z.string() })),
   lines: z.array(replyLineSchema),
   closed: z.object({ byName: z.string(), at: z.string() }).nullable(),
-  /** The packs whose PDF is made; several where the shows play several rigs. */
-  pdfs: z.array(z.object({ packId: idSchema, name: z.string(), pages: z.number().int().nullable() })),
+  /** The packs whose PDF is made; several where the shows play several rigs, each with its `spec`. */
+  pdfs: z.array(z.object({ packId: idSchema, spec: z.string(), pages: z.number().int().nullable() })),
 })
 export type Reply = z.infer<typeof replySchema>
 

@@ -2,7 +2,6 @@ import { db } from '@/db/client'
 import type { Reply } from '@/lib/contracts/answer'
 import type { Actor } from '@/lib/server/auth/actor'
 import { assertLink } from '@/lib/server/auth/actor'
-import { packFileName } from '@/lib/server/packs/pack-file-name'
 import { loadReply, replyLines } from './reply-lines'
 
 /** All that a reply link shows. Reading changes nothing: mail scanners open links too. */
@@ -15,11 +14,11 @@ export async function readReply(actor: Actor): Promise<Reply> {
     party: newest?.document.party ?? '',
     recipient: newest?.document.recipient.name ?? actor.recipientName,
     title: shows.length === 1 ? `${shows[0]?.title ?? ''}, ${shows[0]?.date ?? ''}` : `${shows.length} shows, ${shows[0]?.date ?? ''} to ${shows.at(-1)?.date ?? ''}`,
-    spec: packs.map((pack) => `${pack.rigName}, revision ${pack.revisionNumber}`).join('; '),
+    spec: packs.map(({ spec }) => spec).join('; '),
     due: newest?.document.answersDue ?? null,
     shows: shows.map(({ title, date }) => ({ title, date })),
     lines: await replyLines(db(), actor, asked, states),
     closed,
-    pdfs: packs.filter((pack) => pack.pdfBlobId).map((pack) => ({ packId: pack.packId, name: packFileName(pack.document), pages: pack.pdfPages })),
+    pdfs: packs.filter((pack) => pack.pdfBlobId).map((pack) => ({ packId: pack.packId, spec: pack.spec, pages: pack.pdfPages })),
   }
 }

@@ -15,9 +15,18 @@ import { lineSize } from './line-size'
 /** What stands behind a reply link now: its packs, the lines its reader is asked to answer, and all that was said about them. */
 export async function loadReply(db: Db, actor: LinkActor) {
   const rows = await listPacksOfGrant(db, actor, actor.grantId)
-  const packs = rows.map((row) => ({ ...row, document: upgradePackDocument(row.document) })).sort((a, b) => b.at.getTime() - a.at.getTime())
+  const packs = rows.map((row) => ({
+    ...row,
+    document: upgradePackDocument(row.document),
+    spec: `${row.rigName}, revision ${row.revisionNumber}`,
+  })).sort((a, b) => b.at.getTime() - a.at.getTime())
   const asked = packs.flatMap((pack) =>
-    pack.document.lines.filter((line) => line.asked).map((line) => ({ ...line, revisionId: pack.revisionId, units: pack.document.units })),
+    pack.document.lines.filter((line) => line.asked).map((line) => ({
+      ...line,
+      revisionId: pack.revisionId,
+      units: pack.document.units,
+      spec: pack.spec,
+    })),
   )
   const subjects = { showIds: actor.showId ? [actor.showId] : [], hireIds: actor.hireId ? [actor.hireId] : [] }
   const events = await listAnswerEvents(db, actor, subjects)
@@ -57,6 +66,6 @@ export async function replyLines(db: Db, scope: Scope, asked: readonly ReplyAske
   })
 }
 
-function shown({ lineId, hash, number, kind, count, words, details, insteadOf }: PackLine) {
-  return { lineId, hash, number, kind, count, words, details: [...details], insteadOf }
+function shown({ lineId, hash, number, spec, kind, count, words, details, insteadOf }: PackLine & { spec: string }) {
+  return { lineId, hash, number, spec, kind, count, words, details: [...details], insteadOf }
 }
