@@ -17,7 +17,7 @@ export default function Landing() {
     <>
       <header className="mx-auto flex max-w-7xl items-center justify-between gap-4 px-5 py-3 sm:px-8">
         <p className="name text-2xl">Hoopwright</p>
-        <div className="flex items-center gap-1">
+        <div className="flex items-center gap-1 whitespace-nowrap">
           <ThemeToggle />
           <ButtonLink href="/sign-in">Sign in</ButtonLink>
         </div>
@@ -80,7 +80,7 @@ export default function Landing() {
           <div className="mx-auto max-w-7xl px-5 sm:px-8">
             <Person
               who="Local tech"
-              does="Tunes by the sheet of one show, on a phone in the dark: the outline is round when the head is even, and there is always one next move."
+              does="Tunes by the sheet of one show, on a phone in the dark: the outline is round when the head is even, and the lugs that are out are named."
             >
               <ExampleTrace />
             </Person>

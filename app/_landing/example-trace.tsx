@@ -28,8 +28,8 @@ export function ExampleTrace() {
       highlightLugs={lugs.filter(({ out }) => out).map(({ lug }) => ({ number: lug, turn: 'ease' }))}
       centre={
         <>
-          <p className="name text-xl sm:text-2xl">Ease 1 and 4 down a little</p>
-          <p className="mt-1 text-sm text-soft">then tap lug 1</p>
+          <p className="name text-xl sm:text-2xl">Lugs 1 and 4 are high</p>
+          <p className="mt-1 text-sm text-soft">by 15 and 13 cents</p>
         </>
       }
     />
