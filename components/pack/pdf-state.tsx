@@ -4,6 +4,14 @@ import type { PackState } from '@/lib/contracts/pack'
 
 /** How far a pack's PDF is, and the way to it. */
 export function PdfState({ state }: { state: PackState }) {
+  if (state.pdf === 'ready' && !state.mayOpen) {
+    return (
+      <Notice kind="info" word="PDF kept">
+        It was sent, and holds the link that answers in its reader’s name: only a tour manager opens it. The same pack
+        stands below, and a preview has a PDF without the link.
+      </Notice>
+    )
+  }
   if (state.pdf === 'ready') {
     return (
       <Notice

@@ -1,4 +1,4 @@
-import { and, arrayOverlaps, asc, desc, eq, inArray, isNull, notExists, sql } from 'drizzle-orm'
+import { and, arrayOverlaps, asc, desc, eq, exists, inArray, isNull, notExists, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { dispatch, pack } from '@/db/schema/advance'
 import { contact, stage, supplier, venue } from '@/db/schema/directory'
@@ -195,6 +195,13 @@ export async function findPack(db: Db, scope: Scope, packId: string) {
       pdfBlobId: pack.pdfBlobId,
       pdfSha256: blob.sha256,
       pdfPages: pack.pdfPages,
+      /** Sent, or about to be: its PDF holds its reader's own key. */
+      dispatched: sql<boolean>`${exists(
+        db
+          .select({ one: sql`1` })
+          .from(dispatch)
+          .where(and(eq(dispatch.partyId, pack.partyId), eq(dispatch.packId, pack.id))),
+      )}`,
       createdAt: pack.createdAt,
     })
     .from(pack)

@@ -28,5 +28,7 @@ export const packStateSchema = z.object({
   /** `late`: the PDF should long have been there, and another preview is the way to get one. */
   pdf: z.enum(['making', 'ready', 'late']),
   pages: z.number().int().nullable(),
+  /** A PDF that was sent holds the link that answers in its reader's name: only whoever may send opens it. */
+  mayOpen: z.boolean(),
 })
 export type PackState = z.infer<typeof packStateSchema>

@@ -258,6 +258,16 @@ describe('a reply link', () => {
     const hire = await send(party, tour, revisionId, 'hire')
     expect((await stranger('GET', path(hire.packId))).status).toBe(404)
     expect((await stranger('GET', path('all'))).status).toBe(422)
+    // What was sent holds the key that answers in its reader's name; on the desk only whoever may send gets it.
+    const desk = `/api/packs/${sent.packId}`
+    for (const [member, status, mayOpen] of [
+      [party.viewer, 403, false],
+      [party.drumTech, 403, false],
+      [party.tourManager, 200, true],
+    ] as const) {
+      expect((await member.call('GET', `${desk}/pdf`)).status).toBe(status)
+      expect((await member.call('GET', desk)).body).toMatchObject({ pdf: 'ready', mayOpen })
+    }
   })
 
   it('opens nothing for a made-up key, for a bench key, or once it is withdrawn or has run out', async () => {

@@ -18,7 +18,7 @@ export async function makePackPreview(actor: Actor, input: MakePack): Promise<Pa
       if (repeated.showId !== (input.showId ?? null) || repeated.hireId !== (input.hireId ?? null)) {
         throw new AppError('conflict', 'This id belongs to another pack. Nothing was made.')
       }
-      return packState(repeated)
+      return packState(actor, repeated)
     }
     const { packId } = await storePack(tx, actor, {
       id: input.id,
@@ -34,7 +34,7 @@ export async function makePackPreview(actor: Actor, input: MakePack): Promise<Pa
     )
     const made = await findPack(tx, actor, packId)
     if (!made) throw new Error('the pack was just written')
-    return packState(made)
+    return packState(actor, made)
   })
 }
 

@@ -8,7 +8,7 @@ import type { Actor, MemberActor } from '@/lib/server/auth/actor'
 import { assertCan } from '@/lib/server/auth/actor'
 import { blobStore } from '@/lib/server/storage/blob-store'
 import { packFileName } from './pack-file-name'
-import { packState } from './pack-state'
+import { mayOpenPdf, packState } from './pack-state'
 
 async function findOwn(actor: MemberActor, packId: string) {
   const found = await findPack(db(), actor, packId)
@@ -19,7 +19,7 @@ async function findOwn(actor: MemberActor, packId: string) {
 /** How far a pack is. */
 export async function readPackState(actor: Actor, input: { packId: string }): Promise<PackState> {
   assertCan(actor, 'party:read')
-  return packState(await findOwn(actor, input.packId))
+  return packState(actor, await findOwn(actor, input.packId))
 }
 
 /** A pack to look at: what it says, of which tour and rig, and how far its PDF is. */
@@ -30,20 +30,21 @@ export async function readPack(
   assertCan(actor, 'party:read')
   const found = await findOwn(actor, input.packId)
   return {
-    state: packState(found),
+    state: packState(actor, found),
     document: upgradePackDocument(found.document),
     rigId: found.rigId,
     tourId: found.tourId,
   }
 }
 
-/** The very bytes of a pack's PDF. */
+/** The very bytes of a pack's PDF. One that was sent is only for whoever may send. */
 export async function readPackPdf(
   actor: Actor,
   input: { packId: string },
 ): Promise<{ bytes: Uint8Array; name: string }> {
   assertCan(actor, 'party:read')
   const found = await findOwn(actor, input.packId)
+  if (!mayOpenPdf(actor, found)) assertCan(actor, 'advance:send')
   if (!found.pdfSha256) throw new AppError('conflict', 'This PDF is still being made. Try again in a moment.')
   return { bytes: await blobStore().get(found.pdfSha256), name: packFileName(upgradePackDocument(found.document)) }
 }
