@@ -35,4 +35,13 @@ describe('a pack rendered in a thread of its own', () => {
     const broken = { ...pack, lines: [{ ...pack.lines[0], details: null }] } as unknown as typeof pack
     await expect(renderInThread({ pack: broken, links })).rejects.toThrow(/map|null/)
   }, 30_000)
+
+  it('goes on after one that failed, and prints several at once without mixing them up', async () => {
+    const named = (name: string) => ({ pack, links: { ...links, reply: `https://hoopwright.example/r/${name}` } })
+    const names = ['one', 'two', 'three', 'four']
+    const printed = await Promise.all(names.map((name) => renderInThread(named(name))))
+    const again = await renderInThread(named('five'))
+    const files = await Promise.all([...printed, again].map(({ bytes }) => readPdf(bytes)))
+    expect(files.map((file) => file.links)).toEqual([...names, 'five'].map((name) => [`https://hoopwright.example/r/${name}`]))
+  }, 60_000)
 })

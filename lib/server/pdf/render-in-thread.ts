@@ -7,6 +7,9 @@ const maxInputBytes = 4 * 1024 * 1024
 const maxOutputBytes = 12 * 1024 * 1024
 const timeOutMs = 90_000
 const memoryMb = 1024
+/** Starting a thread costs several times what a pack does, so a few are kept for the next one. */
+const maxIdle = 2
+const idle: Worker[] = []
 
 /** A pack that will not become smaller by trying again. */
 export class PackTooLarge extends Error {
@@ -16,28 +19,54 @@ export class PackTooLarge extends Error {
   }
 }
 
+function startThread(): Worker {
+  return new Worker(new URL('./pdf-thread-start.mjs', import.meta.url), {
+    resourceLimits: { maxOldGenerationSizeMb: memoryMb },
+  })
+}
+
+/** An idle thread does not keep its process from ending. */
+async function release(thread: Worker): Promise<void> {
+  thread.removeAllListeners()
+  if (idle.length >= maxIdle) return void (await thread.terminate())
+  thread.unref()
+  // One that ends by itself while nobody uses it is not handed out again.
+  thread.once('error', () => undefined)
+  thread.once('exit', () => {
+    const at = idle.indexOf(thread)
+    if (at !== -1) idle.splice(at, 1)
+  })
+  idle.push(thread)
+}
+
 /**
  * Renders a pack in a thread of its own, with a limit on size, memory and time. Only the job process calls it.
- * Throws PackTooLarge for good; any other error may be tried again.
+ * Throws PackTooLarge for good; any other error may be tried again. A thread that failed is not used again.
  */
 export async function renderInThread(input: PdfThreadInput): Promise<PdfThreadAnswer> {
   if (JSON.stringify(input.pack).length > maxInputBytes) throw new PackTooLarge()
-  const thread = new Worker(new URL('./pdf-thread-start.mjs', import.meta.url), {
-    workerData: input,
-    resourceLimits: { maxOldGenerationSizeMb: memoryMb },
-  })
-  let timer: NodeJS.Timeout | undefined
-  try {
-    const answer = await new Promise<PdfThreadAnswer>((resolve, reject) => {
-      timer = setTimeout(() => reject(new Error(`the PDF took longer than ${timeOutMs / 1000} s`)), timeOutMs)
-      thread.once('message', resolve)
-      thread.once('error', reject)
-      thread.once('exit', (code) => reject(new Error(`the PDF thread ended with code ${code} and no PDF`)))
-    })
-    if (answer.bytes.byteLength > maxOutputBytes) throw new PackTooLarge()
-    return answer
-  } finally {
-    clearTimeout(timer)
+  const thread = idle.pop() ?? startThread()
+  thread.removeAllListeners()
+  thread.ref()
+  const answer = await answerOf(thread, input).catch(async (error: unknown) => {
     await thread.terminate()
-  }
+    throw error
+  })
+  await release(thread)
+  if (answer.bytes.byteLength > maxOutputBytes) throw new PackTooLarge()
+  return answer
+}
+
+function answerOf(thread: Worker, input: PdfThreadInput): Promise<PdfThreadAnswer> {
+  return new Promise<PdfThreadAnswer>((resolve, reject) => {
+    const timer = setTimeout(() => reject(new Error(`the PDF took longer than ${timeOutMs / 1000} s`)), timeOutMs)
+    const settle = (how: () => void) => {
+      clearTimeout(timer)
+      how()
+    }
+    thread.once('message', (answer: PdfThreadAnswer) => settle(() => resolve(answer)))
+    thread.once('error', (error) => settle(() => reject(error)))
+    thread.once('exit', (code) => settle(() => reject(new Error(`the PDF thread ended with code ${code} and no PDF`))))
+    thread.postMessage(input)
+  })
 }
