@@ -75,18 +75,26 @@ export async function deleteContact(db: Db, scope: Scope, input: { id: string; v
   return rows.length > 0
 }
 
-/** Whether a mail went to the contact or a link was made for it. */
-export async function contactWasWrittenTo(db: Db, scope: Scope, contactId: string): Promise<boolean> {
+/** Whether a mail went to the contact, or to anybody of a house, or a link was made for them. */
+export async function wasWrittenTo(db: Db, scope: Scope, who: { contactId: string } | ContactOf): Promise<boolean> {
+  const meant =
+    'contactId' in who
+      ? eq(contact.id, who.contactId)
+      : 'venueId' in who
+        ? eq(contact.venueId, who.venueId)
+        : eq(contact.supplierId, who.supplierId)
   const grants = await db
     .select({ id: grant.id })
     .from(grant)
-    .where(and(eq(grant.partyId, scope.partyId), eq(grant.contactId, contactId)))
+    .innerJoin(contact, and(eq(contact.partyId, grant.partyId), eq(contact.id, grant.contactId)))
+    .where(and(eq(grant.partyId, scope.partyId), meant))
     .limit(1)
   if (grants.length > 0) return true
   const sent = await db
     .select({ id: dispatch.id })
     .from(dispatch)
-    .where(and(eq(dispatch.partyId, scope.partyId), eq(dispatch.contactId, contactId)))
+    .innerJoin(contact, and(eq(contact.partyId, dispatch.partyId), eq(contact.id, dispatch.contactId)))
+    .where(and(eq(dispatch.partyId, scope.partyId), meant))
     .limit(1)
   return sent.length > 0
 }

@@ -147,6 +147,15 @@ export async function withdrawGrant(db: Db, scope: Scope, grantId: string): Prom
   return rows.length === 1
 }
 
+/** Ends every link of a show with all its keys; answers which were still open. */
+export async function withdrawGrantsOfShow(db: Db, scope: Scope, showId: string) {
+  return db
+    .update(grant)
+    .set({ withdrawnAt: sql`now()` })
+    .where(and(eq(grant.partyId, scope.partyId), eq(grant.showId, showId), isNull(grant.withdrawnAt)))
+    .returning({ id: grant.id, purpose: grant.purpose })
+}
+
 /** The links of one show or hire, newest first, with how many keys each has, when one was last used and when the last runs out. */
 export async function listGrants(db: Db, scope: Scope, subject: GrantSubject) {
   return db

@@ -125,6 +125,16 @@ export async function setShowZone(
     .where(and(eq(show.partyId, scope.partyId), eq(show.id, input.id)))
 }
 
+/** Holds a show until the transaction ends, so that nothing comes to hang on it while it is being taken away. */
+export async function lockShow(db: Db, scope: Scope, id: string): Promise<void> {
+  await db
+    .select({ id: show.id })
+    .from(show)
+    .where(and(eq(show.partyId, scope.partyId), eq(show.id, id)))
+    .limit(1)
+    .for('update')
+}
+
 /** What hangs on a show and would be lost with it. */
 export async function findShowHangers(db: Db, scope: Scope, id: string) {
   const { partyId } = scope

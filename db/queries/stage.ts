@@ -47,10 +47,10 @@ export async function findStage(db: Db, scope: Scope, id: string) {
   return rows[0]
 }
 
-/** The zone of a stage's venue; undefined when there is no such stage in the party. */
-export async function findStageZone(db: Db, scope: Scope, id: string): Promise<{ zone: string | null } | undefined> {
+/** A stage's venue and its zone; undefined when there is no such stage in the party. */
+export async function findStageVenue(db: Db, scope: Scope, id: string) {
   const rows = await db
-    .select({ zone: venue.zone })
+    .select({ venueId: stage.venueId, zone: venue.zone })
     .from(stage)
     .innerJoin(venue, and(eq(venue.partyId, stage.partyId), eq(venue.id, stage.venueId)))
     .where(and(eq(stage.partyId, scope.partyId), eq(stage.id, id)))

@@ -263,49 +263,4 @@ describe('links', () => {
     }
     expect(statuses).toEqual([200, 200, 429, 429])
   })
-
-  it('last until two weeks after the day that they serve, also when that day moves away', async () => {
-    const moving = await makeTour(party)
-    const revision = await issue(party, moving)
-    const ofShow = await send(party, moving, revision)
-    const ofHire = await send(party, moving, revision, 'hire')
-    const endOf = async (grantId: string) => {
-      const [row] = await db().select({ end: grant.expiresAt }).from(grant).where(eq(grant.id, grantId))
-      return row?.end.toISOString()
-    }
-    // Through the fourteenth day after 14 and 15 October, by the clocks of Paris, after summer time.
-    expect([await endOf(ofShow.grantId), await endOf(ofHire.grantId)]).toEqual([
-      '2031-10-28T23:00:00.000Z',
-      '2031-10-29T23:00:00.000Z',
-    ])
-    const days = await party.tourManager.call('POST', `/api/tours/${moving.tourId}/days`, {
-      days: { firstDate: '2031-12-01', lastDate: '2031-12-01', kind: 'off', remark: '' },
-    })
-    const dayId = (days.body as { days: { id: string }[] }).days[0]?.id
-    const shown = await party.tourManager.call('PATCH', `/api/shows/${moving.showId}`, {
-      version: 1,
-      show: {
-        ...{ name: '', dayId, rigId: moving.rigId, stageId: moving.stageId, playerId: party.playerId, zone: null },
-        ...{ loadInTime: null, showTime: null, showDayOffset: 0, answersDue: null, slot: null, sharedKit: null },
-      },
-    })
-    expect(shown.status).toBe(200)
-    // Through 15 December, in winter time: the hire's last show moved with it.
-    expect([await endOf(ofShow.grantId), await endOf(ofHire.grantId)]).toEqual([
-      '2031-12-15T23:00:00.000Z',
-      '2031-12-15T23:00:00.000Z',
-    ])
-    const hired = await party.tourManager.call('PATCH', `/api/hires/${moving.hireId}`, {
-      version: 1,
-      hire: {
-        ...{ supplierId: moving.supplierId, name: '', showIds: [moving.showId], zone: null, receiver: '', poNumber: '' },
-        ...{ deliveryDate: '2031-11-30', deliveryFrom: null, deliveryUntil: null, conditionOnReturn: '', rateBasis: 'day' },
-        ...{ collectionDate: '2031-12-20', collectionFrom: null, collectionUntil: null, currency: null, transport: '' },
-        ...{ taxPercent: null, validUntil: null, answersDue: null, confirmed: false },
-      },
-    })
-    expect(hired.status).toBe(200)
-    // The supplier's zone is not known, so the day is told in UTC.
-    expect(await endOf(ofHire.grantId)).toBe('2032-01-04T00:00:00.000Z')
-  })
 })

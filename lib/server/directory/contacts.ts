@@ -1,6 +1,6 @@
 import { db } from '@/db/client'
 import type { ContactOf } from '@/db/queries/contact'
-import { contactWasWrittenTo, deleteContact, findContact, insertContact, updateContact } from '@/db/queries/contact'
+import { wasWrittenTo, deleteContact, findContact, insertContact, updateContact } from '@/db/queries/contact'
 import { findSupplier } from '@/db/queries/supplier'
 import { findVenue } from '@/db/queries/venue'
 import type { Contact, ContactInput } from '@/lib/contracts/directory'
@@ -61,7 +61,7 @@ export async function removeContact(actor: Actor, input: { contactId: string; ve
   return db().transaction(async (tx) => {
     const contact = await findContact(tx, actor, input.contactId)
     if (!contact) throw notThere('contact')
-    if (await contactWasWrittenTo(tx, actor, contact.id)) {
+    if (await wasWrittenTo(tx, actor, { contactId: contact.id })) {
       throw stillInUse(
         `${contact.name} has had mail or a link, and the record of it names this contact. Change the contact instead.`,
       )

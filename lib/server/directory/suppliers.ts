@@ -1,5 +1,5 @@
 import { db } from '@/db/client'
-import { listContacts } from '@/db/queries/contact'
+import { listContacts, wasWrittenTo } from '@/db/queries/contact'
 import {
   deleteSupplier,
   findSupplier,
@@ -75,6 +75,9 @@ export async function removeSupplier(actor: Actor, input: { supplierId: string; 
     if (!supplier) throw notThere('supplier')
     if (await supplierIsNamed(tx, actor, supplier.id)) {
       throw stillInUse(`${supplier.name} has hires or drums in your records. Take those hires away first.`)
+    }
+    if (await wasWrittenTo(tx, actor, { supplierId: supplier.id })) {
+      throw stillInUse(`Somebody at ${supplier.name} has had mail or a link, and the record of it names them.`)
     }
     const gone = await deleteSupplier(tx, actor, { id: supplier.id, version: input.version })
     await changedOr('supplier', gone ? supplier : undefined, () => findSupplier(tx, actor, supplier.id))

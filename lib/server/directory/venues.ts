@@ -1,6 +1,6 @@
 import { db } from '@/db/client'
 import type { Db } from '@/db/client'
-import { listContacts } from '@/db/queries/contact'
+import { listContacts, wasWrittenTo } from '@/db/queries/contact'
 import { lockShowsOfVenue, setShowZone } from '@/db/queries/show'
 import { listStages } from '@/db/queries/stage'
 import { deleteVenue, findVenue, insertVenue, listVenues, updateVenue, venueHasShows } from '@/db/queries/venue'
@@ -78,6 +78,9 @@ export async function removeVenue(actor: Actor, input: { venueId: string; versio
     if (!venue) throw notThere('venue')
     if (await venueHasShows(tx, actor, venue.id)) {
       throw stillInUse(`${venue.name} has shows. Give them another stage first, or take them off the run.`)
+    }
+    if (await wasWrittenTo(tx, actor, { venueId: venue.id })) {
+      throw stillInUse(`Somebody at ${venue.name} has had mail or a link, and the record of it names them.`)
     }
     const gone = await deleteVenue(tx, actor, { id: venue.id, version: input.version })
     await changedOr('venue', gone ? venue : undefined, () => findVenue(tx, actor, venue.id))

@@ -69,6 +69,7 @@ export async function changeHire(
     const before = await findHire(tx, actor, input.hireId)
     if (!before || !(await lockTour(tx, actor, before.tourId))) throw notThere('hire')
     const was = await hireNow(tx, actor, before.id)
+    if (input.hire.supplierId !== before.supplierId) await assertUnasked(tx, actor, before)
     const values = await checkHire(tx, actor, before.tourId, input.hire, before)
     const changed = await updateHire(tx, actor, { id: before.id, version: input.version, hire: values })
     await changedOr('hire', changed ? was : undefined, () => hireNow(tx, actor, before.id))
@@ -96,6 +97,15 @@ export async function removeHire(actor: Actor, input: { hireId: string; version:
     await notifyLive(tx, actor.partyId, [`run:${row.tourId}`])
     return hire
   })
+}
+
+/** The links of one supplier must not show what another one says, so a hire that was asked stays with its supplier. */
+async function assertUnasked(tx: Db, actor: MemberActor, hire: HireRow): Promise<void> {
+  const hangers = await findHireHangers(tx, actor, hire.id)
+  if (!hangers?.grants && !hangers?.answers) return
+  throw stillInUse(
+    `${hire.supplierName} was asked or has answered about this hire, and that is kept. Add another hire for the other supplier.`,
+  )
 }
 
 function hireAnswer(row: HireRow, covered: readonly { hireId: string; showId: string }[]): Hire {

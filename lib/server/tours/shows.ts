@@ -4,9 +4,10 @@ import type { Db } from '@/db/client'
 import { countShowsOfDay, lockDay, makeShowDay } from '@/db/queries/day'
 import { findPlayer } from '@/db/queries/player'
 import { findRig } from '@/db/queries/rig'
+import { withdrawGrantsOfShow } from '@/db/queries/grant'
 import type { ShowRow } from '@/db/queries/show'
-import { deleteShow, findShow, findShowHangers, insertShow, updateShow } from '@/db/queries/show'
-import { findStageZone } from '@/db/queries/stage'
+import { deleteShow, findShow, findShowHangers, insertShow, lockShow, updateShow } from '@/db/queries/show'
+import { findStageVenue } from '@/db/queries/stage'
 import { findTour } from '@/db/queries/tour'
 import type { Show, ShowInput } from '@/lib/contracts/tour'
 import { audit } from '@/lib/server/audit/audit'
@@ -35,7 +36,7 @@ export async function createShow(
     const id = input.id ?? randomUUID()
     const there = await findShow(tx, actor, id)
     if (there) return showAnswer(there)
-    const values = await checkShow(tx, actor, input.tourId, input.show, null)
+    const { values } = await checkShow(tx, actor, input.tourId, input.show, null)
     if (!(await insertShow(tx, actor, { ...values, id, tourId: input.tourId }))) return thereAlready<Show>(undefined)
     await makeShowDay(tx, actor, values.dayId)
     await audit(tx, actor, 'show.added', { type: 'show', id }, { tourId: input.tourId, ...input.show })
@@ -52,7 +53,8 @@ export async function changeShow(
   return db().transaction(async (tx) => {
     const before = await findShow(tx, actor, input.showId)
     if (!before) throw notThere('show')
-    const values = await checkShow(tx, actor, before.tourId, input.show, before.id)
+    const { values, venueId } = await checkShow(tx, actor, before.tourId, input.show, before.id)
+    if (venueId !== before.venueId) await leaveHouse(tx, actor, before)
     const changed = await updateShow(tx, actor, { id: before.id, version: input.version, show: values })
     const now = showAnswer(await shownNow(tx, actor, before.id))
     await changedOr('show', changed ? now : undefined, () => Promise.resolve(now))
@@ -77,6 +79,7 @@ export async function removeShow(actor: Actor, input: { showId: string; version:
   return db().transaction(async (tx) => {
     const row = await findShow(tx, actor, input.showId)
     if (!row) throw notThere('show')
+    await lockShow(tx, actor, row.id)
     const show = showAnswer(row)
     const hangers = await findShowHangers(tx, actor, row.id)
     if (hangers?.hires) throw stillInUse(`A hire covers ${row.venueName}. Take this show off the hire first.`)
@@ -95,6 +98,22 @@ export async function removeShow(actor: Actor, input: { showId: string; version:
   })
 }
 
+/**
+ * A show that moves to another venue: the links that the first house has must not show what the second one says, and what
+ * the first one said must not count for the second.
+ */
+async function leaveHouse(tx: Db, actor: MemberActor, show: ShowRow): Promise<void> {
+  await lockShow(tx, actor, show.id)
+  const hangers = await findShowHangers(tx, actor, show.id)
+  if (hangers?.answers) {
+    throw stillInUse(
+      `${show.venueName} has answered for this show, and what it said is kept. Add a show at the other venue to this day instead.`,
+    )
+  }
+  for (const { id, purpose } of await withdrawGrantsOfShow(tx, actor, show.id))
+    await audit(tx, actor, 'link.withdraw', { type: 'grant', id }, { purpose })
+}
+
 async function shownNow(tx: Db, actor: MemberActor, id: string): Promise<ShowRow> {
   const row = await findShow(tx, actor, id)
   if (!row) throw notThere('show')
@@ -111,7 +130,7 @@ async function checkShow(tx: Db, actor: MemberActor, tourId: string, show: ShowI
   }
   const rig = await findRig(tx, actor, show.rigId)
   if (rig?.tourId !== tourId) throw fieldFault('show.rigId', 'choose a rig of this tour')
-  const stage = await findStageZone(tx, actor, show.stageId)
+  const stage = await findStageVenue(tx, actor, show.stageId)
   if (!stage) throw fieldFault('show.stageId', 'choose a stage from the directory')
   if (!(await findPlayer(tx, actor, show.playerId))) throw fieldFault('show.playerId', 'choose a player')
   const zone = show.zone ?? stage.zone
@@ -124,5 +143,6 @@ async function checkShow(tx: Db, actor: MemberActor, tourId: string, show: ShowI
   if (answersDue && answersDue.date > day.date) {
     throw fieldFault('show.answersDue', 'at the latest on the day of the show')
   }
-  return { ...same, zone, answersDueAt: answersDue && zone ? instantOfWallTime(answersDue, zone) : null }
+  const values = { ...same, zone, answersDueAt: answersDue && zone ? instantOfWallTime(answersDue, zone) : null }
+  return { values, venueId: stage.venueId }
 }
