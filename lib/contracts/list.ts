@@ -8,7 +8,13 @@ export function listQuerySchema<Sort extends string, Filter extends string>(
   filters: readonly [Filter, ...Filter[]],
 ) {
   return z.object({
-    q: z.string().trim().max(100).catch('').default(''),
+    q: z
+      .string()
+      .trim()
+      .max(100)
+      .refine((text) => !text.includes('\0'))
+      .catch('')
+      .default(''),
     sort: z.enum(sorts).catch(sorts[0]).default(sorts[0]),
     order: z.enum(['up', 'down']).catch('up').default('up'),
     filter: z.enum(filters).catch(filters[0]).default(filters[0]),

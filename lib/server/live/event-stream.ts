@@ -12,12 +12,18 @@ export async function eventStream(input: {
   stillAllowed: () => Promise<boolean>
 }): Promise<Response> {
   const encoder = new TextEncoder()
-  let stop = () => undefined as void
+  let left = false
+  let stop = () => {
+    left = true
+  }
   const stream = new ReadableStream<Uint8Array>({
     async start(controller) {
       let closed = false
       const send = (text: string) => {
-        if (!closed) controller.enqueue(encoder.encode(text))
+        if (closed) return
+        // A reader that left at this very moment: nobody is there to be told, and others still are.
+        if (controller.desiredSize === null || input.signal.aborted) stop()
+        else controller.enqueue(encoder.encode(text))
       }
       const unsubscribe = await liveHub.subscribe(input.partyId, (topics) => {
         const heard = topics.filter((topic) => topic === 'resync' || input.wants(topic))
@@ -37,9 +43,15 @@ export async function eventStream(input: {
         closed = true
         clearInterval(beat)
         unsubscribe()
-        controller.close()
+        try {
+          controller.close()
+        } catch {
+          // Cancelled by its reader, and closed by that.
+        }
       }
       input.signal.addEventListener('abort', stop)
+      // It may have left while the subscription was made; no event tells of that any more.
+      if (input.signal.aborted || left) stop()
       send('retry: 2000\ndata: ["ready"]\n\n')
     },
     cancel() {
