@@ -117,6 +117,17 @@ describe('the PDF of a pack that is sent', () => {
     expect(await jobsOf(mailId)).toBe(0)
   })
 
+  it('gives its mail up when every try before ended with its process', async () => {
+    await storedPack()
+    const mailId = await waitingMail(0)
+    await makePackPdf(
+      { packId, partyId: party.partyId, mailId, replyTokenId: null, benchTokenId: null },
+      { attempts: 6 },
+    )
+    expect((await mailOf(mailId))?.failure).toContain('PDF could not be made')
+    expect(await jobsOf(mailId)).toBe(0)
+  })
+
   it('is not tried again when the pack is too large', async () => {
     await storedPack()
     const [row] = await db().select({ document: pack.document }).from(pack).where(eq(pack.id, packId))

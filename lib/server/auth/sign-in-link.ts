@@ -31,7 +31,8 @@ export async function queueSignInMail(
   page.searchParams.set('email', input.reader.email)
   if (input.next) page.searchParams.set('next', input.next)
   const letter: Letter = {
-    greeting: `Hello ${input.reader.name},`,
+    // Whoever typed a newcomer's name may not be the reader: no stranger's words go out under our own.
+    greeting: input.newcomer ? 'Hello,' : `Hello ${input.reader.name},`,
     paragraphs: [
       input.newcomer
         ? 'Here is your link to begin. It shows that this mail address is yours, and signs you in. It works once, for 20 minutes.'
@@ -43,7 +44,7 @@ export async function queueSignInMail(
   await queueMail(tx, {
     partyId: null,
     kind: 'sign-in',
-    to: { address: input.reader.email, name: input.reader.name },
+    to: { address: input.reader.email, name: input.newcomer ? '' : input.reader.name },
     subject: 'Your link to sign in to Hoopwright',
     text: letterText(letter),
     html: letterHtml(letter),

@@ -18,6 +18,8 @@ import type { TaskPayloads } from './task-names'
 /** Tries before a mail is given up because its PDF cannot be made. */
 const maxTries = 5
 
+class TriedTooOften extends Error {}
+
 type Payload = TaskPayloads['make-pack-pdf']
 type Pack = NonNullable<Awaited<ReturnType<typeof findPack>>>
 
@@ -30,6 +32,8 @@ export async function makePackPdf(payload: Payload, { attempts }: { attempts: nu
   const pack = await findPack(db(), scope, payload.packId)
   if (!pack) return
   try {
+    // The tries before this one ended with their process, so nothing below came to count them.
+    if (attempts > maxTries) throw new TriedTooOften()
     const document = upgradePackDocument(pack.document)
     const rendering = pack.pdfBlobId ? null : await renderInThread({ pack: document, links: linksOf(payload) })
     await db().transaction(async (tx) => {
