@@ -15,7 +15,9 @@ export const emailSchema = z
   .pipe(z.email('write an e-mail address such as crew@example.example'))
 
 /** A calendar date as the wall shows it, YYYY-MM-DD. */
-export const dateSchema = z.iso.date('write a date as YYYY-MM-DD')
+export const dateSchema = z.iso
+  .date('write a date as YYYY-MM-DD')
+  .refine((date) => date >= '2000-01-01' && date < '2200-01-01', 'a date from 2000 to 2199')
 
 /** A wall-clock time without a zone, HH:MM. */
 export const wallTimeSchema = z.string().regex(/^([01]\d|2[0-3]):[0-5]\d$/, 'write a time as HH:MM')
@@ -35,10 +37,14 @@ function isZone(name: string): boolean {
 export const zoneSchema = z.string().refine(isZone, 'choose a time zone from the list, such as Europe/Oslo')
 
 /** An ISO 4217 currency code. */
-export const currencySchema = z.string().regex(/^[A-Z]{3}$/, 'write a currency such as EUR')
+export const currencySchema = z
+  .string()
+  .trim()
+  .toUpperCase()
+  .regex(/^[A-Z]{3}$/, 'write a currency such as EUR')
 
 /** The version of the row that the writer saw; a stale one is refused, never overwritten. */
-export const versionSchema = z.number().int().min(1)
+export const versionSchema = z.number().int().min(1).max(2_147_483_647)
 
 export const roles = ['owner', 'drum-tech', 'tour-manager', 'viewer'] as const
 export const roleSchema = z.enum(roles, 'choose a role')

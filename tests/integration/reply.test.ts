@@ -9,6 +9,7 @@ import { kitEntry } from '@/db/schema/kit'
 import { mail } from '@/db/schema/mail'
 import type { Reply, ReplyAnswered } from '@/lib/contracts/answer'
 import { linkToken } from '@/lib/server/auth/link-token'
+import { takeFromLinkLimit } from '@/lib/server/http/link-limit'
 import { makePackPdf } from '@/lib/server/jobs/make-pack-pdf'
 import type { Sent } from '../helpers/advance-fixture'
 import { addStands, answerBody, asAsked, firstLine, give, issue, readReplyOf, recipientOf, send, sentAs } from '../helpers/advance-fixture'
@@ -289,6 +290,15 @@ describe('a reply link', () => {
     await db().update(grant).set({ withdrawnAt: new Date() }).where(eq(grant.id, sent.grantId))
     for (const ask of parts(sent.path)) expect((await ask()).status).toBe(410)
     expect(await answersOf(tour.showId)).toEqual([])
+  })
+
+  it('is not opened without end from one address, neither its pages nor its streams', async () => {
+    const address = `flood-${randomUUID()}`
+    for (let batch = 0; batch < 60; batch++) await Promise.all(Array.from({ length: 10 }, () => takeFromLinkLimit(address)))
+    const bench = sent.path.replace('/api/r/', '/api/b/')
+    for (const path of [sent.path, `${sent.path}/live`, `${sent.path}/pdf?pack=${sent.packId}`, bench, `${bench}/live`]) {
+      expect((await stranger('GET', path, undefined, { 'x-forwarded-for': address })).status, path).toBe(429)
+    }
   })
 
   it('hears of its own show and of nothing else', async () => {

@@ -5,14 +5,13 @@ import type { RouteContext } from './define-route'
 import { parseRequest } from './define-route'
 import { clientAddress } from './client-address'
 import { errorResponse } from './error-response'
+import { takeFromLinkLimit } from './link-limit'
 import { parseAnswer } from './parse-input'
 import type { Limit } from './rate-limit'
 import { takeFromLimit } from './rate-limit'
 import { assertSameOrigin } from './same-origin'
 
 type Output<Schema> = Schema extends z.ZodType ? z.output<Schema> : undefined
-
-const wrongLinkLimit: Limit = { name: 'link', points: 600, seconds: 60 }
 
 /** A route behind a link (params.token): the token is one permission on one show or hire, and every use is counted. */
 export function definePublicRoute<
@@ -31,7 +30,7 @@ export function definePublicRoute<
   return async (request: Request, context: RouteContext): Promise<Response> => {
     try {
       const { token } = await context.params
-      await takeFromLimit(wrongLinkLimit, clientAddress(request.headers))
+      await takeFromLinkLimit(clientAddress(request.headers))
       const actor = await linkActor(String(token), route.purpose, clientAddress(request.headers))
       if (request.method !== 'GET') assertSameOrigin(request)
       const { query, body } = await parseRequest(route, request, context)

@@ -3,6 +3,7 @@ import { showOfLink } from '@/lib/server/bench/assert-at-bench'
 import { benchTopics } from '@/lib/server/bench/read-bench'
 import { clientAddress } from '@/lib/server/http/client-address'
 import { errorResponse } from '@/lib/server/http/error-response'
+import { takeFromLinkLimit } from '@/lib/server/http/link-limit'
 import { eventStream } from '@/lib/server/live/event-stream'
 
 export const dynamic = 'force-dynamic'
@@ -12,6 +13,7 @@ export async function GET(request: Request, context: { params: Promise<{ token: 
   try {
     const { token } = await context.params
     const address = clientAddress(request.headers)
+    await takeFromLinkLimit(address)
     const actor = await linkActor(token, 'bench', address)
     const topics = new Set<string>(await benchTopics(actor, { showId: showOfLink(actor) }))
     return await eventStream({

@@ -1,6 +1,7 @@
 import { linkActor } from '@/lib/server/auth/link-actor'
 import { clientAddress } from '@/lib/server/http/client-address'
 import { errorResponse } from '@/lib/server/http/error-response'
+import { takeFromLinkLimit } from '@/lib/server/http/link-limit'
 import { eventStream } from '@/lib/server/live/event-stream'
 
 export const dynamic = 'force-dynamic'
@@ -10,6 +11,7 @@ export async function GET(request: Request, context: { params: Promise<{ token: 
   try {
     const { token } = await context.params
     const address = clientAddress(request.headers)
+    await takeFromLinkLimit(address)
     const actor = await linkActor(token, 'reply', address)
     const own = `advance:${actor.showId ?? actor.hireId ?? ''}`
     return await eventStream({

@@ -5,6 +5,7 @@ import { linkActor } from '@/lib/server/auth/link-actor'
 import { clientAddress } from '@/lib/server/http/client-address'
 import type { RouteContext } from '@/lib/server/http/define-route'
 import { errorResponse } from '@/lib/server/http/error-response'
+import { takeFromLinkLimit } from '@/lib/server/http/link-limit'
 import { parseInput } from '@/lib/server/http/parse-input'
 
 const query = z.object({ pack: idSchema })
@@ -13,7 +14,9 @@ const query = z.object({ pack: idSchema })
 export async function GET(request: Request, context: RouteContext): Promise<Response> {
   try {
     const { token } = await context.params
-    const actor = await linkActor(String(token), 'reply', clientAddress(request.headers))
+    const address = clientAddress(request.headers)
+    await takeFromLinkLimit(address)
+    const actor = await linkActor(String(token), 'reply', address)
     const { pack } = parseInput(query, Object.fromEntries(new URL(request.url).searchParams))
     const { bytes, name } = await readReplyPdf(actor, { packId: pack })
     return new Response(Buffer.from(bytes), {
