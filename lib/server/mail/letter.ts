@@ -33,7 +33,7 @@ export function letterHtml(letter: Letter): string {
   const action = letter.action
     ? `<p style="margin:24px 0"><a href="${escape(letter.action.href)}" style="background:#1b1813;color:#fffdf8;padding:14px 22px;text-decoration:none;font-weight:bold;display:inline-block">${escape(plain(letter.action.label))}</a></p>`
     : ''
-  return `<!doctype html><html><body style="margin:0;background:#f5f2ea;color:#1b1813;font:16px/1.5 Verdana,Arial,sans-serif">
+  return `<!doctype html><html lang="en"><body style="margin:0;background:#f5f2ea;color:#1b1813;font:16px/1.5 Verdana,Arial,sans-serif">
 <div style="max-width:560px;margin:0 auto;padding:32px 24px;background:#fffdf8;border-top:4px solid #1b1813">
 ${paragraph(letter.greeting)}${letter.paragraphs.map(paragraph).join('')}${action}${letter.closing ? paragraph(letter.closing) : ''}
 </div></body></html>`

@@ -16,7 +16,7 @@ const gapMm = 4
 /** Height kept for the line of words over the inset. */
 const insetHeadMm = 9
 /** Width of the key beside the inset, which stands there when the drawing leaves the room. */
-const keyMm = 62
+const keyMm = 72
 
 /** The stage to scale with its legend, and the kit drawn large on a page of its own. */
 export function PlotPages({ pack, plot }: { pack: PackDocument; plot: PackPlot }) {
