@@ -24,7 +24,9 @@ export interface LengthFieldProps<Fields extends FieldValues> {
 export function LengthField<Fields extends FieldValues>(props: LengthFieldProps<Fields>) {
   const { form, name, label, units, hint, optional, className } = props
   const { field } = useController({ control: form.control, name })
-  const [text, setText] = useState(() => (typeof field.value === 'number' ? formatLength(field.value, units) : ''))
+  const [text, setText] = useState(() =>
+    typeof field.value === 'number' && Number.isFinite(field.value) ? formatLength(field.value, units) : '',
+  )
   const take = (typed: string) => {
     setText(typed)
     // What cannot be read is no number, and the contract says what is allowed.

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { lengthBound } from '@/lib/staging/length'
 import { currencySchema, emailSchema, idSchema, nameSchema, remarkSchema, versionSchema, zoneSchema } from './common'
 import { listQuerySchema } from './list'
 
@@ -32,7 +33,10 @@ export const venueSchema = venueInputSchema.extend({ id: idSchema, version: vers
 export type Venue = z.infer<typeof venueSchema>
 
 const metres = (low: number, high: number) =>
-  z.number('write a length such as 8 m, 26 ft or 7\'10"').min(low, `at least ${low} m`).max(high, `at most ${high} m`)
+  z
+    .number('write a length such as 8 m, 26 ft or 7\'10"')
+    .min(low, `at least ${lengthBound(low)}`)
+    .max(high, `at most ${lengthBound(high)}`)
 
 export const stageInputSchema = z.object({
   name: nameSchema,

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { lengthBound } from '@/lib/staging/length'
 import { idSchema, nameSchema, versionSchema } from './common'
 import { listQuerySchema } from './list'
 
@@ -12,8 +13,8 @@ export const playerInputSchema = z.object({
   /** Top of the seat over the floor, m. */
   throneHeightM: z
     .number('write a height such as 52 cm or 20 in')
-    .min(0.3, 'at least 0.3 m')
-    .max(1, 'at most 1 m')
+    .min(0.3, `at least ${lengthBound(0.3)}`)
+    .max(1, `at most ${lengthBound(1)}`)
     .nullable(),
 })
 export type PlayerInput = z.infer<typeof playerInputSchema>

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { formatLength, parseLength } from './length'
+import { formatLength, lengthBound, parseLength } from './length'
 
 describe('a typed length', () => {
   // Feet and inches by their definition, 0.3048 m and 0.0254 m.
@@ -32,6 +32,11 @@ describe('a typed length', () => {
 })
 
 describe('a length in words', () => {
+  it('is a bound in both units', () => {
+    // 1 m is 39.37 in: 3 ft 3 in to the nearest inch.
+    expect(lengthBound(1)).toBe('1 m (3\'3")')
+  })
+
   it('is metric to the centimetre', () => {
     expect(formatLength(2.4384, 'metric')).toBe('2.44 m')
     expect(formatLength(10, 'metric')).toBe('10 m')

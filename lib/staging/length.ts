@@ -35,6 +35,10 @@ export function parseLength(text: string, units: LengthUnits): number | null {
   return rest < 12 ? value(inFeet[1]) * metresPerFoot + rest * metresPerInch : null
 }
 
+/** A bound of a typed length, `metres` m, for readers of either unit: "1 m (3'3")". */
+export const lengthBound = (metres: number): string =>
+  `${formatLength(metres, 'metric')} (${formatLength(metres, 'imperial')})`
+
 /** A length of `metres` m in words: "2.44 m" to the centimetre, or "8 ft" and 7'10" to the inch. */
 export function formatLength(metres: number, units: LengthUnits): string {
   if (units === 'metric') return `${Number(metres.toFixed(2))} m`
