@@ -95,21 +95,27 @@ export type SharedKit = z.infer<typeof sharedKitSchema>
 /** A date and a time as the wall at the place shows them. */
 export const wallSchema = z.object({ date: dateSchema, time: wallTimeSchema })
 
-export const showInputSchema = z.object({
-  name: z.string().trim().max(120, 'at most 120 characters'),
-  dayId: z.uuid('choose a day of the run'),
-  rigId: z.uuid('choose a rig of this tour'),
-  stageId: z.uuid('choose a stage from the directory'),
-  playerId: z.uuid('choose a player'),
-  /** Null takes the venue's, and stays unknown while the venue's is. */
-  zone: zoneSchema.nullable(),
-  loadInTime: wallTimeSchema.nullable(),
-  showTime: wallTimeSchema.nullable(),
-  showDayOffset: z.union([z.literal(0), z.literal(1)], 'the same day or the day after'),
-  answersDue: wallSchema.nullable(),
-  slot: slotSchema.nullable(),
-  sharedKit: sharedKitSchema.nullable(),
-})
+export const showInputSchema = z
+  .object({
+    name: z.string().trim().max(120, 'at most 120 characters'),
+    dayId: z.uuid('choose a day of the run'),
+    rigId: z.uuid('choose a rig of this tour'),
+    stageId: z.uuid('choose a stage from the directory'),
+    playerId: z.uuid('choose a player'),
+    /** Null takes the venue's, and stays unknown while the venue's is. */
+    zone: zoneSchema.nullable(),
+    loadInTime: wallTimeSchema.nullable(),
+    showTime: wallTimeSchema.nullable(),
+    showDayOffset: z.union([z.literal(0), z.literal(1)], 'the same day or the day after'),
+    answersDue: wallSchema.nullable(),
+    slot: slotSchema.nullable(),
+    sharedKit: sharedKitSchema.nullable(),
+  })
+  .superRefine(({ loadInTime, showTime, showDayOffset }, context) => {
+    if (!loadInTime || !showTime || showDayOffset > 0 || showTime > loadInTime) return
+    const message = `after the load-in at ${loadInTime}; a show after midnight falls on +1 day`
+    context.addIssue({ code: 'custom', path: ['showTime'], message })
+  })
 export type ShowInput = z.infer<typeof showInputSchema>
 export const createShowSchema = z.object({ id: idSchema.optional(), show: showInputSchema })
 export const updateShowSchema = z.object({ version: versionSchema, show: showInputSchema })

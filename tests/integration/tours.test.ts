@@ -284,6 +284,7 @@ describe('a show', () => {
   it.each([
     ['a zone that nobody keeps', { zone: 'Europe/Arvic' }, ['show.zone']],
     ['a time past midnight', { showTime: '24:10' }, ['show.showTime']],
+    ['a show after midnight on the day itself', { showTime: '00:30', showDayOffset: 0 }, ['show.showTime']],
     ['two days after', { showDayOffset: 2 }, ['show.showDayOffset']],
     ['a deadline after the show', { answersDue: { date: '2031-10-15', time: '10:00' } }, ['show.answersDue']],
     ['half a deadline', { answersDue: { date: '2031-10-01', time: '' } }, ['show.answersDue.time']],
