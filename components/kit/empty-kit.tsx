@@ -1,6 +1,7 @@
 'use client'
 
 import type { ReactNode } from 'react'
+import { useState } from 'react'
 import { Button } from '@/components/ui/button'
 import { EmptyState } from '@/components/ui/empty-state'
 import { Notice } from '@/components/ui/notice'
@@ -11,6 +12,8 @@ import { WaitingForConnection } from './waiting-for-connection'
 /** What to do first in a kit that holds nothing. */
 export function EmptyKit({ rigId, mayEdit, others }: { rigId: string; mayEdit: boolean; others: ReactNode }) {
   const add = useAddSet(rigId)
+  // Made once, so that pressing twice is the same request.
+  const [five] = useState(() => fivePieceKit().map((entry) => ({ id: crypto.randomUUID(), entry })))
   if (!mayEdit)
     return (
       <EmptyState title="Nothing in this kit yet">
@@ -22,11 +25,7 @@ export function EmptyKit({ rigId, mayEdit, others }: { rigId: string; mayEdit: b
       title="Nothing in this kit yet"
       action={
         <>
-          <Button
-            kind="primary"
-            busy={add.isPending && 'Adding five drums'}
-            onClick={() => add.mutate(fivePieceKit().map((entry) => ({ id: crypto.randomUUID(), entry })))}
-          >
+          <Button kind="primary" busy={add.isPending && 'Adding five drums'} onClick={() => add.mutate(five)}>
             Add a five-piece kit
           </Button>
           {others}
