@@ -168,7 +168,7 @@ export function PlotEditor(props: PlotEditorProps) {
         <div className={classes('grid gap-4', mayEdit && 'lg:grid-cols-[13rem_minmax(0,1fr)]')}>
           {mayEdit && (
             <div className="order-3 lg:order-none lg:max-h-[max(26rem,calc(100dvh-20.5rem))] lg:overflow-y-auto lg:pr-1">
-              <Shelf document={document} kit={kit} armed={armed} onArm={setArmed} onPlace={putByItself} />
+              <Shelf document={document} kit={kit} units={units} armed={armed} onArm={setArmed} onPlace={putByItself} />
             </div>
           )}
           <div className="contents lg:flex lg:min-w-0 lg:flex-col lg:gap-4">

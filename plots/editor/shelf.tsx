@@ -7,11 +7,13 @@ import { Field } from '@/components/ui/field'
 import { TextInput } from '@/components/ui/text-input'
 import type { PlotDocument } from '../model/document'
 import type { KitById } from '../model/kit-piece'
+import type { LengthUnits } from '../symbols/length-words'
 import { shelfFromKit, shelfOfKinds, type ShelfItem } from '../tools/shelf'
 
 export interface ShelfProps {
   document: PlotDocument
   kit: KitById
+  units: LengthUnits
   /** What is in hand, waiting for a press on the plot. */
   armed: ShelfItem | null
   onArm: (item: ShelfItem | null) => void
@@ -19,10 +21,10 @@ export interface ShelfProps {
 }
 
 /** What the kit holds and the plot does not yet, then every other piece. */
-export function Shelf({ document, kit, armed, onArm, onPlace }: ShelfProps) {
+export function Shelf({ document, kit, units, armed, onArm, onPlace }: ShelfProps) {
   const [query, setQuery] = useState('')
   const fromKit = shelfFromKit(document, kit)
-  const others = shelfOfKinds(query)
+  const others = shelfOfKinds(query, units)
   const list = (items: readonly ShelfItem[]) => (
     <ul>
       {items.map((item) => (
@@ -71,6 +73,15 @@ export function Shelf({ document, kit, armed, onArm, onPlace }: ShelfProps) {
   )
 }
 
+/** The last one of an entry leaves the shelf when it is placed; the focus then goes to its neighbour, not to the page. */
+function keepPlaceInList(placed: HTMLButtonElement) {
+  const line = placed.closest('li')
+  const neighbour = (line?.nextElementSibling ?? line?.previousElementSibling)?.querySelector('button')
+  requestAnimationFrame(() => {
+    if (!placed.isConnected) neighbour?.focus()
+  })
+}
+
 function ShelfLine({
   item,
   isArmed,
@@ -97,6 +108,7 @@ function ShelfLine({
           if (event.key === 'Enter') {
             event.preventDefault()
             onPlace(item)
+            keepPlaceInList(event.currentTarget)
           } else onKeyDown?.(event)
         }}
         onClick={() => onArm(isArmed ? null : item)}

@@ -2,6 +2,7 @@ import { footprintsOverlap } from '../geometry/footprint'
 import { distanceM, plotPoint, type PlotPoint } from '../geometry/point'
 import { newPiece, pieceCentre, piecesInOrder, type Piece, type PlotDocument } from '../model/document'
 import type { KitById, KitPiece } from '../model/kit-piece'
+import { areaWords, type LengthUnits } from '../symbols/length-words'
 import { pieceFootprint } from '../symbols/piece-footprint'
 import { pieceKindOf, pieceKinds, pieceLevel, type PieceKind } from '../symbols/piece-kinds'
 import { tidy } from './move-pieces'
@@ -40,11 +41,11 @@ export function shelfFromKit(document: PlotDocument, kit: KitById): ShelfItem[] 
 }
 
 /** Other pieces whose word, other names or size hold what was typed; all of them for nothing typed. */
-export function shelfOfKinds(query: string): ShelfItem[] {
+export function shelfOfKinds(query: string, units: LengthUnits): ShelfItem[] {
   const wanted = query.trim().toLowerCase()
   return pieceKinds
     .filter((kind) => kind.onShelf)
-    .map((kind) => ({ kind, hint: `${kind.widthM} × ${kind.depthM} m` }))
+    .map((kind) => ({ kind, hint: areaWords(kind.widthM, kind.depthM, units) }))
     .filter(({ kind, hint }) =>
       [kind.word, ...kind.alsoFoundBy, hint].some((text) => text.toLowerCase().includes(wanted)),
     )

@@ -122,10 +122,12 @@ describe('the shelf', () => {
   })
 
   it('finds other pieces by name, other names or size', () => {
-    expect(shelfOfKinds('wed').map((one) => one.name)).toEqual(['Wedge'])
-    expect(shelfOfKinds('Monitor').map((one) => one.name)).toEqual(['Wedge'])
-    expect(shelfOfKinds('2.4 ×').map((one) => one.name)).toEqual(['Riser'])
-    expect(shelfOfKinds('nothing like it')).toEqual([])
+    expect(shelfOfKinds('wed', 'metric').map((one) => one.name)).toEqual(['Wedge'])
+    expect(shelfOfKinds('Monitor', 'metric').map((one) => one.name)).toEqual(['Wedge'])
+    expect(shelfOfKinds('2.4 ×', 'metric').map((one) => one.name)).toEqual(['Riser'])
+    expect(shelfOfKinds('nothing like it', 'metric')).toEqual([])
+    // 2.4 m is 94.5 in: 7 ft 10 in to the nearest inch.
+    expect(shelfOfKinds('7 ft 10', 'imperial').map((one) => one.name)).toEqual(['Riser'])
   })
 
   it('places a drum as a reference to the kit and nothing more', () => {
@@ -148,7 +150,7 @@ describe('the shelf', () => {
 
   it('finds free ground', () => {
     const crowded: PlotDocument = { ...emptyDocument, pieces: { a: newPiece({ id: 'a', kind: 'amp', xM: 0, yM: 2 }) } }
-    const amp = item(shelfOfKinds('amp'), 'Amp')
+    const amp = item(shelfOfKinds('amp', 'metric'), 'Amp')
     const spot = pieceByItself(amp, 'b', crowded, rightHandedKit, plotPoint(0, 2))
     expect(Math.abs(spot.xM) >= 0.65 || Math.abs(spot.yM - 2) >= 0.35).toBe(true)
   })
