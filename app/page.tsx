@@ -38,6 +38,7 @@ export default function Landing() {
               <ButtonLink kind="primary" href="/sign-in" className="px-7 py-3 text-lg">
                 Sign in to your party
               </ButtonLink>
+              <ButtonLink href="/sign-up">Begin a party</ButtonLink>
               <p className="max-w-64 text-sm text-soft">
                 Venue, supplier or local tech? Open the link in your mail; you need no account.
               </p>

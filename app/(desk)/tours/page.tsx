@@ -4,6 +4,7 @@ import { ListTools } from '@/components/list/list-tools'
 import { Pages } from '@/components/list/pages'
 import { SortHead } from '@/components/list/sort-head'
 import { AddTour } from '@/components/run/add-tour'
+import { ButtonLink } from '@/components/ui/button-link'
 import { EmptyState } from '@/components/ui/empty-state'
 import { Table, TableCell, TableHead, TableRow } from '@/components/ui/table'
 import { RefreshOnLive } from '@/lib/client/live-provider'
@@ -35,7 +36,14 @@ export default async function ToursPage({ searchParams }: PageProps<'/tours'>) {
       <h1 className="text-4xl">Tours</h1>
       {nothingYet ? (
         <div className="mt-6 max-w-3xl">
-          <EmptyState title="No tour yet">
+          <EmptyState
+            title="No tour yet"
+            action={
+              !mayEdit && rolesMay(actor.roles, 'member:manage') ? (
+                <ButtonLink href="/party">Invite the party or take a role yourself</ButtonLink>
+              ) : undefined
+            }
+          >
             {mayEdit
               ? 'Begin with its name, its first rig and its dates. The kit, the plot and every venue then hang on the days of its run.'
               : 'The tour manager makes the first tour; its kit, plot and run then stand here.'}
