@@ -1,6 +1,8 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
+import { useEffect } from 'react'
+import { useWatch } from 'react-hook-form'
 import { ChoiceField } from '@/components/form/choice-field'
 import { NumberField } from '@/components/form/number-field'
 import { SaveForm } from '@/components/form/save-form'
@@ -85,6 +87,12 @@ function HireFields({ tourId, hire, choices, onClose }: HireFormProps) {
     },
   })
   const { form } = saving
+  const { getValues, setValue } = form
+  const supplierId = useWatch({ control: form.control, name: 'supplierId' })
+  const usualCurrency = choices.suppliers.find(({ id }) => id === supplierId)?.currency ?? null
+  useEffect(() => {
+    if (usualCurrency && !getValues('currency')) setValue('currency', usualCurrency)
+  }, [usualCurrency, getValues, setValue])
   const supplierOptions = choices.suppliers.map(({ id, name }) => ({ value: id, label: name }))
   const showOptions = choices.shows.map(({ id, label }) => ({ value: id, label }))
   const labelOf = (options: readonly { value: string; label: string }[], value: unknown) =>
