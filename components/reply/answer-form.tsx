@@ -27,6 +27,12 @@ const choices: { kind: AnswerKind; label: string }[] = [
   { kind: 'cant', label: "Can't" },
 ]
 
+/** Today by the reader's own clock, YYYY-MM-DD. */
+function today(): string {
+  const now = new Date()
+  return new Date(now.getTime() - now.getTimezoneOffset() * 60_000).toISOString().slice(0, 10)
+}
+
 /** One line's answer: as asked and can't in one press, the others with their particulars, a count apart when it is several. */
 export function AnswerForm({ line, before, onAnswer, keepLabel = 'Keep this answer' }: AnswerFormProps) {
   const [kind, setKind] = useState<AnswerKind | null>(null)
@@ -47,7 +53,7 @@ export function AnswerForm({ line, before, onAnswer, keepLabel = 'Keep this answ
   }
   function keep() {
     const content = draftContent(line, draft)
-    const found = answerFault(content, line)
+    const found = answerFault(content, line, today())
     setFault(found)
     if (!found) onAnswer({ content, remark: remark.trim() })
   }

@@ -130,7 +130,9 @@ export function ReplyPage({ initial, token }: { initial: Reply; token: string })
             </Notice>
           ) : state.reply.closed || closing ? (
             <Notice kind="success" word="All from you">
-              You said that this is all. Until a line is settled you can still change it.
+              You said that this is all.
+              {open.length > 0 && ` ${open.length === 1 ? '1 line has' : `${open.length} lines have`} no answer yet.`} Until a
+              line is settled you can still change it.
             </Notice>
           ) : (
             <Button kind={open.length === 0 ? 'primary' : 'secondary'} onClick={() => withName(null, (byName) => session.close(byName))}>

@@ -40,6 +40,14 @@ describe('answerFault', () => {
     )
   })
 
+  it('refuses a date that is over where today is known, and takes today', () => {
+    const by = (date: string) => answer({ notYet: [{ n: 1, by: date }] })
+    const line = { kind: 'hardware', count: 1 }
+    expect(answerFault(by('2031-10-04'), line, '2031-10-05')).toContain('still to come')
+    expect(answerFault(by('2031-10-05'), line, '2031-10-05')).toBeNull()
+    expect(answerFault(by('2031-10-04'), line)).toBeNull()
+  })
+
   it.each([
     ['a broken count', answer({ asAsked: 1.5 }), 'hardware', 1.5],
     ['a negative count', answer({ asAsked: 2, cant: -1 }), 'hardware', 1],

@@ -35,9 +35,14 @@ export function answerCount(content: AnswerContent): number {
 
 /**
  * What is wrong with an answer to a line of a kind and count, as a sentence that says what is allowed; null when it holds.
- * Checks counts (whole, not negative, together the count asked for), kinds of the "instead" and their sizes, and dates.
+ * Checks counts (whole, not negative, together the count asked for), kinds of the "instead" and their sizes, and dates: where
+ * the answerer's `today` (YYYY-MM-DD) is given, what is not known yet is known on it or after.
  */
-export function answerFault(content: AnswerContent, line: { readonly kind: string; readonly count: number }): string | null {
+export function answerFault(
+  content: AnswerContent,
+  line: { readonly kind: string; readonly count: number },
+  today: string | null = null,
+): string | null {
   const counts = [content.asAsked, content.cant, ...content.instead.map((part) => part.n), ...content.notYet.map((part) => part.n)]
   if (counts.some((count) => !Number.isInteger(count) || count < 0)) return 'counts are whole numbers from 0'
   if ([...content.instead, ...content.notYet].some((part) => part.n === 0)) return 'each part speaks of at least 1'
@@ -50,7 +55,9 @@ export function answerFault(content: AnswerContent, line: { readonly kind: strin
     const fault = insteadFault(what)
     if (fault) return fault
   }
-  return content.notYet.some(({ by }) => !isDate(by)) ? 'give the date by which you know, as YYYY-MM-DD' : null
+  if (content.notYet.some(({ by }) => !isDate(by))) return 'give the date by which you know, as YYYY-MM-DD'
+  const isOver = today !== null && content.notYet.some(({ by }) => by < today)
+  return isOver ? 'give a date by which you know that is still to come' : null
 }
 
 function insteadFault(what: InsteadWhat): string | null {
