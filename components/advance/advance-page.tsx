@@ -60,7 +60,8 @@ export function AdvancePage({ view, maySend, maySettle, mayTakeDown, mayWithdraw
           {view.lines.length === 0 ? (
             <div className="mt-3">
               <EmptyState title="Nothing is asked here yet">
-                Issue a revision whose kit holds something rented or the venue&apos;s; each such thing becomes a line.
+                Once a revision is issued, each thing of its kit that is to come from here becomes a line. What a hire covers
+                is asked of its supplier.
               </EmptyState>
             </div>
           ) : (

@@ -34,6 +34,8 @@ export function SendPanel({ view }: { view: AdvanceView }) {
   // Made once for what is ticked, so that sending again after a lost answer is the same sending.
   const [ids, setIds] = useState<ReadonlyMap<string, string>>(new Map())
   const send = useAct(sendPacks)
+  // The sending that the outcome tells of.
+  const [heldBack, setHeldBack] = useState(false)
   const preview = usePackPreview()
   const revision = view.revisions.find((entry) => entry.id === revisionId)
 
@@ -66,6 +68,7 @@ export function SendPanel({ view }: { view: AdvanceView }) {
     const known = new Map(ids)
     for (const entry of chosen) if (!known.has(entry.key)) known.set(entry.key, crypto.randomUUID())
     setIds(known)
+    setHeldBack(holdBack)
     send.run(
       {
         ...{ revisionId, holdBack },
@@ -143,7 +146,7 @@ export function SendPanel({ view }: { view: AdvanceView }) {
       </div>
       {send.trouble && <Notice kind="error">{send.trouble}</Notice>}
       {preview.error && <Notice kind="error">{preview.error.message}</Notice>}
-      {send.answer && <Outcomes outcomes={send.answer.outcomes} choices={all} />}
+      {send.answer && <Outcomes outcomes={send.answer.outcomes} choices={all} heldBack={heldBack} />}
     </form>
   )
 }
@@ -157,12 +160,25 @@ function sendWords(chosen: readonly Choice[], number: number | undefined): strin
   return chosen.length === 1 ? `${what} to ${one.label.split(',')[0]}` : `${what} to ${chosen.length} people`
 }
 
-function Outcomes({ outcomes, choices }: { outcomes: readonly { dispatchId: string; contactId: string; outcome: string; message: string }[]; choices: readonly Choice[] }) {
+interface OutcomesProps {
+  outcomes: readonly { dispatchId: string; contactId: string; outcome: string; message: string }[]
+  choices: readonly Choice[]
+  heldBack: boolean
+}
+
+function Outcomes({ outcomes, choices, heldBack }: OutcomesProps) {
   const refused = outcomes.filter((entry) => entry.outcome === 'refused')
   const queued = outcomes.length - refused.length
+  const packs = queued === 1 ? '1 pack' : `${queued} packs`
   return (
     <>
-      {queued > 0 && <Notice kind="success">{queued === 1 ? '1 pack is on its way.' : `${queued} packs are on their way.`}</Notice>}
+      {queued > 0 && (
+        <Notice kind="success">
+          {heldBack
+            ? `${packs} held back for ${holdBackSeconds} seconds. Recipients says how it stands.`
+            : `${packs} sent off. Recipients says when the mail has arrived.`}
+        </Notice>
+      )}
       {refused.map((entry) => (
         <Notice key={entry.dispatchId} kind="error">
           {choices.find((other) => other.contactId === entry.contactId)?.label ?? 'A recipient'}: {entry.message}
