@@ -122,7 +122,7 @@ export function ChannelTable({
       ) : (
         <>
           <Table
-            caption={`${channels.length} channels, ${channels.filter((channel) => channel.phantom).length} with phantom`}
+            caption={`${channels.length === 1 ? '1 channel' : `${channels.length} channels`}, ${channels.filter((channel) => channel.phantom).length} with phantom`}
             head={
               <>
                 <TableHead>Number</TableHead>

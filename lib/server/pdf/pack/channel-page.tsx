@@ -12,7 +12,7 @@ export function ChannelPage({ pack }: { pack: PackDocument }) {
     <PageFrame pack={pack} title="Channel list">
       <View style={{ marginBottom: mm(2) }}>
         <Plain>
-          {`${pack.channels.length} channels, ${phantom} with phantom. P48 is 48 ± 4 V, at most 10 mA an input (IEC 61938).`}
+          {`${pack.channels.length === 1 ? '1 channel' : `${pack.channels.length} channels`}, ${phantom} with phantom. P48 is 48 ± 4 V, at most 10 mA an input (IEC 61938).`}
         </Plain>
       </View>
       <RuledTable

@@ -36,7 +36,8 @@ export default async function RevisionPage({ params }: PageProps<'/tours/[tourId
           <p className="mt-1 max-w-prose whitespace-pre-line">{revision.note}</p>
           <p className="mt-1 text-sm text-soft">
             Issued by {revision.issuedBy.name}, <span className="figures">{instantWords(revision.issuedAt, null)}</span>
-            . {revision.pieces} pieces on the plot, {revision.channels} channels. It never changes.
+            . {revision.pieces === 1 ? '1 piece' : `${revision.pieces} pieces`} on the plot,{' '}
+            {revision.channels === 1 ? '1 channel' : `${revision.channels} channels`}. It never changes.
           </p>
         </div>
         <ButtonLink href={`/tours/${tourId}/revisions?rig=${revision.rigId}` as Route}>
@@ -100,7 +101,7 @@ function readersOf(run: Run, rigId: string): PackReader[] {
     ...shows.map((show): PackReader => ({
       of: { showId: show.id },
       name: show.venueName,
-      detail: [dateWords(show.date), show.town].filter(Boolean).join(', '),
+      detail: [show.name, dateWords(show.date), show.town].filter(Boolean).join(', '),
     })),
     ...run.hires.flatMap((hire): PackReader[] => {
       const covered = hire.showIds.filter((id) => ids.has(id)).length
