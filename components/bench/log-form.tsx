@@ -43,6 +43,8 @@ export function LogForm(props: LogFormProps) {
   const [correcting, setCorrecting] = useState<BenchReading | null>(null)
   const input = useRef<HTMLInputElement>(null)
   const at = correcting?.lug ?? lug
+  // A phone's number pad has no minus: under or over is chosen beside it. A typed sign is taken as it stands.
+  const bySide = readBy === 'cents' && !/^\s*[-+−]/.test(typed)
 
   function pick(next: number) {
     // Only a lug that is picked is corrected: one that another phone reads meanwhile simply has two readings.
@@ -60,8 +62,7 @@ export function LogForm(props: LogFormProps) {
       input.current?.focus()
       return
     }
-    // A phone's number pad has no minus: under or over is chosen beside it. A typed sign is taken as it stands.
-    const value = readBy === 'cents' && side === 'under' && !/^\s*[-+−]/.test(typed) ? -parsed.value : parsed.value
+    const value = bySide && side === 'under' ? -parsed.value : parsed.value
     const reading = session.log({
       ...{ entryId: drum.entryId, side: head.side, lug: at, value, unit: readBy },
       method: readBy === 'gauge' ? 'gauge' : 'tap-typed',
@@ -115,7 +116,7 @@ export function LogForm(props: LogFormProps) {
             <NumberInput
               {...control}
               ref={input}
-              unit={unitWords[readBy]}
+              unit={bySide ? `cents ${side === 'under' ? 'low' : 'high'}` : unitWords[readBy]}
               value={typed}
               enterKeyHint="next"
               maxLength={12}
