@@ -80,6 +80,12 @@ export async function findAnswerEvent(db: Db, scope: Scope, id: string) {
   return rows[0]
 }
 
+/** How much was said about one show or hire. */
+export async function countAnswerEvents(db: Db, scope: Scope, subject: { showId: string | null; hireId: string | null }): Promise<number> {
+  const own = subject.showId === null ? eq(answerEvent.hireId, subject.hireId ?? '') : eq(answerEvent.showId, subject.showId)
+  return db.$count(answerEvent, and(eq(answerEvent.partyId, scope.partyId), own))
+}
+
 /** False when an answer of that id is there already, whoever's it is. */
 export async function insertAnswerEvent(db: Db, scope: Scope, row: Omit<typeof answerEvent.$inferInsert, 'partyId' | 'sequence'>): Promise<boolean> {
   const rows = await db

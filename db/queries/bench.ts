@@ -197,6 +197,15 @@ export async function findSignOff(db: Db, scope: Scope, id: string): Promise<Sig
   return rows[0]
 }
 
+/** How much a show's bench holds. */
+export async function countBench(db: Db, scope: Scope, showId: string): Promise<{ readings: number; signOffs: number }> {
+  const [readings, signOffs] = [
+    await db.$count(reading, and(eq(reading.partyId, scope.partyId), eq(reading.showId, showId))),
+    await db.$count(signOff, and(eq(signOff.partyId, scope.partyId), eq(signOff.showId, showId))),
+  ]
+  return { readings, signOffs }
+}
+
 /** False when the id is taken, whoever's it is. */
 export async function insertSignOff(
   db: Db,

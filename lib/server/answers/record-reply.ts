@@ -1,6 +1,6 @@
 import { db } from '@/db/client'
 import type { Db } from '@/db/client'
-import { findAnswerEvent, insertAnswerEvent, lockAnswers } from '@/db/queries/answer'
+import { countAnswerEvents, findAnswerEvent, insertAnswerEvent, lockAnswers } from '@/db/queries/answer'
 import { countTokenUse } from '@/db/queries/grant'
 import { answerFault } from '@/lib/advance/answer'
 import type { ReplyAnswered, ReplyEvent } from '@/lib/contracts/answer'
@@ -11,6 +11,9 @@ import { assertLink } from '@/lib/server/auth/actor'
 import { notifyAnswered } from './notify-answered'
 import type { LoadedReply } from './reply-lines'
 import { loadReply, replyLines } from './reply-lines'
+
+/** Far more than any advance needs, and below what is read back of it at once: a link cannot bury what was said. */
+export const mostAnswers = 5000
 
 type LineEvent = Extract<ReplyEvent, { kind: 'answer' }>
 
@@ -32,6 +35,9 @@ async function keep(tx: Db, actor: LinkActor, event: ReplyEvent): Promise<void> 
   const before = await loadReply(tx, actor)
   const revisionId = event.kind === 'answer' ? await assertAnswerable(tx, actor, before, event) : before.packs[0]?.revisionId
   if (!revisionId) throw new AppError('not-found', 'No pack was sent with this link, so there is nothing to answer.')
+  if ((await countAnswerEvents(tx, actor, actor)) >= mostAnswers) {
+    throw new AppError('conflict', 'More was said through these links than they take. Nothing was changed; please write to whoever sent you the pack.')
+  }
   const made = await insertAnswerEvent(tx, actor, {
     ...{ id: event.id, showId: actor.showId, hireId: actor.hireId, revisionId, kind: event.kind, byName: event.byName },
     ...{ grantId: actor.grantId, tokenId: actor.tokenId },

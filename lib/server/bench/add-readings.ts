@@ -23,6 +23,7 @@ import { notifyLive } from '@/lib/server/live/notify-live'
 import { notThere } from '@/lib/server/refusals'
 import { assertAtBench } from './assert-at-bench'
 import { benchReading } from './bench-answer'
+import { assertRoomOnBench } from './bench-limit'
 import type { NightSheet } from './read-night-sheet'
 import { readNightSheet } from './read-night-sheet'
 
@@ -48,6 +49,7 @@ export async function addReadings(
     })
     const fresh = input.readings.flatMap((reading, index) => (known.has(reading.id) ? [] : [{ reading, index }]))
     if (fresh.length > 0) {
+      await assertRoomOnBench(tx, actor, show.id, { readings: fresh.length })
       const sheet = await readNightSheet(tx, actor, show)
       if (!sheet)
         throw new AppError(

@@ -11,6 +11,7 @@ import { notifyLive } from '@/lib/server/live/notify-live'
 import { fieldFault, notThere, thereAlready } from '@/lib/server/refusals'
 import { assertAtBench } from './assert-at-bench'
 import { benchSignOff } from './bench-answer'
+import { assertRoomOnBench } from './bench-limit'
 import { readNightSheet } from './read-night-sheet'
 
 /** Hands a drum over as tuned, by name, or takes that back. Nothing is ever rewritten: each adds one. */
@@ -28,6 +29,7 @@ export async function signOffDrum(
     if (!show) throw notThere('show')
     const there = await findSignOff(tx, actor, id)
     if (there) return sameSignOff(there, input)
+    await assertRoomOnBench(tx, actor, show.id, { signOffs: 1 })
     const sheet = await readNightSheet(tx, actor, show)
     if (!sheet?.drums.some((drum) => drum.id === entryId))
       throw fieldFault('entryId', 'this drum is not on the sheet of this show')
