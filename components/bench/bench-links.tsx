@@ -105,7 +105,7 @@ export function BenchLinks({ showId, zone, links, mayPrint, mayWithdraw }: Bench
                 {mayWithdraw && link.state === 'works' && (
                   <Button
                     busy={withdraw.isPending && withdraw.variables === link.grantId && 'Withdrawing'}
-                    onClick={() => withdraw.mutate(link.grantId)}
+                    onClick={() => withdraw.mutate(link.grantId, { onSuccess: () => print.reset() })}
                   >
                     Withdraw this link
                   </Button>
