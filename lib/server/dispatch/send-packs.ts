@@ -75,7 +75,12 @@ async function sendOne(tx: Db, actor: MemberActor, revision: Revision, recipient
   })
   // Only an id of another party is taken and yet not found above.
   if (!made) throw new AppError('conflict', 'This id is taken. Please send it again with another one.')
-  await enqueue(tx, 'make-pack-pdf', { packId: pack.packId, partyId: actor.partyId, mailId, replyTokenId, benchTokenId })
+  await enqueue(
+    tx,
+    'make-pack-pdf',
+    { packId: pack.packId, partyId: actor.partyId, mailId, replyTokenId, benchTokenId },
+    { priority: 2 },
+  )
   await audit(tx, actor, 'dispatch.send', { type: 'dispatch', id: dispatchId }, {
     ...{ ...of, contactId: contact.id, revisionId: revision.id, number: pack.revisionNumber, holdSeconds },
   })

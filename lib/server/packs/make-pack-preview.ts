@@ -30,7 +30,7 @@ export async function makePackPreview(actor: Actor, input: MakePack): Promise<Pa
       tx,
       'make-pack-pdf',
       { packId, partyId: actor.partyId, mailId: null, replyTokenId: null, benchTokenId: null },
-      { maxAttempts: 5 },
+      { maxAttempts: 5, priority: 1 },
     )
     const made = await findPack(tx, actor, packId)
     if (!made) throw new Error('the pack was just written')
