@@ -27,7 +27,7 @@ export function BenchApp({ initial, place, owner, ownName }: BenchAppProps) {
   const head = drum?.heads.find(({ side }) => side === open?.side)
   return (
     <div className="thumb mx-auto max-w-xl px-4 pb-16">
-      <div className="flex min-h-12 items-center justify-between gap-3">
+      <header className="flex min-h-12 items-center justify-between gap-3">
         {drum && head ? (
           <a href="#" className="inline-flex min-h-12 items-center font-bold underline underline-offset-4">
             All drums
@@ -36,7 +36,7 @@ export function BenchApp({ initial, place, owner, ownName }: BenchAppProps) {
           place.kind === 'link' && <span className="name text-lg">Hoopwright</span>
         )}
         {place.kind === 'link' && <ThemeToggle place="bench" />}
-      </div>
+      </header>
       <SendState state={state} retry={session.retryNow} letGo={session.letGo} drums={bench.drums} />
       {drum && head ? (
         <HeadPage
