@@ -85,7 +85,7 @@ function HeadBoard({ bench, drum, head }: { bench: Bench; drum: BenchDrum; head:
           )}
         </Fact>
         {head.tap && (
-          <Fact name="it may lie">
+          <Fact name="between">
             {hzWords(head.tap.lowHz)}–{hzWords(head.tap.highHz)}
           </Fact>
         )}
@@ -94,7 +94,7 @@ function HeadBoard({ bench, drum, head }: { bench: Bench; drum: BenchDrum; head:
             {head.note.name} {hzWords(head.note.hz)} Hz
           </Fact>
         )}
-        {head.gauge !== null && <Fact name="gauge">{head.gauge} on that gauge</Fact>}
+        {head.gauge !== null && <Fact name="gauge">{head.gauge}</Fact>}
         {state.mean !== null && (
           <Fact name="mean">
             {view.basis === 'gauge' ? `${state.mean.toFixed(1)} on the gauge` : `${hzWords(state.mean)} Hz`}

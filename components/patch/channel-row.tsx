@@ -111,7 +111,7 @@ export function ChannelRow({ channel, choices, taken, isGone, mayEdit, onChange,
         <input
           type="checkbox"
           aria-label={`${label}, phantom`}
-          className="size-5 translate-y-1 accent-ink"
+          className="mt-2 size-5 accent-ink"
           checked={phantom}
           onChange={(event) => void save({ phantom: event.currentTarget.checked })}
         />

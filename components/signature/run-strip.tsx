@@ -79,7 +79,7 @@ export function RunStrip({ label, tour, days, hires }: RunStripProps) {
           href={tour.href}
           aria-current={tour.chosen ? 'page' : undefined}
           className={classes(
-            'sticky left-0 z-10 flex w-24 shrink-0 flex-col justify-center border-r border-line px-3 py-2 focus-visible:-outline-offset-3 sm:w-28',
+            'sticky left-0 z-10 flex w-24 shrink-0 flex-col justify-center border-r border-line px-3 py-2 focus-visible:-outline-offset-3',
             tour.chosen ? 'bg-ink text-paper' : 'bg-wash',
           )}
         >
@@ -90,7 +90,7 @@ export function RunStrip({ label, tour, days, hires }: RunStripProps) {
           {days.map((day, index) => (
             <li key={day.id} className="row-start-1 flex min-w-0" style={{ gridColumn: index + 1 }}>
               {day.shows.length === 0 ? (
-                <div className="px-2 py-2 text-xs text-soft">
+                <div className="px-1.5 py-2 text-xs text-soft">
                   <div>{dayLabel(day.date, index === 0)}</div>
                   {day.remark && <div>{day.remark}</div>}
                 </div>
@@ -120,7 +120,7 @@ function ShowCell({ show, day }: { show: RunStripShow; day: string }) {
       href={show.href}
       aria-current={show.chosen ? 'page' : undefined}
       className={classes(
-        'flex min-w-0 grow basis-0 flex-col border-l border-paper px-2 py-2 text-xs focus-visible:-outline-offset-3',
+        'flex min-w-0 grow basis-0 flex-col border-l border-paper px-1.5 py-2 text-xs focus-visible:-outline-offset-3',
         show.chosen ? 'bg-ink text-paper' : 'bg-wash hover:bg-line',
       )}
     >

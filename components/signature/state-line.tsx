@@ -25,7 +25,7 @@ export function StateLine(props: StateLineProps) {
   const look = stateLooks[state]
   return (
     <Tag id={id} data-state={state} className={classes('bg-sheet px-3 py-2', look.edge, className)}>
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-1">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-1 lg:items-start">
         <div className="min-w-0 grow basis-52">
           <div className="font-bold">{title}</div>
           {detail && <div className="text-sm text-soft">{detail}</div>}

@@ -76,7 +76,7 @@ export function TableCell({ numeric, className, ...rest }: TableCellProps) {
   return (
     <td
       {...rest}
-      className={classes('px-2 py-1.5 align-baseline first:pl-0 last:pr-0', numeric && 'figures text-right', className)}
+      className={classes('px-2 py-1.5 align-baseline first:pl-0 last:pr-0 has-[input,select]:align-top', numeric && 'figures text-right', className)}
     />
   )
 }
