@@ -2,6 +2,7 @@
 
 import { useDraggable } from '@dnd-kit/core'
 import { useState } from 'react'
+import { flushSync } from 'react-dom'
 import { classes } from '@/components/ui/classes'
 import { Field } from '@/components/ui/field'
 import { TextInput } from '@/components/ui/text-input'
@@ -74,12 +75,11 @@ export function Shelf({ document, kit, units, armed, onArm, onPlace }: ShelfProp
 }
 
 /** The last one of an entry leaves the shelf when it is placed; the focus then goes to its neighbour, not to the page. */
-function keepPlaceInList(placed: HTMLButtonElement) {
-  const line = placed.closest('li')
+function placeKeepingFocus(pressed: HTMLButtonElement, place: () => void) {
+  const line = pressed.closest('li')
   const neighbour = (line?.nextElementSibling ?? line?.previousElementSibling)?.querySelector('button')
-  requestAnimationFrame(() => {
-    if (!placed.isConnected) neighbour?.focus()
-  })
+  flushSync(place)
+  if (!pressed.isConnected) neighbour?.focus()
 }
 
 function ShelfLine({
@@ -107,8 +107,7 @@ function ShelfLine({
         onKeyDown={(event) => {
           if (event.key === 'Enter') {
             event.preventDefault()
-            onPlace(item)
-            keepPlaceInList(event.currentTarget)
+            placeKeepingFocus(event.currentTarget, () => onPlace(item))
           } else onKeyDown?.(event)
         }}
         onClick={() => onArm(isArmed ? null : item)}
