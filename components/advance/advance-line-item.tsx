@@ -10,6 +10,7 @@ import { Button } from '../ui/button'
 import { Field } from '../ui/field'
 import { Notice } from '../ui/notice'
 import { TextInput } from '../ui/text-input'
+import { isAsAsked } from './is-as-asked'
 import { TakeDownForm } from './take-down-form'
 import { useAct } from './use-act'
 
@@ -54,7 +55,7 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
       detail={[...line.details, ...(line.insteadOf ? [`also welcome: ${line.insteadOf}`] : [])].join('; ')}
       word={look.word}
       actions={
-        <div className="grid w-full gap-2 sm:w-80">
+        <div className="grid w-full gap-2 sm:w-80 xl:w-[26rem]">
           {line.said && <Said said={line.said} />}
           {line.decided && (
             <p className="text-sm text-soft">
@@ -64,7 +65,7 @@ export function AdvanceLineItem({ of, line, maySettle, mayTakeDown }: AdvanceLin
           )}
           <div className="flex flex-wrap gap-2">
             {maySettle && line.state === 'answered' && (
-              <Button kind="primary" busy={settle.busy && 'Settling'} onClick={() => settle.run({ decision: 'accept', remark: '' })}>
+              <Button kind={isAsAsked(line) ? 'secondary' : 'primary'} busy={settle.busy && 'Settling'} onClick={() => settle.run({ decision: 'accept', remark: '' })}>
                 Settle<span className="sr-only"> line {line.number}</span>
               </Button>
             )}

@@ -1,7 +1,7 @@
 'use client'
 
 import { settleAnswers } from '@/lib/client/answers'
-import type { AdvanceLine, AdvanceView } from '@/lib/contracts/advance'
+import type { AdvanceView } from '@/lib/contracts/advance'
 import { LocalTime } from '../desk/local-time'
 import { ShowBar } from '../signature/show-bar'
 import { StandingBadge } from '../signature/standing-badge'
@@ -9,6 +9,7 @@ import { Button } from '../ui/button'
 import { EmptyState } from '../ui/empty-state'
 import { Notice } from '../ui/notice'
 import { AdvanceLineItem } from './advance-line-item'
+import { isAsAsked } from './is-as-asked'
 import { Recipients } from './recipients'
 import { SendPanel } from './send-panel'
 import { useAct } from './use-act'
@@ -101,8 +102,6 @@ function countWords({ counts, lines }: AdvanceView): string {
   if (!counts) return lines.length === 1 ? '1 line, not sent' : `${lines.length} lines, not sent`
   return `${counts.settled} settled, ${counts.waiting} waiting, ${counts.changed} changed`
 }
-
-const isAsAsked = (line: AdvanceLine) => line.state === 'answered' && line.said?.content.asAsked === line.count
 
 /** What came out as asked needs no thought: one press settles all of it. */
 function SettleAsAsked({ view }: { view: AdvanceView }) {
