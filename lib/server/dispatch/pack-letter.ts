@@ -21,10 +21,16 @@ export function packLetter(pack: PackDocument, recipient: { name: string }, href
         ...(pack.answersDue ? [`Please answer by ${pack.answersDue}.`] : []),
         'The pack is attached as a PDF. With the link below you answer line by line on any phone, without an account; each answer is kept as you go and can be changed until it is settled.',
       ],
-      action: { label: asked === 0 ? 'Open the pack' : `Answer ${askWords}`, href },
+      action: { label: actionLabel(pack, asked, askWords), href },
       ...(crew.length > 0 ? { closing: `Questions: ${crew.map(({ name, email }) => `${name}, ${email}`).join('; ')}` } : {}),
     },
   }
+}
+
+/** After a change the reader does not answer all lines again, and a mail does not know how many are still open. */
+function actionLabel(pack: PackDocument, asked: number, askWords: string): string {
+  if (asked === 0) return 'Open the pack'
+  return pack.changed ? 'Open your lines' : `Answer ${askWords}`
 }
 
 function changedParagraph({ changed }: PackDocument): string[] {
