@@ -15,8 +15,8 @@ const kitWords =
 export default function Landing() {
   return (
     <>
-      <header className="mx-auto flex max-w-7xl items-center justify-between gap-4 px-5 py-3 sm:px-8">
-        <p className="name text-2xl">Hoopwright</p>
+      <header className="mx-auto flex max-w-7xl items-center justify-between gap-2 px-5 py-3 sm:px-8">
+        <p className="name shrink-0 text-xl sm:text-2xl">Hoopwright</p>
         <div className="flex items-center gap-1 whitespace-nowrap">
           <ThemeToggle />
           <ButtonLink href="/sign-in">Sign in</ButtonLink>

@@ -36,7 +36,7 @@ export function HeadPage({ bench, drum, head, session, name, keepName }: HeadPag
   const view = headView(bench.readings, drum, head, { basis: readBy === 'gauge' ? 'gauge' : 'tap', passFrom })
   const lug = chosenLug ?? view.nextLug
   return (
-    <main id="main" className="space-y-4">
+    <main id="main" className="space-y-4 pt-2">
       <header>
         <h1 className="text-4xl">
           {drum.name}, {head.side}
