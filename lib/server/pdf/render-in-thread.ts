@@ -7,9 +7,23 @@ const maxInputBytes = 4 * 1024 * 1024
 const maxOutputBytes = 12 * 1024 * 1024
 const timeOutMs = 90_000
 const memoryMb = 1024
-/** Starting a thread costs several times what a pack does, so a few are kept for the next one. */
-const maxIdle = 2
+/** Starting a thread costs several times what a pack does: few are started, and they are kept for the next pack. */
+const maxThreads = 2
 const idle: Worker[] = []
+const waiting: (() => void)[] = []
+let atWork = 0
+
+async function takeTurn(): Promise<void> {
+  if (atWork < maxThreads) atWork += 1
+  else await new Promise<void>((go) => waiting.push(go))
+}
+
+/** Hands the turn to whoever has waited longest. */
+function endTurn(): void {
+  const next = waiting.shift()
+  if (next) next()
+  else atWork -= 1
+}
 
 /** A pack that will not become smaller by trying again. */
 export class PackTooLarge extends Error {
@@ -26,9 +40,8 @@ function startThread(): Worker {
 }
 
 /** An idle thread does not keep its process from ending. */
-async function release(thread: Worker): Promise<void> {
+function release(thread: Worker): void {
   thread.removeAllListeners()
-  if (idle.length >= maxIdle) return void (await thread.terminate())
   thread.unref()
   // One that ends by itself while nobody uses it is not handed out again.
   thread.once('error', () => undefined)
@@ -45,16 +58,21 @@ async function release(thread: Worker): Promise<void> {
  */
 export async function renderInThread(input: PdfThreadInput): Promise<PdfThreadAnswer> {
   if (JSON.stringify(input.pack).length > maxInputBytes) throw new PackTooLarge()
-  const thread = idle.pop() ?? startThread()
-  thread.removeAllListeners()
-  thread.ref()
-  const answer = await answerOf(thread, input).catch(async (error: unknown) => {
-    await thread.terminate()
-    throw error
-  })
-  await release(thread)
-  if (answer.bytes.byteLength > maxOutputBytes) throw new PackTooLarge()
-  return answer
+  await takeTurn()
+  try {
+    const thread = idle.pop() ?? startThread()
+    thread.removeAllListeners()
+    thread.ref()
+    const answer = await answerOf(thread, input).catch(async (error: unknown) => {
+      await thread.terminate()
+      throw error
+    })
+    release(thread)
+    if (answer.bytes.byteLength > maxOutputBytes) throw new PackTooLarge()
+    return answer
+  } finally {
+    endTurn()
+  }
 }
 
 function answerOf(thread: Worker, input: PdfThreadInput): Promise<PdfThreadAnswer> {
