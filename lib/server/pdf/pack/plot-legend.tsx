@@ -2,6 +2,7 @@ import { View } from '@react-pdf/renderer'
 import type { Bounds } from '@/plots/geometry/bounds'
 import { cymbal } from '@/plots/symbols/cymbal'
 import { hoop, kick } from '@/plots/symbols/hoop'
+import { lengthWords, type LengthUnits } from '@/plots/symbols/length-words'
 import { microphone } from '@/plots/symbols/microphone'
 import type { Shape } from '@/plots/symbols/shape'
 import { riser, wedge } from '@/plots/symbols/stage-pieces'
@@ -27,7 +28,7 @@ const entries: readonly Entry[] = [
 ]
 
 /** What the signs of the plot mean, drawn by the plot's own symbols (here not to the plot's scale). */
-export function PlotLegend() {
+export function PlotLegend({ units }: { units: LengthUnits }) {
   return (
     <View style={{ marginTop: mm(4) }}>
       {entries.map(({ words, shapes, halfM: [x, y], scale }) => {
@@ -43,7 +44,7 @@ export function PlotLegend() {
           </View>
         )
       })}
-      <Plain size={8}>Grid 1 m; chain line: centre line.</Plain>
+      <Plain size={8}>{`Grid ${lengthWords(1, units)}; chain line: centre line.`}</Plain>
     </View>
   )
 }

@@ -46,7 +46,7 @@ export function PlotPages({ pack, plot }: { pack: PackDocument; plot: PackPlot }
                 {`${sheet.scene.unplaced.length} names found no room at this scale.`}
               </Plain>
             )}
-            <PlotLegend />
+            <PlotLegend units={pack.units} />
             <View style={{ flexGrow: 1 }} />
             <Plain size={7.5} colour="soft">
               {planningCaution}
