@@ -18,6 +18,7 @@ const config: NextConfig = {
     const common = [
       { key: 'X-Content-Type-Options', value: 'nosniff' },
       { key: 'X-Frame-Options', value: 'DENY' },
+      { key: 'Content-Security-Policy', value: "base-uri 'self'; form-action 'self'; frame-ancestors 'none'; object-src 'none'" },
       { key: 'Permissions-Policy', value: 'camera=(), geolocation=(), microphone=(self)' },
     ]
     return [
