@@ -67,7 +67,7 @@ describe('packs', () => {
     const { id } = stateOf(answer)
     await expect
       .poll(async () => stateOf(await party.viewer.call('GET', `/api/packs/${id}`)).pdf, {
-        timeout: 25_000,
+        timeout: 60_000,
         interval: 300,
       })
       .toBe('ready')
