@@ -1,5 +1,6 @@
 'use client'
 
+import { outputWords } from '@/lib/advance/kit-words'
 import { useChangeChannel } from '@/lib/client/channels'
 import { AppError } from '@/lib/errors'
 import type { Piece } from '../model/document'
@@ -57,7 +58,7 @@ export function ChannelBox({
 
   return (
     <CommitInput
-      label={output === 'mic' ? 'Channel' : `Channel of ${output}`}
+      label={output === 'mic' ? 'Channel' : `Channel of ${outputWords(output)}`}
       isLabelHidden={isLabelHidden ?? false}
       value={was ? String(was.number) : ''}
       disabled={!mayPatch}

@@ -3,6 +3,7 @@
 import { Button } from '@/components/ui/button'
 import { EmptyState } from '@/components/ui/empty-state'
 import { Table, TableCell, TableHead, TableRow } from '@/components/ui/table'
+import { outputWords } from '@/lib/advance/kit-words'
 import { pieceHeadingDeg } from '../model/heading'
 import { piecesInOrder } from '../model/document'
 import { outputsOf, pieceKindOf, pieceLevel } from '../symbols/piece-kinds'
@@ -95,7 +96,7 @@ export function PieceList({
             <TableCell className="min-w-20">
               {outputsOf(piece).map((output) => (
                 <div key={output} className="flex items-center gap-2">
-                  {output !== 'mic' && <span className="text-sm text-soft">{output}</span>}
+                  {output !== 'mic' && <span className="text-sm text-soft">{outputWords(output)}</span>}
                   <ChannelBox parts={parts} piece={piece} output={output} isLabelHidden />
                 </div>
               ))}

@@ -1,3 +1,4 @@
+import { typeWords } from '@/lib/advance/kit-words'
 import type { Piece } from '../model/document'
 import type { KitById } from '../model/kit-piece'
 import { lengthWords, type LengthUnits } from '../symbols/length-words'
@@ -27,9 +28,9 @@ export function kindWords(piece: Piece, kit: KitById, units: LengthUnits): strin
     case 'cymbal':
       return `${entry.type}, ${entry.diameterIn} in`
     case 'hardware':
-      return entry.type.replaceAll('-', ' ')
+      return typeWords(entry.type)
     case 'microphone':
-      return `${entry.type.replaceAll('-', ' ')}${entry.phantom ? ', phantom' : ''}`
+      return `${typeWords(entry.type)}${entry.phantom ? ', phantom' : ''}`
     case undefined: {
       const kind = pieceKindOf(piece)
       if (!kind) return `${piece.kind}, from a newer release`
