@@ -14,6 +14,12 @@ export type FrameProps = {
   children: ReactNode
 }
 
+/** Head and foot are one line each: a name too long for its share of it ends in an ellipsis. */
+function capped(text: string, most: number): string {
+  const signs = Array.from(text)
+  return signs.length > most ? `${signs.slice(0, most - 1).join('')}…` : text
+}
+
 /** A page of a pack: whose it is and which revision at the head, for whom and which page at the foot. */
 export function PageFrame({ pack, title, orientation = 'portrait', children }: FrameProps) {
   const edge = { position: 'absolute' as const, left: mm(marginMm.side), right: mm(marginMm.side) }
@@ -41,8 +47,8 @@ export function PageFrame({ pack, title, orientation = 'portrait', children }: F
           borderBottom: `0.75pt solid ${ink.ink}`,
         }}
       >
-        <Heading size={10}>{title}</Heading>
-        <Plain size={8}>{`${pack.party}, ${pack.tour}`}</Plain>
+        <Heading size={10}>{capped(title, 60)}</Heading>
+        <Plain size={8}>{capped(`${pack.party}, ${pack.tour}`, 64)}</Plain>
       </View>
       {children}
       <View
@@ -56,8 +62,8 @@ export function PageFrame({ pack, title, orientation = 'portrait', children }: F
           borderTop: `0.5pt solid ${ink.ink}`,
         }}
       >
-        <Plain size={8}>{`Revision ${pack.revision.number}, ${pack.rig}`}</Plain>
-        <Plain size={8}>{`For ${pack.recipient.name}`}</Plain>
+        <Plain size={8}>{capped(`Revision ${pack.revision.number}, ${pack.rig}`, 44)}</Plain>
+        <Plain size={8}>{capped(`For ${pack.recipient.name}`, 44)}</Plain>
         <PageNumber />
       </View>
     </Page>
