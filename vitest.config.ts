@@ -16,6 +16,8 @@ export default defineConfig({
           name: 'unit',
           include: ['{lib,plots,components,fonts,app,db,scripts,tests/unit}/**/*.test.{ts,tsx,mjs}'],
           environment: 'node',
+          // PDFs and real clusters are slow on a loaded machine; a limit is for what hangs.
+          testTimeout: 60_000,
         },
       },
       {
