@@ -68,6 +68,14 @@ describe('headView', () => {
     expect(headView([gauge, tap], drum, head, { basis: 'tap' }).state.missing).toEqual([1, 3, 4, 5, 6])
   })
 
+  it('does not let one gauge reading hide a whole pass of taps', () => {
+    const taps = round(1)
+    const gauge = reading(1, 75, { method: 'gauge', unit: 'gauge', targetHz: null })
+    const view = headView([...taps, gauge], drum, head)
+    expect(view.basis).toBe('tap')
+    expect(view.state.missing).toEqual([])
+  })
+
   it('leaves other heads and lugs that this head does not have out', () => {
     const others = [reading(1, 250, { side: 'resonant' }), reading(1, 250, { entryId: 'kick' }), reading(8, 250)]
     expect(headView(others, drum, head).read).toBe(0)

@@ -65,8 +65,14 @@ export function readingsOfHead(
     .map(asReading)
 }
 
-/** What the latest reading of a head went by; taps before anything was read. */
+/** By what a head is judged: whichever has read more of its lugs, so that one gauge reading does not hide a whole tap pass; then the latest. */
 export function basisOfHead(readings: readonly ViewedReading[]): ReadingBasis {
+  const standing = standingReadings(readings)
+  const lugsReadBy = (basis: ReadingBasis) =>
+    new Set(standing.filter(({ method }) => (method === 'gauge') === (basis === 'gauge')).map(({ lug }) => lug)).size
+  const gauge = lugsReadBy('gauge')
+  const tap = lugsReadBy('tap')
+  if (gauge !== tap) return gauge > tap ? 'gauge' : 'tap'
   return inOrderTaken(readings).at(-1)?.method === 'gauge' ? 'gauge' : 'tap'
 }
 
