@@ -5,6 +5,7 @@ import type { AdvanceLink } from '@/lib/contracts/advance'
 import { LocalTime } from '../desk/local-time'
 import { Button } from '../ui/button'
 import { Dialog } from '../ui/dialog'
+import { DrawnImage } from '../ui/drawn-image'
 import { Notice } from '../ui/notice'
 import { useAct } from './use-act'
 
@@ -52,13 +53,7 @@ export function LinkTools({ link, name, mayPrint, mayWithdraw }: { link: Advance
       >
         {print.answer && (
           <div className="grid justify-items-center gap-3">
-            {/* Made by our own server for this one answer; a data address needs no image pipeline. */}
-            {/* eslint-disable-next-line @next/next/no-img-element -- a drawing that is in the page already has nothing to be optimised */}
-            <img
-              alt="The link as a QR code"
-              className="size-56 bg-sheet"
-              src={`data:image/svg+xml;utf8,${encodeURIComponent(print.answer.qrSvg)}`}
-            />
+            <DrawnImage svg={print.answer.qrSvg} alt="The link as a QR code" className="size-56 bg-sheet" />
             <p className="figures text-sm break-all select-all">{print.answer.href}</p>
           </div>
         )}

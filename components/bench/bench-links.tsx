@@ -1,6 +1,7 @@
 'use client'
 
 import { Button } from '@/components/ui/button'
+import { DrawnImage } from '@/components/ui/drawn-image'
 import { Notice } from '@/components/ui/notice'
 import { Table, TableCell, TableHead, TableRow } from '@/components/ui/table'
 import { instantWords } from '@/lib/advance/when-words'
@@ -48,12 +49,7 @@ export function BenchLinks({ showId, zone, links, mayPrint, mayWithdraw }: Bench
       )}
       {print.data && (
         <div role="status" className="mt-3 flex flex-wrap gap-5 border-l-4 border-spike bg-sheet p-4">
-          {/* eslint-disable-next-line @next/next/no-img-element -- a drawing that is in the page already has nothing to be optimised */}
-          <img
-            alt="QR code of the bench link"
-            src={`data:image/svg+xml,${encodeURIComponent(print.data.qrSvg)}`}
-            className="size-48 border border-ink"
-          />
+          <DrawnImage svg={print.data.qrSvg} alt="QR code of the bench link" className="size-48 border border-ink" />
           <div className="min-w-0 grow basis-72 space-y-2">
             <p className="name text-xl">Shown this once</p>
             <p>Print this page or copy the address now; it is not kept. A lost one is printed again.</p>
