@@ -110,7 +110,6 @@ describe('a route for signed-in people', () => {
     const answer = await party.owner.call(method, address(path), '{"half":')
     // A route that takes no body never reads it; then its own rules answer.
     expect([422, 403, 404]).toContain(answer.status)
-    expect(answer.status).not.toBe(500)
   })
 
   test.each(changing(signedIn))('$method $path refuses more than it can hold', async ({ method, path }) => {
