@@ -56,6 +56,8 @@ const drumNoteSchema = z.object({
   cents: z.number().min(-50, 'at least -50 cents').max(50, 'at most 50 cents'),
 })
 
+const headRelationSchema = z.number().min(-1200, 'at least -1200 cents').max(1200, 'at most 1200 cents')
+
 export const drumSpecSchema = z.object({
   role: z.enum(drumRoles, 'choose what the drum is'),
   diameterIn: inches(6, 28),
@@ -73,7 +75,7 @@ export const drumSpecSchema = z.object({
   /** A locked note is left alone when a template plans the others. */
   noteLocked: z.boolean(),
   /** How far the resonant head's pitch stands above the batter's, cents. */
-  headRelationCents: z.number().min(-1200, 'at least -1200 cents').max(1200, 'at most 1200 cents'),
+  headRelationCents: headRelationSchema,
   /** How far a lug may stand from the target and still be even, cents. */
   toleranceCents: z.number().min(1, 'at least 1 cent').max(100, 'at most 100 cents'),
   muffling: z.string().trim().max(200, 'at most 200 characters'),
@@ -195,6 +197,8 @@ export const setNotesSchema = z.object({
         version: versionSchema,
         note: drumNoteSchema.nullable(),
         noteLocked: z.boolean(),
+        /** Left as it is unless given. */
+        headRelationCents: headRelationSchema.optional(),
       }),
     )
     .min(1, 'at least one note')

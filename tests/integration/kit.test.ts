@@ -289,6 +289,20 @@ describe('the kit of a rig', () => {
       )
     })
 
+    it('carry the relation of the heads where it is given and leave it where it is not', async () => {
+      const wanted = { entryId: tour.tomId, version: 1, note: E2, noteLocked: false }
+      const answer = await set([{ ...wanted, headRelationCents: 300 }])
+      expect(answer.status).toBe(200)
+      const [tom] = rowsOf(answer)
+      expect(tom).toMatchObject({ version: 2, spec: { note: E2, headRelationCents: 300 } })
+      // Another relation of the same note is a change, and needs the version that was seen.
+      expect((await set([{ ...wanted, headRelationCents: 100 }])).status).toBe(409)
+      const [left] = rowsOf(await set([{ ...wanted, version: 2, noteLocked: true }]))
+      expect(left).toMatchObject({ version: 3, spec: { noteLocked: true, headRelationCents: 300 } })
+      const wild = await set([{ ...wanted, version: 3, headRelationCents: 1201 }])
+      expect(Object.keys(errorOf(wild).details.fields ?? {})).toEqual(['notes.0.headRelationCents'])
+    })
+
     it('are all left when one drum is not as it was seen', async () => {
       const floor = rowOf(await add(drum('Floor 16', { note: null })))
       await tech('PATCH', `/api/kit-entries/${tour.tomId}`, { version: 1, entry: drum('Tom 12', { depthIn: 7 }) })

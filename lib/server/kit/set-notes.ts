@@ -38,7 +38,12 @@ export async function setNotes(actor: Actor, input: { rigId: string } & SetNotes
     for (const { wanted, drum } of changes)
       await updateEntry(tx, actor, { id: drum.id, version: drum.version, entry: noted(drum, wanted) })
     if (changes.length > 0) {
-      const detail = changes.map(({ wanted, drum }) => ({ id: drum.id, from: drum.spec.note, to: wanted.note }))
+      const detail = changes.map(({ wanted, drum }) => ({
+        ...{ id: drum.id, from: drum.spec.note, to: wanted.note },
+        ...(wanted.headRelationCents === undefined
+          ? {}
+          : { headRelationCents: { from: drum.spec.headRelationCents, to: wanted.headRelationCents } }),
+      }))
       await audit(tx, actor, 'kit.notes-set', { type: 'rig', id: rigId }, { notes: detail })
       await notifyKit(tx, actor, rigId)
     }
@@ -55,9 +60,14 @@ function drumOf(rows: readonly Entry[], { entryId }: NoteWanted, index: number):
 
 /** A drum that already has the note wanted is no conflict: the request came twice, or two people wanted the same. */
 function hasNote(drum: DrumEntry, wanted: NoteWanted): boolean {
-  return isDeepStrictEqual(drum.spec.note, wanted.note) && drum.spec.noteLocked === wanted.noteLocked
+  const { note, noteLocked, headRelationCents } = drum.spec
+  return (
+    isDeepStrictEqual(note, wanted.note) &&
+    noteLocked === wanted.noteLocked &&
+    (wanted.headRelationCents ?? headRelationCents) === headRelationCents
+  )
 }
 
-function noted(drum: DrumEntry, { note, noteLocked }: NoteWanted) {
-  return entryInputSchema.parse({ ...drum, spec: { ...drum.spec, note, noteLocked } })
+function noted(drum: DrumEntry, { note, noteLocked, headRelationCents = drum.spec.headRelationCents }: NoteWanted) {
+  return entryInputSchema.parse({ ...drum, spec: { ...drum.spec, note, noteLocked, headRelationCents } })
 }

@@ -60,6 +60,9 @@ export const workSentences: Record<string, (told: Told) => string> = {
     const drums = countOf(String(Array.isArray(notes) ? notes.length : ''), 'drum', 'drums')
     return `set the notes of ${drums}${after('in the kit of', itself)}`
   },
+  'note-template.added': ({ text }) => `made the note template ${text('name')}`,
+  'note-template.changed': ({ text }) => `changed the note template ${renamed(text('from.name'), text('to.name'))}`,
+  'note-template.removed': ({ text }) => `took the note template ${text('was.name')} away`,
   'plot.changed': ({ itself, detail }) => {
     const commands = detail['commands']
     const words = Array.isArray(commands)
