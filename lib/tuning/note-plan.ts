@@ -122,9 +122,10 @@ function tomNote(drum: PlanDrum, anchor: Anchor | null, { steps }: NoteTemplate,
   if (anchor === null || anchor.drum.id === drum.id) {
     return { note: anchor?.note ?? middleNote(drum, stage), origin: anchor?.origin ?? 'middle' }
   }
-  if (steps.kind === 'equal-tension') {
+  if (steps.kind === 'equal-feel') {
     return { note: noteAtTension(drum, tensionAt(anchor.drum, anchor.note, stage), stage), origin: 'template' }
   }
+  if (steps.kind !== 'per-inch') return { note: middleNote(drum, stage), origin: 'middle' }
   const interval = templateInterval(anchor.drum.diameterIn, drum.diameterIn, steps.semitonesPerInch)
   return { note: { semitone: anchor.note.semitone + interval, cents: anchor.note.cents }, origin: 'template' }
 }
