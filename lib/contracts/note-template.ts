@@ -12,13 +12,13 @@ const semitones = (most: number) =>
 const stepsSchema = z.discriminatedUnion(
   'kind',
   [
-    z.object({ kind: z.literal('fixed-interval'), semitonesPerInch: semitones(12) }),
+    z.object({ kind: z.literal('per-inch'), semitonesPerInch: semitones(12) }),
     z.object({
       kind: z.literal('per-pair'),
       /** From the smallest tom down, one step a pair; the last goes on for further pairs. */
       semitones: z.array(semitones(24).int('whole semitones')).min(1, 'at least one step').max(11, 'at most 11 steps'),
     }),
-    z.object({ kind: z.literal('equal-tension') }),
+    z.object({ kind: z.literal('equal-feel') }),
     z.object({ kind: z.literal('free') }),
   ],
   'choose how the toms are stepped',

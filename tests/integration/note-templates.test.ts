@@ -37,11 +37,11 @@ describe('a party’s own note templates', () => {
   it('are made, read back by every member by name, changed and taken away', async () => {
     const made = await make()
     expect(made).toEqual({ id: made.id, version: 1, ...jazz })
-    await make({ name: 'a low set', steps: { kind: 'equal-tension' }, kickBelowLowestTom: [] })
+    await make({ name: 'a low set', steps: { kind: 'equal-feel' }, kickBelowLowestTom: [] })
     for (const member of [party.owner, party.drumTech, party.tourManager, party.viewer])
       expect(await names(member.call)).toEqual(['a low set', 'High and open'])
 
-    const template = { ...jazz, name: 'Open', steps: { kind: 'fixed-interval', semitonesPerInch: 1.75 } }
+    const template = { ...jazz, name: 'Open', steps: { kind: 'per-inch', semitonesPerInch: 1.75 } }
     const changed = await tech('PATCH', `${path}/${made.id}`, { version: 1, template })
     expect(rowOf(changed)).toEqual({ id: made.id, version: 2, ...template })
     const gone = await tech('DELETE', `${path}/${made.id}`, { version: 2 })
@@ -103,8 +103,8 @@ describe('a party’s own note templates', () => {
       [{ name: ' ' }, ['template.name']],
       [{ name: 'x'.repeat(121) }, ['template.name']],
       [{ steps: { kind: 'by-moon' } }, ['template.steps.kind']],
-      [{ steps: { kind: 'fixed-interval', semitonesPerInch: -1 } }, ['template.steps.semitonesPerInch']],
-      [{ steps: { kind: 'fixed-interval', semitonesPerInch: 'two' } }, ['template.steps.semitonesPerInch']],
+      [{ steps: { kind: 'per-inch', semitonesPerInch: -1 } }, ['template.steps.semitonesPerInch']],
+      [{ steps: { kind: 'per-inch', semitonesPerInch: 'two' } }, ['template.steps.semitonesPerInch']],
       [{ steps: { kind: 'per-pair', semitones: [] } }, ['template.steps.semitones']],
       [{ steps: { kind: 'per-pair', semitones: [5, 2.5] } }, ['template.steps.semitones.1']],
       [{ steps: { kind: 'per-pair', semitones: Array(12).fill(2) } }, ['template.steps.semitones']],
