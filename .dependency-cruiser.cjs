@@ -9,6 +9,7 @@ module.exports = {
     rule('no-cycles', {}, { circular: true }, 'A circle has no lower layer.'),
     rule('acoustics-is-lowest', { path: '^lib/acoustics/' }, { path: '^(app|components|db|lib|plots)/', pathNot: '^lib/(acoustics/|errors)' }, 'acoustics imports nothing of ours'),
     rule('tuning-on-acoustics', { path: '^lib/tuning/' }, { path: '^(app|components|db|lib|plots)/', pathNot: '^lib/(acoustics/|tuning/|errors)' }, 'tuning rests on acoustics'),
+    rule('listening-on-acoustics', { path: '^lib/listening/' }, { path: '^(app|components|db|lib|plots)/', pathNot: '^lib/(acoustics/|listening/|errors)' }, 'listening rests on acoustics'),
     rule('advance-on-tuning', { path: '^lib/advance/' }, { path: '^(app|components|db|lib|plots)/', pathNot: '^(lib/(acoustics/|tuning/|staging/|advance/|errors)|plots/(geometry|model|symbols|render)/)' }, 'advance rests on tuning and on the plot’s model'),
     rule('pure-has-no-framework', { path: [pure, plotsCore] }, { path: '^node_modules/(react|react-dom|next|drizzle-orm|pg|@tanstack)/' }, 'the trade’s rules run anywhere'),
     rule('geometry-is-lowest', { path: '^plots/geometry/' }, { path: '^(app|components|db|lib|plots)/', pathNot: '^plots/geometry/' }, 'geometry imports nothing of ours'),

@@ -69,14 +69,7 @@ export type TapReading = {
  * the pitch can be told. `double-hit`: two strikes in one ring. `not-a-tap`: speech, a held tone, a cymbal, a rattle. `too-noisy`:
  * the pitch drowns. `unclear`: two pitches are equally strong, or none lies near the target.
  */
-export type TapRefusalKind =
-  | 'silent'
-  | 'clipped'
-  | 'too-short'
-  | 'double-hit'
-  | 'not-a-tap'
-  | 'too-noisy'
-  | 'unclear'
+export type TapRefusalKind = 'silent' | 'clipped' | 'too-short' | 'double-hit' | 'not-a-tap' | 'too-noisy' | 'unclear'
 
 export type TapRefusal = {
   outcome: 'refused'

@@ -8,6 +8,7 @@ import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 const planted: [rule: string, from: string, to: string][] = [
   ['acoustics-is-lowest', 'lib/acoustics/a.ts', 'lib/tuning/target.ts'],
   ['tuning-on-acoustics', 'lib/tuning/b.ts', 'lib/advance/target.ts'],
+  ['listening-on-acoustics', 'lib/listening/b.ts', 'lib/tuning/target.ts'],
   ['advance-on-tuning', 'lib/advance/c.ts', 'lib/contracts/target.ts'],
   ['pure-has-no-framework', 'lib/tuning/d.ts', 'node_modules/react/index.js'],
   ['geometry-is-lowest', 'plots/geometry/e.ts', 'plots/model/target.ts'],

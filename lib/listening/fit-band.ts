@@ -1,0 +1,310 @@
+import type { Complex, ModelKind, Term } from './partial-shape'
+import { parametersOf, voicesOf } from './partial-shape'
+import { solveSymmetric } from './solve-symmetric'
+import type { Spectrum } from './spectrum'
+import { turnTable } from './turn-table'
+
+export type BandFit = {
+  kind: ModelKind
+  /** The model's free parameters, a sample: see {@link voicesOf}. */
+  parameters: Float64Array
+  /** One complex amplitude a voice: the voice is Re(A·…) at sample 0. */
+  amplitudes: Complex[]
+  /** Covariance of the parameters and then of each amplitude's real and imaginary part, row by row. */
+  covariance: Float64Array
+  /** What is left in the band, Σ|R_k|². */
+  residual: number
+  /** What was in the band, Σ|X_k|². */
+  energy: number
+  /** Variance of the noise a sample, from what is left. */
+  noiseVariance: number
+  /** Real numbers that the band holds for certain, at size/count bins for each independent one. */
+  freedom: number
+}
+
+/** Bins `first` to `last`, both included. */
+export type Band = { first: number; last: number }
+
+type Limits = { minDecay: number; maxDecay: number; minAngle: number; maxAngle: number }
+
+/**
+ * Least squares, which is maximum likelihood in white noise, of damped sinusoids to a band of a spectrum. The transform of a damped
+ * sinusoid of N samples is known in closed form, (1 − e^{sN}W^{kN})/(1 − e^s·W^k), so nothing is approximated by taking a band of
+ * bins, and the image at negative frequencies is part of the model. Amplitudes are solved for at every step (variable projection),
+ * decays and angles moved by Gauss–Newton with Marquardt's damping.
+ * @param start first guess of the free parameters of `kind`
+ * @param band bins to fit over
+ * @returns null when the voices cannot be told apart
+ */
+export function fitBand(spectrum: Spectrum, band: Band, kind: ModelKind, start: Float64Array): BandFit | null {
+  const at = new BandModel(spectrum, band, kind)
+  const limits = { minDecay: 1 / (20 * spectrum.count), maxDecay: 0.2, minAngle: 1e-3, maxAngle: 3 }
+  let parameters = within(start, kind, limits)
+  let now = at.solve(parameters)
+  if (now === null) return null
+  let damping = 1e-3
+  for (let round = 0; round < 30; round++) {
+    const step = at.step(now, damping)
+    if (step === null) return null
+    const next = within(
+      parameters.map((value, i) => value + (step[i] ?? 0)),
+      kind,
+      limits,
+    )
+    const then = at.solve(next)
+    if (then !== null && then.residual < now.residual) {
+      const gained = (now.residual - then.residual) / now.residual
+      parameters = next
+      now = then
+      damping = Math.max(1e-9, damping / 8)
+      if (gained < 1e-8) break
+    } else {
+      damping *= 10
+      if (damping > 1e6) break
+    }
+  }
+  return at.finish(now, parameters)
+}
+
+function within(parameters: Float64Array, kind: ModelKind, limits: Limits): Float64Array {
+  const kept = Float64Array.from(parameters)
+  const hold = (decay: number, angle: number) => {
+    kept[decay] = Math.min(limits.maxDecay, Math.max(limits.minDecay, kept[decay] ?? 0))
+    kept[angle] = Math.min(limits.maxAngle, Math.max(limits.minAngle, kept[angle] ?? 0))
+  }
+  hold(0, 1)
+  if (kind === 'two') hold(2, 3)
+  if (kind === 'glide') kept[2] = Math.min(6, Math.max(-6, kept[2] ?? 0))
+  return kept
+}
+
+type Solved = {
+  amplitudes: Complex[]
+  residual: number
+  left: Float64Array
+  /** Columns of derivatives: the free parameters, then real and imaginary amplitude of each voice. */
+  columns: Float64Array[]
+}
+
+class BandModel {
+  private readonly bins: number
+  private readonly data: Float64Array
+  private readonly turn: Float64Array
+  private readonly turnAll: Float64Array
+  private readonly free: number
+  private readonly energy: number
+
+  constructor(
+    private readonly spectrum: Spectrum,
+    band: Band,
+    private readonly kind: ModelKind,
+  ) {
+    this.free = parametersOf[kind]
+    this.bins = band.last - band.first + 1
+    this.data = new Float64Array(2 * this.bins)
+    this.turn = new Float64Array(2 * this.bins)
+    this.turnAll = new Float64Array(2 * this.bins)
+    const { cos, sin } = turnTable(spectrum.size)
+    let energy = 0
+    for (let i = 0; i < this.bins; i++) {
+      const k = band.first + i
+      const re = spectrum.re[k] ?? 0
+      const im = spectrum.im[k] ?? 0
+      this.data[2 * i] = re
+      this.data[2 * i + 1] = im
+      energy += re * re + im * im
+      const whole = (k * spectrum.count) % spectrum.size
+      this.turn[2 * i] = cos[k] ?? 0
+      this.turn[2 * i + 1] = sin[k] ?? 0
+      this.turnAll[2 * i] = cos[whole] ?? 0
+      this.turnAll[2 * i + 1] = sin[whole] ?? 0
+    }
+    this.energy = energy
+  }
+
+  /** The best amplitudes at these parameters, and the derivatives there. */
+  solve(parameters: Float64Array): Solved | null {
+    const voices = voicesOf(this.kind, parameters)
+    const shapes = voices.map((terms) => this.shapesOf(terms))
+    const rows = 2 * this.bins
+    const linear = shapes.flatMap(({ direct, image }) => {
+      const real = new Float64Array(rows)
+      const imaginary = new Float64Array(rows)
+      const u = direct[0] ?? real
+      const v = image[0] ?? real
+      for (let i = 0; i < rows; i += 2) {
+        const ur = u[i] ?? 0
+        const ui = u[i + 1] ?? 0
+        const vr = v[i] ?? 0
+        const vi = v[i + 1] ?? 0
+        real[i] = (ur + vr) / 2
+        real[i + 1] = (ui + vi) / 2
+        imaginary[i] = -(ui - vi) / 2
+        imaginary[i + 1] = (ur - vr) / 2
+      }
+      return [real, imaginary]
+    })
+    const solved = leastSquares(linear, this.data, 1e-14)
+    if (solved === null) return null
+    const left = Float64Array.from(this.data)
+    linear.forEach((column, c) => {
+      const size = solved[c] ?? 0
+      for (let i = 0; i < rows; i++) left[i] = (left[i] ?? 0) - size * (column[i] ?? 0)
+    })
+    let residual = 0
+    for (const value of left) residual += value * value
+    const amplitudes = shapes.map((_, j) => ({ re: solved[2 * j] ?? 0, im: solved[2 * j + 1] ?? 0 }))
+    const nonlinear = Array.from({ length: this.free }, (_, f) => {
+      const column = new Float64Array(rows)
+      shapes.forEach(({ direct, image }, j) => {
+        const { re, im } = amplitudes[j] ?? { re: 0, im: 0 }
+        const u = direct[f + 1] ?? column
+        const v = image[f + 1] ?? column
+        for (let i = 0; i < rows; i += 2) {
+          const ur = u[i] ?? 0
+          const ui = u[i + 1] ?? 0
+          const vr = v[i] ?? 0
+          const vi = v[i + 1] ?? 0
+          column[i] = (column[i] ?? 0) + (re * (ur + vr) - im * (ui - vi)) / 2
+          column[i + 1] = (column[i + 1] ?? 0) + (re * (ui + vi) + im * (ur - vr)) / 2
+        }
+      })
+      return column
+    })
+    return { amplitudes, residual, left, columns: [...nonlinear, ...linear] }
+  }
+
+  step(now: Solved, damping: number): Float64Array | null {
+    return leastSquares(now.columns, now.left, damping)
+  }
+
+  finish(now: Solved, parameters: Float64Array): BandFit | null {
+    const n = now.columns.length
+    const { size, count } = this.spectrum
+    const freedom = (2 * this.bins * count) / size
+    // By Parseval a real sound's energy is 2/size times that of its bins at positive frequencies.
+    const variance = ((now.residual / size) * 2) / Math.max(1, freedom - n)
+    const { gram, scale } = gramOf(now.columns)
+    for (let i = 0; i < n; i++) gram[i * n + i] = (gram[i * n + i] ?? 0) + 1e-13
+    const unit = Array.from({ length: n }, (_, i) => Float64Array.from({ length: n }, (_, j) => (i === j ? 1 : 0)))
+    const inverse = solveSymmetric(gram, n, unit)
+    if (inverse === null) return null
+    const covariance = new Float64Array(n * n)
+    for (let i = 0; i < n; i++) {
+      for (let j = 0; j < n; j++) {
+        covariance[i * n + j] = ((inverse[i]?.[j] ?? 0) * variance * size) / (2 * (scale[i] ?? 1) * (scale[j] ?? 1))
+      }
+    }
+    return {
+      kind: this.kind,
+      parameters,
+      amplitudes: now.amplitudes,
+      covariance,
+      residual: now.residual,
+      energy: this.energy,
+      noiseVariance: variance,
+      freedom,
+    }
+  }
+
+  /** The voice's spectrum (index 0) and its derivative to each free parameter; `image` with every s and c conjugated. */
+  private shapesOf(terms: Term[]): { direct: Float64Array[]; image: Float64Array[] } {
+    const make = () => Array.from({ length: this.free + 1 }, () => new Float64Array(2 * this.bins))
+    const direct = make()
+    const image = make()
+    for (const term of terms) {
+      this.add(direct, term, 1)
+      this.add(image, term, -1)
+    }
+    return { direct, image }
+  }
+
+  private add(into: Float64Array[], { s, c, toS, toC }: Term, sign: 1 | -1): void {
+    const { count } = this.spectrum
+    const size = Math.exp(s.re)
+    const zr = size * Math.cos(s.im)
+    const zi = sign * size * Math.sin(s.im)
+    const sizeAll = Math.exp(s.re * count)
+    const ar = sizeAll * Math.cos(s.im * count)
+    const ai = sign * sizeAll * Math.sin(s.im * count)
+    const cr = c.re
+    const ci = sign * c.im
+    const { turn, turnAll } = this
+    for (let i = 0; i < 2 * this.bins; i += 2) {
+      const wr = turn[i] ?? 0
+      const wi = turn[i + 1] ?? 0
+      const er = zr * wr - zi * wi
+      const ei = zr * wi + zi * wr
+      const br = turnAll[i] ?? 0
+      const bi = turnAll[i + 1] ?? 0
+      const fr = ar * br - ai * bi
+      const fi = ar * bi + ai * br
+      const dr = 1 - er
+      const di = -ei
+      const over = 1 / (dr * dr + di * di)
+      // S = (1 − f)/(1 − e)
+      const nr = 1 - fr
+      const ni = -fi
+      const Sr = (nr * dr + ni * di) * over
+      const Si = (ni * dr - nr * di) * over
+      // dS/ds = (S·e − N·f)/(1 − e)
+      const pr = Sr * er - Si * ei - count * fr
+      const pi = Sr * ei + Si * er - count * fi
+      const Dr = (pr * dr + pi * di) * over
+      const Di = (pi * dr - pr * di) * over
+      const shape = into[0]
+      if (shape !== undefined) {
+        shape[i] = (shape[i] ?? 0) + cr * Sr - ci * Si
+        shape[i + 1] = (shape[i + 1] ?? 0) + cr * Si + ci * Sr
+      }
+      for (let f = 0; f < this.free; f++) {
+        const column = into[f + 1]
+        const ds = toS[f]
+        const dc = toC[f]
+        if (column === undefined || ds === undefined || dc === undefined) continue
+        const dsi = sign * ds.im
+        const kr = cr * ds.re - ci * dsi
+        const ki = cr * dsi + ci * ds.re
+        const dci = sign * dc.im
+        column[i] = (column[i] ?? 0) + kr * Dr - ki * Di + dc.re * Sr - dci * Si
+        column[i + 1] = (column[i + 1] ?? 0) + kr * Di + ki * Dr + dc.re * Si + dci * Sr
+      }
+    }
+  }
+}
+
+function gramOf(columns: Float64Array[]): { gram: Float64Array; scale: Float64Array } {
+  const n = columns.length
+  const gram = new Float64Array(n * n)
+  const scale = new Float64Array(n)
+  for (let i = 0; i < n; i++) {
+    for (let j = 0; j <= i; j++) {
+      const a = columns[i] ?? scale
+      const b = columns[j] ?? scale
+      let sum = 0
+      for (let r = 0; r < a.length; r++) sum += (a[r] ?? 0) * (b[r] ?? 0)
+      gram[i * n + j] = sum
+      gram[j * n + i] = sum
+    }
+  }
+  for (let i = 0; i < n; i++) scale[i] = Math.sqrt(gram[i * n + i] ?? 0) || 1
+  for (let i = 0; i < n; i++) {
+    for (let j = 0; j < n; j++) gram[i * n + j] = (gram[i * n + j] ?? 0) / ((scale[i] ?? 1) * (scale[j] ?? 1))
+  }
+  return { gram, scale }
+}
+
+/** Columns are scaled to length one first; `damping` is added to the diagonal then. */
+function leastSquares(columns: Float64Array[], data: Float64Array, damping: number): Float64Array | null {
+  const n = columns.length
+  const { gram, scale } = gramOf(columns)
+  for (let i = 0; i < n; i++) gram[i * n + i] = (gram[i * n + i] ?? 0) + damping
+  const right = new Float64Array(n)
+  columns.forEach((column, i) => {
+    let sum = 0
+    for (let r = 0; r < data.length; r++) sum += (column[r] ?? 0) * (data[r] ?? 0)
+    right[i] = sum / (scale[i] ?? 1)
+  })
+  const solved = solveSymmetric(gram, n, [right])?.[0]
+  return solved?.map((value, i) => value / (scale[i] ?? 1)) ?? null
+}
