@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { besselJ, besselJZero } from './bessel-j'
+import { besselBulge, besselJ, besselJZero, besselSlopeZero } from './bessel-j'
 
 /** Bessel's integral, DLMF 10.9.2, by the trapezoid rule: exact to rounding for a periodic entire integrand. */
 function besselByIntegral(order: number, x: number): number {
@@ -74,4 +74,46 @@ describe('Bessel functions', () => {
   ])('refuses nonsense, naming %s', (field, act) => {
     expect(act).toThrow(expect.objectContaining({ field }))
   })
+})
+
+describe('zeros of the slope', () => {
+  // Published: Abramowitz & Stegun table 9.5, zeros of J0′ (after the one at 0), J1′, J2′, J3′.
+  it.each([
+    [0, 1, 3.83171],
+    [0, 2, 7.01559],
+    [1, 1, 1.84118],
+    [1, 2, 5.33144],
+    [2, 1, 3.05424],
+    [2, 2, 6.70613],
+    [3, 1, 4.20119],
+  ])('j′(%i,%i) = %f (A&S table 9.5, published)', (order, index, zero) => {
+    expect(Math.abs(besselSlopeZero(order, index) - zero)).toBeLessThan(6e-6)
+  })
+
+  it('every one lies where J_m stands still, and they follow one another', () => {
+    for (let order = 0; order <= 8; order++) {
+      let before = 0
+      for (let index = 1; index <= 40; index++) {
+        const zero = besselSlopeZero(order, index)
+        const slope = (besselByIntegral(order, zero + 1e-4) - besselByIntegral(order, zero - 1e-4)) / 2e-4
+        expect(Math.abs(slope)).toBeLessThan(1e-8)
+        // More than 3 apart: the spacing on which the bound of the shell's series rests.
+        if (index > 1) expect(zero - before).toBeGreaterThan(3)
+        before = zero
+      }
+    }
+  })
+
+  it.each([
+    ['order', 9, 1],
+    ['index', 1, 0],
+    ['index', 1, 1.5],
+  ])('refuses a %s that is not there', (field, order, index) => {
+    expect(() => besselSlopeZero(order, index)).toThrow(expect.objectContaining({ field }))
+  })
+})
+
+it('the bulge is J2/J0 (A&S table 9.1 at x = 1 and 2, published)', () => {
+  expect(besselBulge(1)).toBeCloseTo(0.1149034849 / 0.7651976866, 9)
+  expect(besselBulge(2)).toBeCloseTo(0.3528340286 / 0.2238907791, 9)
 })

@@ -1,6 +1,7 @@
 import besselJ0 from '@stdlib/math-base-special-besselj0'
 import besselJ1 from '@stdlib/math-base-special-besselj1'
 import { requireQuantity, requireWhole } from './require-quantity'
+import { risingRoot } from './rising-root'
 
 const MAX_ORDER = 40
 /** Below this the first term of the power series is exact to rounding. */
@@ -20,6 +21,15 @@ export function besselJ(order: number, x: number): number {
   if (order === 1) return besselJ1(x)
   if (x < SMALL_X) return leadingTerm(order, x)
   return x > order ? upwards(order, x) : downwards(order, x)
+}
+
+/**
+ * J2(x)/J0(x) = 2·J1(x)/(x·J0(x)) − 1, x > 0: how far a clamped film bulges under a pressure that swings. It rises from 0 and runs
+ * from −∞ to +∞ between one zero of J0 and the next, for 2·J1/(x·J0) = 4·Σ 1/(j_0n² − x²). `x` is not checked: root finding asks it a
+ * hundred times a drum.
+ */
+export function besselBulge(x: number): number {
+  return (2 * besselJ1(x)) / (x * besselJ0(x)) - 1
 }
 
 /** (x/2)^m / m!, DLMF 10.2.2. */
@@ -79,19 +89,24 @@ function zeroOf(order: number, index: number): number {
     order === 0
       ? [(index - 1 / 4) * Math.PI, (index - 1 / 8) * Math.PI]
       : [zeroOf(order - 1, index), zeroOf(order - 1, index + 1)]
-  const zero = bisect((x) => besselJ(order, x), low, high)
+  const falls = besselJ(order, low) > 0
+  const zero = risingRoot((x) => (falls ? -besselJ(order, x) : besselJ(order, x)), low, high)
   zeros.set(key, zero)
   return zero
 }
 
-function bisect(f: (x: number) => number, low: number, high: number): number {
-  const risesFrom = Math.sign(f(low))
-  let [a, b] = [low, high]
-  for (let step = 0; step < 60; step++) {
-    const mid = (a + b) / 2
-    if (mid === a || mid === b) break
-    if (Math.sign(f(mid)) === risesFrom) a = mid
-    else b = mid
-  }
-  return (a + b) / 2
+/**
+ * The n-th positive zero of the slope J_m′, to rounding: the wavenumbers k·a of a rigid cylinder's air. For m = 0 these are the
+ * zeros of J_1; for m ≥ 1 the first lies in (m, j_m1) and the others in (j_{m,n−1}, j_mn) (DLMF 10.21.3), where
+ * J_m′ = J_{m−1} − (m/x)·J_m changes sign once.
+ * @throws AcousticsError order not a whole number 0 to 8, index not a whole number 1 to 60
+ */
+export function besselSlopeZero(order: number, index: number): number {
+  requireWhole('order', order, { min: 0, max: 8, unit: '' })
+  requireWhole('index', index, { min: 1, max: 60, unit: '' })
+  if (order === 0) return zeroOf(1, index)
+  const slope = (x: number) => besselJ(order - 1, x) - (order / x) * besselJ(order, x)
+  const low = index === 1 ? order : zeroOf(order, index - 1)
+  const falls = index % 2 === 1
+  return risingRoot((x) => (falls ? -slope(x) : slope(x)), low, zeroOf(order, index))
 }

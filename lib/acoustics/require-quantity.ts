@@ -25,8 +25,6 @@ export function requireWhole(field: string, value: number, limits: QuantityLimit
   return value
 }
 
-const MIN_DIAMETER_M = 0.1
-const MAX_DIAMETER_M = 0.8
 /** Exact by definition (international yard and pound agreement, 1959). */
 export const METRE_PER_INCH = 0.0254
 
@@ -36,24 +34,30 @@ export const METRE_PER_INCH = 0.0254
  * @throws AcousticsError
  */
 export function requireDiameterM(diameterM: number): number {
-  const within = (m: number) => m >= MIN_DIAMETER_M && m <= MAX_DIAMETER_M
-  if (Number.isFinite(diameterM) && !within(diameterM)) {
-    const slip = within(diameterM * METRE_PER_INCH)
-      ? ` That looks like inches: ${diameterM} in is ${(diameterM * METRE_PER_INCH).toFixed(4)} m.`
-      : within(diameterM / 1000)
-        ? ` That looks like millimetres: ${diameterM} mm is ${diameterM / 1000} m.`
+  return requireLengthM('diameterM', diameterM, 0.1, 0.8)
+}
+
+/** Shell depth in metres, 0.05 to 0.65 (about 2 to 25 in); inches and millimetres are told as for a diameter. @throws AcousticsError */
+export function requireDepthM(depthM: number): number {
+  return requireLengthM('depthM', depthM, 0.05, 0.65)
+}
+
+function requireLengthM(field: string, metres: number, min: number, max: number): number {
+  const within = (m: number) => m >= min && m <= max
+  if (Number.isFinite(metres) && !within(metres)) {
+    const slip = within(metres * METRE_PER_INCH)
+      ? ` That looks like inches: ${metres} in is ${(metres * METRE_PER_INCH).toFixed(4)} m.`
+      : within(metres / 1000)
+        ? ` That looks like millimetres: ${metres} mm is ${metres / 1000} m.`
         : ''
-    throw new AcousticsError(
-      'diameterM',
-      `diameterM is ${diameterM}: allowed ${MIN_DIAMETER_M} to ${MAX_DIAMETER_M} m.${slip}`,
-    )
+    throw new AcousticsError(field, `${field} is ${metres}: allowed ${min} to ${max} m.${slip}`)
   }
-  return requireQuantity('diameterM', diameterM, { min: MIN_DIAMETER_M, max: MAX_DIAMETER_M, unit: 'm' })
+  return requireQuantity(field, metres, { min, max, unit: 'm' })
 }
 
 /** Film tension in N/m, 1 to 50 000: past the top every drum film has long since torn. @throws AcousticsError */
-export function requireTensionNPerM(tensionNPerM: number): number {
-  return requireQuantity('tensionNPerM', tensionNPerM, { min: 1, max: 50_000, unit: 'N/m' })
+export function requireTensionNPerM(tensionNPerM: number, field = 'tensionNPerM'): number {
+  return requireQuantity(field, tensionNPerM, { min: 1, max: 50_000, unit: 'N/m' })
 }
 
 /** Pitch of a drum in Hz, 10 to 5000. @throws AcousticsError naming `field`. */
