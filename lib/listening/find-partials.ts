@@ -1,7 +1,7 @@
 import type { DampedPartial } from './damped-partial'
 import { addPartial, peakHeight } from './damped-partial'
 import type { Band } from './fit-band'
-import { fitBand } from './fit-band'
+import { BandFitter } from './fit-band'
 import type { Spectrum } from './spectrum'
 import { peakOffset } from './spectrum'
 
@@ -75,7 +75,7 @@ export function fitOne(
   binHz: number,
 ): DampedPartial | null {
   const band = bandRound(start, spectrum.size, binHz)
-  const fit = fitBand(spectrum, band, 'one', Float64Array.of(start.decay, start.angle))
+  const fit = new BandFitter(spectrum, band).fit('one', Float64Array.of(start.decay, start.angle))
   const amplitude = fit?.amplitudes[0]
   if (fit === null || amplitude === undefined) return null
   return { decay: fit.parameters[0] ?? start.decay, angle: fit.parameters[1] ?? start.angle, amplitude }

@@ -25,59 +25,6 @@ export type BandFit = {
 /** Bins `first` to `last`, both included. */
 export type Band = { first: number; last: number }
 
-type Limits = { minDecay: number; maxDecay: number; minAngle: number; maxAngle: number }
-
-/**
- * Least squares, which is maximum likelihood in white noise, of damped sinusoids to a band of a spectrum. The transform of a damped
- * sinusoid of N samples is known in closed form, (1 − e^{sN}W^{kN})/(1 − e^s·W^k), so nothing is approximated by taking a band of
- * bins, and the image at negative frequencies is part of the model. Amplitudes are solved for at every step (variable projection),
- * decays and angles moved by Gauss–Newton with Marquardt's damping.
- * @param start first guess of the free parameters of `kind`
- * @param band bins to fit over
- * @returns null when the voices cannot be told apart
- */
-export function fitBand(spectrum: Spectrum, band: Band, kind: ModelKind, start: Float64Array): BandFit | null {
-  const at = new BandModel(spectrum, band, kind)
-  const limits = { minDecay: 1 / (20 * spectrum.count), maxDecay: 0.2, minAngle: 1e-3, maxAngle: 3 }
-  let parameters = within(start, kind, limits)
-  let now = at.solve(parameters)
-  if (now === null) return null
-  let damping = 1e-3
-  for (let round = 0; round < 30; round++) {
-    const step = at.step(now, damping)
-    if (step === null) return null
-    const next = within(
-      parameters.map((value, i) => value + (step[i] ?? 0)),
-      kind,
-      limits,
-    )
-    const then = at.solve(next)
-    if (then !== null && then.residual < now.residual) {
-      const gained = (now.residual - then.residual) / now.residual
-      parameters = next
-      now = then
-      damping = Math.max(1e-9, damping / 8)
-      if (gained < 1e-8) break
-    } else {
-      damping *= 10
-      if (damping > 1e6) break
-    }
-  }
-  return at.finish(now, parameters)
-}
-
-function within(parameters: Float64Array, kind: ModelKind, limits: Limits): Float64Array {
-  const kept = Float64Array.from(parameters)
-  const hold = (decay: number, angle: number) => {
-    kept[decay] = Math.min(limits.maxDecay, Math.max(limits.minDecay, kept[decay] ?? 0))
-    kept[angle] = Math.min(limits.maxAngle, Math.max(limits.minAngle, kept[angle] ?? 0))
-  }
-  hold(0, 1)
-  if (kind === 'two') hold(2, 3)
-  if (kind === 'glide') kept[2] = Math.min(6, Math.max(-6, kept[2] ?? 0))
-  return kept
-}
-
 type Solved = {
   amplitudes: Complex[]
   residual: number
@@ -86,20 +33,37 @@ type Solved = {
   columns: Float64Array[]
 }
 
-class BandModel {
+const MOST_ROUNDS = 30
+const MOST_REFUSED = 6
+/** A round that gains less than this in twice the log likelihood is the last. */
+const LEAST_GAIN = 1e-4
+const MOST_DECAY = 0.2
+/** Past this the pitch would fall by octaves. */
+const MOST_GLIDE = 6
+
+/**
+ * Least squares, which is maximum likelihood in white noise, of damped sinusoids to a band of a spectrum. The transform of a damped
+ * sinusoid of N samples is known in closed form, (1 − e^{sN}W^{kN})/(1 − e^s·W^k), so nothing is approximated by taking a band of
+ * bins, and the image at negative frequencies is part of the model. Amplitudes are solved for at every step (variable projection),
+ * decays and angles moved by Gauss–Newton with Marquardt's damping.
+ */
+export class BandFitter {
   private readonly bins: number
   private readonly data: Float64Array
   private readonly turn: Float64Array
   private readonly turnAll: Float64Array
-  private readonly free: number
   private readonly energy: number
+  private readonly leastAngle: number
+  private readonly mostAngle: number
+  /** Independent real numbers in the band. */
+  readonly freedom: number
 
   constructor(
     private readonly spectrum: Spectrum,
     band: Band,
-    private readonly kind: ModelKind,
   ) {
-    this.free = parametersOf[kind]
+    this.leastAngle = (2 * Math.PI * band.first) / spectrum.size
+    this.mostAngle = (2 * Math.PI * band.last) / spectrum.size
     this.bins = band.last - band.first + 1
     this.data = new Float64Array(2 * this.bins)
     this.turn = new Float64Array(2 * this.bins)
@@ -120,12 +84,63 @@ class BandModel {
       this.turnAll[2 * i + 1] = sin[whole] ?? 0
     }
     this.energy = energy
+    this.freedom = (2 * this.bins * spectrum.count) / spectrum.size
   }
 
-  /** The best amplitudes at these parameters, and the derivatives there. */
-  solve(parameters: Float64Array): Solved | null {
-    const voices = voicesOf(this.kind, parameters)
-    const shapes = voices.map((terms) => this.shapesOf(terms))
+  /** What is left in the band, Σ|R_k|², with the best amplitudes at these parameters; null when the voices cannot be told apart. */
+  residualAt(kind: ModelKind, parameters: Float64Array): number | null {
+    return this.amplitudesAt(kind, parameters, 0)?.residual ?? null
+  }
+
+  /**
+   * The best fit of a model.
+   * @param start first guess of its free parameters
+   * @returns null when the voices cannot be told apart
+   */
+  fit(kind: ModelKind, start: Float64Array): BandFit | null {
+    let parameters = this.within(start, kind)
+    let now = this.solve(kind, parameters)
+    if (now === null) return null
+    let damping = 1e-3
+    let refused = 0
+    for (let round = 0; round < MOST_ROUNDS && refused < MOST_REFUSED; round++) {
+      const step = leastSquares(now.columns, now.left, damping)
+      if (step === null) return null
+      const moved = parameters.map((value, i) => value + (step[i] ?? 0))
+      const next = this.within(moved, kind)
+      const then = this.solve(kind, next)
+      if (then !== null && then.residual < now.residual) {
+        const gained = this.freedom * Math.log(now.residual / then.residual)
+        parameters = next
+        now = then
+        refused = 0
+        damping = Math.max(1e-9, damping / 8)
+        if (gained < LEAST_GAIN) break
+      } else {
+        damping *= 10
+        refused++
+      }
+    }
+    return this.finish(kind, now, parameters)
+  }
+
+  /** Angles stay in the band, decays between twenty windows and some samples. */
+  private within(parameters: Float64Array, kind: ModelKind): Float64Array {
+    const kept = Float64Array.from(parameters)
+    const hold = (at: number, least: number, most: number) => {
+      kept[at] = Math.min(most, Math.max(least, kept[at] ?? 0))
+    }
+    for (const at of kind === 'two' ? [0, 2] : [0]) {
+      hold(at, 1 / (20 * this.spectrum.count), MOST_DECAY)
+      hold(at + 1, this.leastAngle, this.mostAngle)
+    }
+    if (kind === 'envelope') hold(2, this.leastAngle - this.mostAngle, this.mostAngle - this.leastAngle)
+    if (kind === 'glide') hold(2, -MOST_GLIDE, MOST_GLIDE)
+    return kept
+  }
+
+  private amplitudesAt(kind: ModelKind, parameters: Float64Array, free: number) {
+    const shapes = voicesOf(kind, parameters).map((terms) => this.shapesOf(terms, free))
     const rows = 2 * this.bins
     const linear = shapes.flatMap(({ direct, image }) => {
       const real = new Float64Array(rows)
@@ -154,7 +169,17 @@ class BandModel {
     let residual = 0
     for (const value of left) residual += value * value
     const amplitudes = shapes.map((_, j) => ({ re: solved[2 * j] ?? 0, im: solved[2 * j + 1] ?? 0 }))
-    const nonlinear = Array.from({ length: this.free }, (_, f) => {
+    return { shapes, linear, left, residual, amplitudes }
+  }
+
+  /** The best amplitudes at these parameters, and the derivatives there. */
+  private solve(kind: ModelKind, parameters: Float64Array): Solved | null {
+    const free = parametersOf[kind]
+    const solved = this.amplitudesAt(kind, parameters, free)
+    if (solved === null) return null
+    const { shapes, linear, left, residual, amplitudes } = solved
+    const rows = 2 * this.bins
+    const nonlinear = Array.from({ length: free }, (_, f) => {
       const column = new Float64Array(rows)
       shapes.forEach(({ direct, image }, j) => {
         const { re, im } = amplitudes[j] ?? { re: 0, im: 0 }
@@ -174,14 +199,10 @@ class BandModel {
     return { amplitudes, residual, left, columns: [...nonlinear, ...linear] }
   }
 
-  step(now: Solved, damping: number): Float64Array | null {
-    return leastSquares(now.columns, now.left, damping)
-  }
-
-  finish(now: Solved, parameters: Float64Array): BandFit | null {
+  private finish(kind: ModelKind, now: Solved, parameters: Float64Array): BandFit | null {
     const n = now.columns.length
-    const { size, count } = this.spectrum
-    const freedom = (2 * this.bins * count) / size
+    const { size } = this.spectrum
+    const { freedom } = this
     // By Parseval a real sound's energy is 2/size times that of its bins at positive frequencies.
     const variance = ((now.residual / size) * 2) / Math.max(1, freedom - n)
     const { gram, scale } = gramOf(now.columns)
@@ -196,7 +217,7 @@ class BandModel {
       }
     }
     return {
-      kind: this.kind,
+      kind,
       parameters,
       amplitudes: now.amplitudes,
       covariance,
@@ -208,8 +229,8 @@ class BandModel {
   }
 
   /** The voice's spectrum (index 0) and its derivative to each free parameter; `image` with every s and c conjugated. */
-  private shapesOf(terms: Term[]): { direct: Float64Array[]; image: Float64Array[] } {
-    const make = () => Array.from({ length: this.free + 1 }, () => new Float64Array(2 * this.bins))
+  private shapesOf(terms: Term[], free: number): { direct: Float64Array[]; image: Float64Array[] } {
+    const make = () => Array.from({ length: free + 1 }, () => new Float64Array(2 * this.bins))
     const direct = make()
     const image = make()
     for (const term of terms) {
@@ -230,15 +251,22 @@ class BandModel {
     const cr = c.re
     const ci = sign * c.im
     const { turn, turnAll } = this
+    const shape = into[0]
+    const derivatives = into.slice(1).map((column, f) => {
+      const ds = toS[f] ?? { re: 0, im: 0 }
+      const dc = toC[f] ?? { re: 0, im: 0 }
+      const dsi = sign * ds.im
+      return { column, kr: cr * ds.re - ci * dsi, ki: cr * dsi + ci * ds.re, cr: dc.re, ci: sign * dc.im }
+    })
     for (let i = 0; i < 2 * this.bins; i += 2) {
       const wr = turn[i] ?? 0
       const wi = turn[i + 1] ?? 0
       const er = zr * wr - zi * wi
       const ei = zr * wi + zi * wr
-      const br = turnAll[i] ?? 0
-      const bi = turnAll[i + 1] ?? 0
-      const fr = ar * br - ai * bi
-      const fi = ar * bi + ai * br
+      const vr = turnAll[i] ?? 0
+      const vi = turnAll[i + 1] ?? 0
+      const fr = ar * vr - ai * vi
+      const fi = ar * vi + ai * vr
       const dr = 1 - er
       const di = -ei
       const over = 1 / (dr * dr + di * di)
@@ -252,22 +280,13 @@ class BandModel {
       const pi = Sr * ei + Si * er - count * fi
       const Dr = (pr * dr + pi * di) * over
       const Di = (pi * dr - pr * di) * over
-      const shape = into[0]
       if (shape !== undefined) {
         shape[i] = (shape[i] ?? 0) + cr * Sr - ci * Si
         shape[i + 1] = (shape[i + 1] ?? 0) + cr * Si + ci * Sr
       }
-      for (let f = 0; f < this.free; f++) {
-        const column = into[f + 1]
-        const ds = toS[f]
-        const dc = toC[f]
-        if (column === undefined || ds === undefined || dc === undefined) continue
-        const dsi = sign * ds.im
-        const kr = cr * ds.re - ci * dsi
-        const ki = cr * dsi + ci * ds.re
-        const dci = sign * dc.im
-        column[i] = (column[i] ?? 0) + kr * Dr - ki * Di + dc.re * Sr - dci * Si
-        column[i + 1] = (column[i + 1] ?? 0) + kr * Di + ki * Dr + dc.re * Si + dci * Sr
+      for (const { column, kr, ki, cr: br, ci: bi } of derivatives) {
+        column[i] = (column[i] ?? 0) + kr * Dr - ki * Di + br * Sr - bi * Si
+        column[i + 1] = (column[i + 1] ?? 0) + kr * Di + ki * Dr + br * Si + bi * Sr
       }
     }
   }

@@ -1,13 +1,23 @@
-import type { BandFit } from './fit-band'
-import { fitBand } from './fit-band'
 import { bandRound } from './find-partials'
+import type { BandFit } from './fit-band'
+import { BandFitter } from './fit-band'
+import type { ModelKind } from './partial-shape'
 import type { Spectrum } from './spectrum'
 
 /** How far apart two partials may lie and still be one mode's pair, Hz. */
 export const WIDEST_PAIR_HZ = 14
-const FIRST_SPLITS_HZ = [0.7, 1.6, 3.2, 6.5]
-/** How much a model with more parameters must gain (twice the log likelihood) before it is believed. */
-const BELIEVED_GAIN = 20
+/** Half the width of the band about the pitch, Hz, at least: it holds the pair. */
+const BAND_HZ = 20
+/** Splits that are tried, Hz. */
+const SPLITS_HZ = [0.5, 1, 1.6, 2.4, 3.4, 4.6, 6, 8, 10, 12]
+/** Fewer independent numbers than this in the band say nothing about a pair or a glide. */
+const LEAST_FREEDOM = 16
+/** How much a richer model must gain, twice the log likelihood, to be tried and to be believed. */
+const WORTH_TRYING = 6
+const BELIEVED_GLIDE = 12
+const BELIEVED_PAIR = 20
+/** Decays of a pair's partials are told apart when that gains this much. */
+const BELIEVED_DECAYS = 8
 
 type Guess = { decay: number; angle: number }
 
@@ -20,9 +30,10 @@ export type PitchFits = {
 }
 
 /**
- * One damped sinusoid, one whose pitch glides, and a close pair, fitted to the band round the tap's pitch. A richer model is believed when
- * freedom·ln(residual ratio) exceeds what chance gives.
+ * One damped sinusoid, one whose pitch glides, and a close pair, fitted to the band round the tap's pitch. A richer model is believed
+ * when it gains more, freedom·ln(residual ratio), than chance gives.
  * @param companion the strongest other partial within {@link WIDEST_PAIR_HZ}
+ * @returns null when not even one holds
  */
 export function fitPitchModels(
   spectrum: Spectrum,
@@ -30,50 +41,71 @@ export function fitPitchModels(
   target: Guess,
   companion: Guess | null,
 ): PitchFits | null {
-  const binHz = rateHz / spectrum.size
-  const band = bandRound(target, spectrum.size, binHz, 20)
-  const one = fitBand(spectrum, band, 'one', Float64Array.of(target.decay, target.angle))
+  const fitter = new BandFitter(spectrum, bandRound(target, spectrum.size, rateHz / spectrum.size, BAND_HZ))
+  const one = fitter.fit('one', Float64Array.of(target.decay, target.angle))
   if (one === null) return null
-  const d = one.parameters[0] ?? target.decay
-  const w = one.parameters[1] ?? target.angle
-  const gain = (fit: BandFit) => one.freedom * Math.log(one.residual / fit.residual)
+  const gain = (residual: number) => one.freedom * Math.log(one.residual / residual)
+  if (one.freedom < LEAST_FREEDOM) return { one, glide: null, pair: null, best: one }
 
-  const room = one.freedom > 16
-  const glide = room ? bestOf([0.2, -0.2].map((g) => fitBand(spectrum, band, 'glide', Float64Array.of(d, w, g)))) : null
-  const pairs = !room
-    ? []
-    : [
-        ...FIRST_SPLITS_HZ.map((hz) => {
-          const split = (2 * Math.PI * hz) / rateHz
-          const envelope = fitBand(spectrum, band, 'envelope', Float64Array.of(d, w, split))
-          return envelope
-        }),
-        ...(companion === null
-          ? []
-          : [
-              fitBand(
-                spectrum,
-                band,
-                'two',
-                Float64Array.of(target.decay, target.angle, companion.decay, companion.angle),
-              ),
-            ]),
-      ]
-  let pair = bestOf(pairs)
-  if (pair?.kind === 'envelope') {
-    const [decay = d, middle = w, split = 0] = pair.parameters
-    const two = fitBand(spectrum, band, 'two', Float64Array.of(decay, middle + split / 2, decay, middle - split / 2))
-    if (two !== null && gain(two) - gain(pair) > 8) pair = two
-  }
+  const glide = tryStarts(fitter, 'glide', glideStarts(one), gain)
+  let pair = tryStarts(fitter, 'envelope', envelopeStarts(one, rateHz), gain)
+  const apart = tryStarts(fitter, 'two', twoStarts(one, pair, target, companion, rateHz), gain)
+  if (apart !== null && (pair === null || gain(apart.residual) - gain(pair.residual) > BELIEVED_DECAYS)) pair = apart
+
   let best = one
-  if (glide !== null && gain(glide) > BELIEVED_GAIN / 2) best = glide
-  if (pair !== null && gain(pair) > Math.max(BELIEVED_GAIN, best === one ? 0 : gain(best) + BELIEVED_GAIN / 2))
-    best = pair
+  let bar = BELIEVED_PAIR
+  if (glide !== null && gain(glide.residual) > BELIEVED_GLIDE) {
+    best = glide
+    bar = Math.max(bar, gain(glide.residual) + BELIEVED_PAIR / 2)
+  }
+  if (pair !== null && gain(pair.residual) > bar) best = pair
   return { one, glide, pair, best }
 }
 
-function bestOf(fits: (BandFit | null)[]): BandFit | null {
-  let best: BandFit | null = null
-  for (const fit of fits) if (fit !== null && (best === null || fit.residual < best.residual)) best = fit
-  return best
+/** The fit from the start that leaves least, when it promises anything at all. */
+function tryStarts(
+  fitter: BandFitter,
+  kind: ModelKind,
+  starts: Float64Array[],
+  gain: (residual: number) => number,
+): BandFit | null {
+  let best: { start: Float64Array; residual: number } | null = null
+  for (const start of starts) {
+    const residual = fitter.residualAt(kind, start)
+    if (residual !== null && (best === null || residual < best.residual)) best = { start, residual }
+  }
+  return best !== null && gain(best.residual) > WORTH_TRYING ? fitter.fit(kind, best.start) : null
+}
+
+function glideStarts({ parameters: [d = 0, w = 0] }: BandFit): Float64Array[] {
+  return [-0.3, 0.1, 0.3, 0.8, 2].flatMap((gamma) => {
+    // The one partial's angle is the glide's at about the middle of its energy, where half the glide is over.
+    return [Float64Array.of(d, w, gamma), Float64Array.of(d, w - d * gamma, gamma)]
+  })
+}
+
+function envelopeStarts({ parameters: [d = 0, w = 0] }: BandFit, rateHz: number): Float64Array[] {
+  return SPLITS_HZ.flatMap((hz) => {
+    const split = (2 * Math.PI * hz) / rateHz
+    return [-0.4, 0, 0.4].map((off) => Float64Array.of(0.9 * d, w + off * split, split))
+  })
+}
+
+function twoStarts(
+  { parameters: [d = 0, w = 0] }: BandFit,
+  pair: BandFit | null,
+  target: Guess,
+  companion: Guess | null,
+  rateHz: number,
+): Float64Array[] {
+  const starts: Float64Array[] = []
+  if (pair !== null) {
+    const [decay = d, middle = w, split = 0] = pair.parameters
+    starts.push(Float64Array.of(decay, middle + split / 2, decay, middle - split / 2))
+  }
+  if (companion !== null) {
+    const apart = Math.abs(companion.angle - target.angle) > (2 * Math.PI * 0.2) / rateHz
+    if (apart) starts.push(Float64Array.of(target.decay, target.angle, companion.decay, companion.angle))
+  }
+  return starts
 }
