@@ -9,6 +9,7 @@ const table = {
   'audit:read': ['owner'],
   'player:edit': ['drum-tech', 'tour-manager'],
   'kit:edit': ['drum-tech'],
+  'gauge:edit': ['drum-tech'],
   'plot:edit': ['drum-tech'],
   'patch:edit': ['drum-tech'],
   'revision:issue': ['drum-tech'],

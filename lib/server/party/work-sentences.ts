@@ -18,6 +18,7 @@ const renamed = (was: string, is: string, where = '') =>
 const parts = (names: unknown) =>
   Array.isArray(names) ? (names.length > 3 ? `${names.length} parts` : names.map(String).join(', ')) : ''
 const linkKind = ({ text }: Told) => (text('purpose') === 'bench' ? 'bench link' : 'reply link')
+const pairWords = ({ text }: Told) => `${text('name')}: ${text('reading')} at a tap of ${text('tapHz')} Hz`
 const channelName = (number: string, name: string) => `channel ${number}${name ? `, ${name},` : ''}`
 
 const commandWords: Record<string, string> = {
@@ -63,6 +64,15 @@ export const workSentences: Record<string, (told: Told) => string> = {
   'note-template.added': ({ text }) => `made the note template ${text('name')}`,
   'note-template.changed': ({ text }) => `changed the note template ${renamed(text('from.name'), text('to.name'))}`,
   'note-template.removed': ({ text }) => `took the note template ${text('was.name')} away`,
+  'gauge.added': ({ text }) => `added the gauge ${text('name')}`,
+  'gauge.changed': ({ text }) => `changed the gauge ${renamed(text('from.name'), text('to.name'))}`,
+  'gauge.removed': ({ text }) => `took the gauge ${text('name')} away`,
+  'gauge.restored': ({ text }) => `put the gauge ${text('name')} back`,
+  'gauge.chosen': ({ text }) =>
+    text('to') ? `made ${text('to')} the tour's gauge` : `left the tour without a gauge${after('after', text('from'))}`,
+  'gauge.pair-added': (told) => `added a pair to the gauge ${pairWords(told)}`,
+  'gauge.pair-struck': (told) => `struck a pair of the gauge ${pairWords(told)}`,
+  'gauge.pair-restored': (told) => `let a struck pair count again at the gauge ${pairWords(told)}`,
   'plot.changed': ({ itself, detail }) => {
     const commands = detail['commands']
     const words = Array.isArray(commands)
