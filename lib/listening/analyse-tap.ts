@@ -21,7 +21,7 @@ export function analyseTap(samples: Float32Array, sampleRateHz: number, options:
   const onset = strikeOnset(samples)
   if (onset.kind === 'silent') return { outcome: 'refused', kind: 'silent', onsetS: null }
   if (onset.kind === 'steady') return { outcome: 'refused', kind: 'not-a-tap', onsetS: null }
-  const heard = hearStrike({ samples, sampleRateHz, strikeAt: onset.at, expect: options })
+  const heard = hearStrike({ samples, sampleRateHz, strikeAt: onset.at, quiet: onset.quiet, expect: options })
   const onsetS = onset.at / sampleRateHz
   if (typeof heard === 'string') return { outcome: 'refused', kind: heard, onsetS }
   return {

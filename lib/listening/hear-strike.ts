@@ -1,21 +1,28 @@
+import { chooseTapPartial } from './choose-tap-partial'
+import { clippedUntil } from './clipped-until'
 import type { DampedPartial } from './damped-partial'
 import { addPartial } from './damped-partial'
 import type { FoundPartial } from './find-partials'
 import { findPartials, fitOne, HIGHEST_HZ } from './find-partials'
+import { glidingPitch } from './gliding-pitch'
 import { LOW_RATE_STEP, lowRate } from './low-rate'
 import type { PitchFits } from './pitch-models'
 import { fitPitchModels, WIDEST_PAIR_HZ } from './pitch-models'
 import type { FittedPitch } from './pitch-of-fit'
 import { pitchOfFit } from './pitch-of-fit'
-import { spectrumOf } from './spectrum'
+import { hasSecondStrike } from './second-strike'
 import type { Spectrum } from './spectrum'
+import { spectrumOf } from './spectrum'
 import type { TapGlide, TapReading, TapRefusalKind } from './tap-report'
+import { isHarmonic, LEAST_LOW_SHARE, lowShare } from './tap-signs'
 
 export type StrikeToHear = {
   samples: Float32Array
   sampleRateHz: number
   /** Index of the strike. */
   strikeAt: number
+  /** Mean square of a sample while nothing sounds. */
+  quiet: number
   expect: { expectHz?: number; expectWithinCents?: number }
 }
 
@@ -28,73 +35,64 @@ const FIRST_SKIP_S = 0.004
 /** A pitch is told by the ring down to e^−7 of it; what comes after is noise. */
 const RING_TAUS = 7
 const SHORTEST_WINDOW_S = 0.15
-/** Two pitches this near in height cannot be told apart by strength, dB. */
-const EQUAL_DB = 1.5
+/** Decays that a head can have, s for 60 dB; what rings longer is held, what is shorter is a knock. */
+const SHORTEST_T60_S = 0.05
+const LONGEST_T60_S = 4.5
+/** Of the pitch's band, power: over the first a glide is looked for, over the second the sound is no ringing head. */
+const GLIDE_UNEXPLAINED = 0.02
+const MOST_UNEXPLAINED = 0.25
+/** A pitch less sure than this is not named, cents. */
+const MOST_ERROR_CENTS = 25
 
 /** The pitch of one strike, or why none is named. */
 export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
-  const { samples, sampleRateHz, strikeAt, expect } = strike
-  const rateHz = sampleRateHz / LOW_RATE_STEP
+  const { samples, sampleRateHz, strikeAt, quiet, expect } = strike
   const end = Math.min(samples.length, strikeAt + Math.round(LONGEST_RING_S * sampleRateHz))
-  if ((end - strikeAt) / sampleRateHz < SHORTEST_RING_S) return 'too-short'
+  const unclippedFrom = clippedUntil(samples, sampleRateHz, strikeAt, end)
+  if (unclippedFrom === null) return 'clipped'
+  if ((end - unclippedFrom) / sampleRateHz < SHORTEST_RING_S) return 'too-short'
+  if (hasSecondStrike(samples, sampleRateHz, strikeAt, end)) return 'double-hit'
+  const share = lowShare({ samples, sampleRateHz, strikeAt, end, quiet })
+  if (share !== null && share < LEAST_LOW_SHARE) return 'not-a-tap'
 
-  const first = listen(samples, strikeAt, end, FIRST_SKIP_S, sampleRateHz)
-  const found = findPartials(first.spectrum, rateHz).partials
-  const chosen = choose(found, rateHz, expect)
-  if (typeof chosen === 'string') return chosen
+  const rateHz = sampleRateHz / LOW_RATE_STEP
+  const firstFrom = Math.max(unclippedFrom, strikeAt + Math.round(FIRST_SKIP_S * sampleRateHz))
+  const found = findPartials(spectrumFrom(samples, firstFrom, end), rateHz).partials
+  if (isHarmonic(found)) return 'not-a-tap'
+  const chosen = chooseTapPartial(found, rateHz, expect)
+  if (typeof chosen === 'string') return gliding(strike, end) ?? chosen
 
   // Once the decay is known: begin as early and end as soon as it allows.
   const tauS = 1 / (chosen.decay * rateHz)
-  const skipS = Math.min(0.02, Math.max(0.002, 0.1 * tauS))
-  const ringS = Math.max(SHORTEST_WINDOW_S, skipS + RING_TAUS * tauS)
-  const until = Math.min(end, strikeAt + Math.round(ringS * sampleRateHz))
-  const second = listen(samples, strikeAt, until, skipS, sampleRateHz)
-  const { spectrum, companion } = alone(second.spectrum, found, chosen, rateHz)
+  const skip = Math.round(Math.min(0.02, Math.max(0.002, 0.1 * tauS)) * sampleRateHz)
+  const from = Math.max(unclippedFrom, strikeAt + skip)
+  const ring = Math.round(Math.max(SHORTEST_WINDOW_S, RING_TAUS * tauS) * sampleRateHz)
+  const until = Math.min(end, from + ring)
+  const { spectrum, companion } = alone(spectrumFrom(samples, from, until), found, chosen, rateHz)
   const fits = fitPitchModels(spectrum, rateHz, chosen, companion)
   if (fits === null) return 'unclear'
-
-  const windowS = (until - strikeAt) / sampleRateHz - skipS
-  const pitch = pitchOfFit(fits.best, rateHz, skipS, windowS)
-  const noise = Math.sqrt(noiseVariance(fits))
-  const snrDb = 20 * Math.log10(Math.hypot(...pitch.partials.map(({ amplitude }) => amplitude)) / (Math.SQRT2 * noise))
+  const unexplained = fits.best.residual / fits.best.energy
+  if (unexplained > GLIDE_UNEXPLAINED) {
+    const glide = gliding(strike, end)
+    if (glide !== null) return glide
+  }
+  const pitch = pitchOfFit(fits.best, rateHz, (from - strikeAt) / sampleRateHz, (until - from) / sampleRateHz)
+  const refused = refusalOf(pitch, unexplained, share)
+  if (refused !== null) return refused
   return {
     ...pitch,
-    confidence: confidenceOf(pitch, fits),
+    confidence: confidenceOf(pitch, unexplained),
     glide: glideOf(fits, rateHz),
-    snrDb,
+    snrDb: snrDb(pitch, fits.best.noiseVariance * LOW_RATE_STEP),
     heardForS: (until - strikeAt) / sampleRateHz,
   }
 }
 
-function listen(
-  samples: Float32Array,
-  strikeAt: number,
-  end: number,
-  skipS: number,
-  sampleRateHz: number,
-): { spectrum: Spectrum } {
-  const low = lowRate(samples, strikeAt + Math.round(skipS * sampleRateHz), end)
+function spectrumFrom(samples: Float32Array, from: number, to: number): Spectrum {
+  const low = lowRate(samples, from, to)
   let size = 1024
   while (size < low.length) size *= 2
-  return { spectrum: spectrumOf(low, size) }
-}
-
-/** The partial that is the tap's pitch. */
-function choose(
-  found: FoundPartial[],
-  rateHz: number,
-  { expectHz, expectWithinCents = 500 }: StrikeToHear['expect'],
-): FoundPartial | TapRefusalKind {
-  const hz = (partial: DampedPartial) => (partial.angle * rateHz) / (2 * Math.PI)
-  const near =
-    expectHz === undefined
-      ? found
-      : found.filter((partial) => Math.abs(1200 * Math.log2(hz(partial) / expectHz)) <= expectWithinCents)
-  const [first, ...others] = near
-  if (first === undefined) return found.length === 0 ? 'too-noisy' : 'unclear'
-  const rival = others.find((other) => Math.abs(hz(other) - hz(first)) > WIDEST_PAIR_HZ)
-  if (rival !== undefined && 20 * Math.log10(first.height / rival.height) < EQUAL_DB) return 'unclear'
-  return first
+  return spectrumOf(low, size)
 }
 
 /** The spectrum with everything but the chosen partial and its near companions taken out. */
@@ -106,26 +104,44 @@ function alone(
 ): { spectrum: Spectrum; companion: DampedPartial | null } {
   const binHz = rateHz / spectrum.size
   const reach = Math.ceil((HIGHEST_HZ + 100) / binHz)
-  const far = (partial: DampedPartial) =>
-    (Math.abs(partial.angle - chosen.angle) * rateHz) / (2 * Math.PI) > WIDEST_PAIR_HZ
-  const others = found.filter(far)
-  const companion = found.find((partial) => partial !== chosen && !far(partial)) ?? null
-  // Strongest first, each with those before it taken out, the chosen one's own skirt too.
+  const isNear = (partial: DampedPartial) =>
+    (Math.abs(partial.angle - chosen.angle) * rateHz) / (2 * Math.PI) <= WIDEST_PAIR_HZ
   const rest: Spectrum = { ...spectrum, re: Float64Array.from(spectrum.re), im: Float64Array.from(spectrum.im) }
   const kept: DampedPartial[] = []
+  // Strongest first, each with those before it taken out, so that none is fitted through another's skirt.
   for (const partial of found) {
     const fit = fitOne(rest, partial, binHz)
     if (fit === null) continue
     addPartial(rest, fit, -1, reach)
-    if (!others.includes(partial)) kept.push(fit)
+    if (isNear(partial)) kept.push(fit)
   }
   for (const fit of kept) addPartial(rest, fit, 1, reach)
-  return { spectrum: rest, companion }
+  return { spectrum: rest, companion: found.find((partial) => partial !== chosen && isNear(partial)) ?? null }
 }
 
-/** Variance of the noise a sample at the full rate, taken as as strong at all frequencies as in the pitch's band. */
-function noiseVariance({ best }: PitchFits): number {
-  return best.noiseVariance * LOW_RATE_STEP
+function gliding({ samples, sampleRateHz, strikeAt, quiet }: StrikeToHear, end: number): HeardStrike | null {
+  const heard = glidingPitch(samples, sampleRateHz, strikeAt, end)
+  if (heard === null) return null
+  const { pitchHz, standardErrorHz, t60S, amplitude, glide } = heard
+  return {
+    pitchHz,
+    standardErrorHz,
+    t60S,
+    t60StandardErrorS: 0.2 * t60S,
+    partials: [{ frequencyHz: pitchHz, standardErrorHz, amplitude, t60S }],
+    warble: null,
+    glide,
+    confidence: 1 / (1 + errorCents(heard) / 10),
+    snrDb: 20 * Math.log10(amplitude / Math.sqrt(2 * quiet + 1e-12)),
+    heardForS: (end - strikeAt) / sampleRateHz,
+  }
+}
+
+function refusalOf(pitch: FittedPitch, unexplained: number, share: number | null): TapRefusalKind | null {
+  if (unexplained > MOST_UNEXPLAINED) return share === null ? 'too-noisy' : 'not-a-tap'
+  if (pitch.t60S > LONGEST_T60_S || pitch.t60S < SHORTEST_T60_S) return 'not-a-tap'
+  if (errorCents(pitch) > MOST_ERROR_CENTS) return 'too-noisy'
+  return null
 }
 
 function glideOf({ best }: PitchFits, rateHz: number): TapGlide | null {
@@ -133,12 +149,19 @@ function glideOf({ best }: PitchFits, rateHz: number): TapGlide | null {
   const [decay = 0, angle = 0, gamma = 0] = best.parameters
   const settledHz = (angle * rateHz) / (2 * Math.PI)
   const overHz = (gamma * decay * rateHz) / Math.PI
-  const cents = 1200 * Math.log2(Math.max(0.5, 1 + overHz / settledHz))
-  return { cents, settledHz }
+  return { cents: 1200 * Math.log2(Math.max(0.5, 1 + overHz / settledHz)), settledHz }
 }
 
-function confidenceOf(pitch: FittedPitch, { best }: PitchFits): number {
-  const errorCents = (1200 / Math.LN2) * (pitch.standardErrorHz / pitch.pitchHz)
-  const unexplained = best.residual / best.energy
-  return 1 / (1 + errorCents / 10) / (1 + 4 * unexplained)
+/** Power of the partials at the strike over the noise's. */
+function snrDb({ partials }: FittedPitch, noiseVariance: number): number {
+  const power = partials.reduce((sum, { amplitude }) => sum + amplitude ** 2 / 2, 0)
+  return 10 * Math.log10(power / noiseVariance)
+}
+
+function errorCents({ standardErrorHz, pitchHz }: { standardErrorHz: number; pitchHz: number }): number {
+  return ((1200 / Math.LN2) * standardErrorHz) / pitchHz
+}
+
+function confidenceOf(pitch: FittedPitch, unexplained: number): number {
+  return 1 / (1 + errorCents(pitch) / 10) / (1 + 4 * unexplained)
 }
