@@ -9,7 +9,7 @@ export function highPass(
   sampleRateHz: number,
   cutHz: number,
 ): Float32Array {
-  let sound = samples.slice(from, to)
+  let sound: Float32Array = samples.slice(from, to)
   for (const q of [0.541196, 1.306563]) sound = section(sound, sampleRateHz, cutHz, q)
   return sound
 }

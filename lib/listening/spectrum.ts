@@ -10,19 +10,15 @@ export type Spectrum = {
   count: number
 }
 
-const plans = new Map<number, FFT>()
+type Plan = { fft: FFT; padded: number[]; out: number[] }
+
+const plans = new Map<number, Plan>()
 
 /** Spectrum of at most `size` samples. @param size a power of two, no less than the number of samples */
 export function spectrumOf(sound: ArrayLike<number>, size: number): Spectrum {
-  let plan = plans.get(size)
-  if (plan === undefined) {
-    plan = new FFT(size)
-    plans.set(size, plan)
-  }
-  const padded = new Array<number>(size).fill(0)
-  for (let i = 0; i < sound.length; i++) padded[i] = sound[i] ?? 0
-  const out = plan.createComplexArray() as number[]
-  plan.realTransform(out, padded)
+  const { fft, padded, out } = planOf(size)
+  for (let i = 0; i < size; i++) padded[i] = sound[i] ?? 0
+  fft.realTransform(out, padded)
   const half = size / 2 + 1
   const re = new Float64Array(half)
   const im = new Float64Array(half)
@@ -31,6 +27,17 @@ export function spectrumOf(sound: ArrayLike<number>, size: number): Spectrum {
     im[k] = out[2 * k + 1] ?? 0
   }
   return { re, im, size, count: sound.length }
+}
+
+/** The transform and its arrays are made once a size; nothing is kept in them from one sound to the next. */
+function planOf(size: number): Plan {
+  let plan = plans.get(size)
+  if (plan === undefined) {
+    const fft = new FFT(size)
+    plan = { fft, padded: new Array<number>(size).fill(0), out: fft.createComplexArray() }
+    plans.set(size, plan)
+  }
+  return plan
 }
 
 /**
