@@ -34,6 +34,10 @@ const USUAL_FLOOR = 0.05
 export function edgeStiffness(k: number, poissonRatio = PET_POISSON_RATIO): number {
   if (!Number.isInteger(k) || k < 0 || k > 400) throw new AcousticsError('k', `k is ${k}: a whole number 0 to 400.`)
   requireQuantity('poissonRatio', poissonRatio, { min: 0, max: 0.5, unit: '' })
+  return stiffnessOf(k, poissonRatio)
+}
+
+function stiffnessOf(k: number, poissonRatio: number): number {
   if (k === 0) return 1 / (1 - poissonRatio)
   return (k * k - 1) / (2 * k - 1 + poissonRatio)
 }
@@ -90,7 +94,7 @@ function patternGain(m: number, lugs: number, basis: ReadingBasis, hoop: number)
   let seen = 0
   for (let turn = -ALIAS_TURNS; turn <= ALIAS_TURNS; turn++) {
     const k = Math.abs(m + turn * lugs)
-    const stiffness = edgeStiffness(k)
+    const stiffness = stiffnessOf(k, PET_POISSON_RATIO)
     const resists = hoop * ringBending(k) + FILM_OVER_RODS * stiffness
     give += 1 / resists
     seen += (seenWeight(k, basis) * stiffness) / resists
