@@ -50,7 +50,7 @@ describe('what is learned of a hoop', () => {
     expect(Math.log(gain.low / prior.gain.median)).toBeCloseTo(-1.645 * 0.7, 1)
     // The bounds of κ cut the prior's tails a little, no more.
     expect(Math.abs(Math.log(hoop.value / prior.hoop.median))).toBeLessThan(0.02)
-    expect(Math.log(hoop.high / prior.hoop.median)).toBeCloseTo(1.645, 1)
+    expect(Math.log(hoop.high / prior.hoop.median)).toBeCloseTo(1.645 * 1.2, 1)
   })
 
   it.each(['gauge', 'tap'] as const)(

@@ -32,11 +32,11 @@ export type HoopLearning = {
 
 /**
  * Where to start before any move, all from memory. Hoop: pressed steel about 0.02, cast about five times that, thin ones a
- * fifth. Gain: a quarter turn all round raises a dial gauge by some 5 units and a tap by 1.5 to 2 semitones, give or take a factor of two.
+ * tenth. Gain: a quarter turn all round raises a dial gauge by some 5 units and a tap by 1.5 to 2 semitones, give or take a factor of two.
  */
 export const HOOP_PRIORS: Readonly<Record<ReadingBasis, HoopPrior>> = {
-  gauge: { hoop: { median: USUAL_HOOP, spread: 1 }, gain: { median: 20, spread: 0.7 } },
-  tap: { hoop: { median: USUAL_HOOP, spread: 1 }, gain: { median: 700, spread: 0.7 } },
+  gauge: { hoop: { median: USUAL_HOOP, spread: 1.2 }, gain: { median: 20, spread: 0.7 } },
+  tap: { hoop: { median: USUAL_HOOP, spread: 1.2 }, gain: { median: 700, spread: 0.7 } },
 }
 
 /** Share by which a hand misses the turn it means to make, standard deviation (from memory). */

@@ -7,7 +7,7 @@ import { requireLugs } from './lug-order'
 export const PET_POISSON_RATIO = 0.38
 
 /** The hoop parameter κ: bounds, and where to start before any move has been logged (from memory; see `lugResponse`). */
-export const HOOP_LIMITS = { min: 5e-4, max: 1 } as const
+export const HOOP_LIMITS = { min: 2e-4, max: 1 } as const
 export const USUAL_HOOP = 0.02
 
 /**
@@ -65,9 +65,10 @@ export type LugResponse = {
  * `basis` says what the readings see: a gauge the film's tension at each lug (seen_k = 1); taps the (1,1) pair, so the mean and,
  * at half weight, k = ±2 (split (ε/2)·f11, so ± ε/4 of pitch where an even change of ε gives ε/2), else nothing.
  *
- * The usual κ is from memory: 2.3 mm steel, 40 mm high, 12 in, six rods gives 0.014 (derived) for the web alone. Left out:
- * friction on the edge (it leaks into m = 1 and slows everything), bent hoops, uneven lugs, the open section's easy twist
- * (steeper in k; the learned κ stands for it), what lies between the edge and the gauge's foot.
+ * The usual κ is from memory: 2.3 mm steel, 40 mm high, 12 in, six rods gives 0.014 (derived) for the web alone,
+ * and down to a twentieth of that where its open section may twist freely. Left out:
+ * friction on the edge (it leaks into m = 1 and slows everything), bent hoops, uneven lugs, how
+ * much steeper in k that twist is (the learned κ stands for it), what lies between the edge and the gauge's foot.
  * @throws AcousticsError lugs not a whole number 4 to 12, hoop outside its limits
  */
 export function lugResponse({
@@ -77,7 +78,7 @@ export function lugResponse({
 }: {
   lugs: number
   basis: ReadingBasis
-  /** Hoop parameter κ, no unit, 0.0005 (soft) to 1 (stiff); learned by `learnHoop`. */
+  /** Hoop parameter κ, no unit, 0.0002 (soft) to 1 (stiff); learned by `learnHoop`. */
   hoop?: number
 }): LugResponse {
   requireLugs(lugs)
