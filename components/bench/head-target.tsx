@@ -9,7 +9,7 @@ export function HeadTarget({ drum, head, readBy }: { drum: BenchDrum; head: Benc
       {readBy === 'gauge' ? <GaugeTarget gauge={head.gauge} /> : <TapTarget head={head} />}
       {head.note && (
         <p className="mt-1">
-          Note <strong>{head.note.name}</strong>
+          The drum’s note <strong>{head.note.name}</strong>
           {head.note.cents !== 0 && ` ${head.note.cents > 0 ? '+' : ''}${head.note.cents} cents`},{' '}
           <span className="figures">{hzWords(head.note.hz)} Hz</span>
           {drum.relationWords && <span className="text-soft">; {drum.relationWords}</span>}
@@ -37,7 +37,7 @@ function TapTarget({ head }: { head: BenchHead }) {
         <span className="figures">
           {hzWords(head.tap.lowHz)} to {hzWords(head.tap.highHz)} Hz
         </span>{' '}
-        is where it may truly lie: an estimate of this head in open air. Even first, then the note by ear.
+        is where it may truly lie: an estimate of this drum. Even first, then the note by ear.
       </p>
     </>
   )

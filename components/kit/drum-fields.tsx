@@ -2,6 +2,7 @@ import { useFormContext, useWatch } from 'react-hook-form'
 import { Checkbox } from '@/components/ui/checkbox'
 import { drumRoles, drumRoleWords, lugCounts } from '@/lib/contracts/kit'
 import type { DrumForm, NoteReader } from '@/lib/contracts/kit-form'
+import { HEAD_RELATIONS } from '@/lib/tuning/head-relation'
 import { headRelationWords } from '@/lib/tuning/interval-name'
 import { CommonFields } from './common-fields'
 import { FormPart } from './form-part'
@@ -11,7 +12,13 @@ import { SizeField } from './size-field'
 import { TextField } from './text-field'
 
 const roleOptions = drumRoles.map((role) => ({ value: role, label: drumRoleWords[role] }))
+const relationStarts = HEAD_RELATIONS.map(({ resonantCents }) => String(resonantCents).replace('-', '−')).join(', ')
 const lugOptions = lugCounts.map((count) => ({ value: String(count), label: String(count) }))
+
+/** What a relation of the taps does, where it is one of the usual ones; else its size in words. */
+function relationHint(cents: number): string {
+  return HEAD_RELATIONS.find(({ resonantCents }) => resonantCents === cents)?.means ?? headRelationWords(cents)
+}
 
 /** Everything a drum is described by. */
 export function DrumFields({ reader }: { reader: NoteReader }) {
@@ -51,7 +58,14 @@ export function DrumFields({ reader }: { reader: NoteReader }) {
             path="spec.headRelationCents"
             label="Resonant over batter"
             unit="cents"
-            hint={relation.trim() !== '' && Number.isFinite(cents) ? headRelationWords(cents) : '0, 300 or −200'}
+            hint={relation.trim() !== '' && Number.isFinite(cents) ? relationHint(cents) : relationStarts}
+          />
+          <TextField
+            path="spec.measuredTapRatio"
+            label="Tap over note, measured"
+            optional
+            unit=""
+            hint="batter tap ÷ drum’s note, near 1.7"
           />
           <TextField path="spec.toleranceCents" label="Even within" unit="cents" hint="how far a lug may stand off" />
           <TextField path="spec.muffling" label="Muffling" optional />

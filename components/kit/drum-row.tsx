@@ -54,8 +54,8 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
       </div>
       <div className="max-xl:col-span-2 max-xl:row-start-3">
         <dl className="flex flex-col gap-1">
-          <HeadLine side="batter" head={spec.batter} figures={estimate?.batter ?? null} ported={false} />
-          <HeadLine side="resonant" head={spec.resonant} figures={estimate?.resonant ?? null} ported={spec.ported} />
+          <HeadLine side="batter" head={spec.batter} estimate={estimate} />
+          <HeadLine side="resonant" head={spec.resonant} estimate={estimate} />
         </dl>
         {spec.resonant && <p className="mt-0.5 text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>}
       </div>

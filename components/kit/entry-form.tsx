@@ -151,11 +151,13 @@ const words: Record<string, string> = {
   },
   ...{
     headRelationCents: 'resonant over batter',
+    measuredTapRatio: 'tap over note',
     toleranceCents: 'even within',
     insteadOf: 'instead of',
     type: 'kind',
   },
   ...{ diameterMinIn: 'across, from', diameterMaxIn: 'across, to', depthMinIn: 'deep, from', depthMaxIn: 'deep, to' },
+  ...{ range: 'range', slackNPerM: 'slack under', chokedNPerM: 'chokes over' },
   ...{ batter: 'batter head', resonant: 'resonant head', supply: 'brought by', count: 'how many' },
 }
 

@@ -50,6 +50,10 @@ function specParticulars(entry: EntryInput, reader: KitReader): Particular[] {
         { label: 'Note', words: spec.note ? noteText(spec.note, reader.locale) : 'no note yet' },
         { label: 'Note locked', words: spec.noteLocked ? 'yes' : 'no' },
         { label: 'Heads', words: headRelationWords(spec.headRelationCents) },
+        {
+          label: 'Tap over note',
+          words: spec.measuredTapRatio === null ? 'not measured' : String(spec.measuredTapRatio),
+        },
         { label: 'Tolerance', words: `${spec.toleranceCents} cents` },
         { label: 'Muffling', words: spec.muffling },
         { label: 'May come instead', words: spec.insteadOf ? insteadWords(spec.insteadOf) : 'nothing else' },
@@ -76,6 +80,10 @@ function headParticulars(side: string, head: Head | null): Particular[] {
     { label: `${side} head`, words: head ? headWords(head) : 'no head' },
     { label: `${side} coating`, words: head ? `${head.coatingGPerM2} g/m²` : 'none' },
     { label: `${side} gauge`, words: head?.gauge == null ? 'not noted' : String(head.gauge) },
+    {
+      label: `${side} range`,
+      words: head?.range ? `${head.range.slackNPerM} to ${head.range.chokedNPerM} N/m` : 'as usual',
+    },
   ]
 }
 

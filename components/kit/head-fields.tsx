@@ -1,4 +1,6 @@
 import { useWatch } from 'react-hook-form'
+import { defaultTensionRange } from '@/lib/acoustics/tension-range'
+import type { DrumRole } from '@/lib/acoustics/tension-range'
 import { micrometreWords, parsePlies } from '@/lib/staging/plies'
 import { TextField } from './text-field'
 
@@ -18,6 +20,8 @@ const dampings = [
 /** What one head is made of, and where the drum tech last had it. */
 export function HeadFields({ path }: { path: 'spec.batter' | 'spec.resonant' }) {
   const { plyMils } = parsePlies(useWatch({ name: `${path}.plyMils` }) as string)
+  const role = useWatch({ name: 'spec.role' }) as DrumRole
+  const usual = defaultTensionRange(role, path === 'spec.batter' ? 'batter' : 'resonant')
   return (
     <div className="grid grid-cols-2 gap-x-4 gap-y-3 sm:grid-cols-3">
       <TextField
@@ -30,6 +34,20 @@ export function HeadFields({ path }: { path: 'spec.batter' | 'spec.resonant' }) 
       <TextField path={`${path}.damping`} label="Damping" options={dampings} />
       <TextField path={`${path}.coatingGPerM2`} label="Coating adds" unit="g/m²" hint="0 if not known" />
       <TextField path={`${path}.gauge`} label="Gauge, noted" optional unit="" hint="your own gauge’s reading" />
+      <TextField
+        path={`${path}.range.slackNPerM`}
+        label="Slack under"
+        optional
+        unit="N/m"
+        hint={`film tension; ${usual.slackNPerM} from memory`}
+      />
+      <TextField
+        path={`${path}.range.chokedNPerM`}
+        label="Chokes over"
+        optional
+        unit="N/m"
+        hint={`film tension; ${usual.chokedNPerM} from memory`}
+      />
     </div>
   )
 }

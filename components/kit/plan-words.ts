@@ -1,19 +1,4 @@
-import type { HeadCaution } from '@/lib/acoustics/head-estimate'
-import type { NoteWarning } from '@/lib/tuning/note-plan'
-
-/** A warning of the plan in words; `nameOf` names the other drums. */
-export function warningWords(warning: NoteWarning, above: boolean, nameOf: (id: string) => string): string {
-  switch (warning.kind) {
-    case 'below-range':
-      return 'below its range: the head goes slack'
-    case 'above-range':
-      return 'above its range: the head chokes'
-    case 'off-middle':
-      return above ? 'high in its range, above the middle' : 'low in its range, below the middle'
-    case 'shared-note':
-      return `sounds the same note as ${warning.withDrumIds.map(nameOf).join(' and ')}`
-  }
-}
+import type { HeadCaution } from '@/lib/acoustics/head-cautions'
 
 export const cautionWords: Record<HeadCaution, string> = {
   slack: 'Under its playable range: the head may not hold the note.',

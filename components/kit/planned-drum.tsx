@@ -1,38 +1,32 @@
-import { Button } from '@/components/ui/button'
-import { Checkbox } from '@/components/ui/checkbox'
 import type { DrumEntry } from '@/lib/contracts/kit'
 import { noteText } from '@/lib/contracts/kit-form'
 import { drumEstimate } from '@/lib/tuning/drum-estimate'
 import type { TuningStage } from '@/lib/tuning/drum-estimate'
 import { headRelationWords } from '@/lib/tuning/interval-name'
-import type { PlannedDrum as Judgement } from '@/lib/tuning/note-plan'
+import { DrumFigures } from './drum-figures'
 import { hertz } from './figure-words'
 import { HeadFigures } from './head-figures'
 import type { KitReader } from './kit-reader'
-import { warningWords } from './plan-words'
+import type { Standing } from './notes/standing'
 import { WhyTheseNumbers } from './why-these-numbers'
 
 export interface PlannedDrumProps {
   /** As the plan has it. */
   drum: DrumEntry
-  /** The note that the kit has, when the plan has another. */
+  /** What the kit has, when the plan has another. */
   was: string | null
-  judgement: Judgement | undefined
+  /** How its note stands, the gravest first. */
+  standings: readonly Standing[]
   reader: KitReader
   stage: TuningStage
-  nameOf: (id: string) => string
-  /** Null for readers. */
-  edit: { move: (semitones: number) => void; lock: (locked: boolean) => void } | null
 }
 
 /** One drum of the plan: its note, what both heads need for it, and what to watch. */
-export function PlannedDrum({ drum, was, judgement, reader, stage, nameOf, edit }: PlannedDrumProps) {
+export function PlannedDrum({ drum, was, standings, reader, stage }: PlannedDrumProps) {
   const { spec } = drum
   const estimate = drumEstimate(spec, { ...stage, referenceHz: reader.referenceHz })
-  const warnings = judgement?.warnings.map((warning) =>
-    warningWords(warning, judgement.rangePosition.fraction > 0.5, nameOf),
-  )
-  const serious = judgement?.warnings.some(({ kind }) => kind !== 'off-middle')
+  const against = standings.filter(({ tone }) => tone !== 'good')
+  const serious = against.some(({ tone }) => tone === 'wrong')
   return (
     <li className="border-b border-line py-3">
       <div className="grid items-start gap-x-6 gap-y-2 lg:grid-cols-[minmax(14rem,1fr)_minmax(15rem,1fr)_minmax(15rem,1fr)]">
@@ -47,44 +41,27 @@ export function PlannedDrum({ drum, was, judgement, reader, stage, nameOf, edit 
           ) : (
             <p className="text-soft">No note yet. Plan the notes above, or type one in the kit.</p>
           )}
-          {warnings && warnings.length > 0 && (
+          {spec.noteLocked && <p className="text-sm text-soft">locked</p>}
+          {estimate?.tuning && <DrumFigures tuning={estimate.tuning} />}
+          {against.length > 0 && (
             <ul
               className={`mt-1 border-l-4 pl-2 text-sm ${serious ? 'border-spike text-spike-text' : 'border-brass text-brass'}`}
             >
-              {warnings.map((words) => (
+              {against.map(({ words }) => (
                 <li key={words}>{words}</li>
               ))}
             </ul>
           )}
-          {edit && spec.note && (
-            <div className="mt-2 flex flex-wrap items-center gap-2">
-              <Button onClick={() => edit.move(-1)}>
-                Semitone down<span className="sr-only">, {drum.name}</span>
-              </Button>
-              <Button onClick={() => edit.move(1)}>
-                Semitone up<span className="sr-only">, {drum.name}</span>
-              </Button>
-              <Checkbox
-                checked={spec.noteLocked}
-                onChange={(event) => edit.lock(event.target.checked)}
-                label={
-                  <>
-                    Lock<span className="sr-only"> the note of {drum.name}</span>
-                  </>
-                }
-              />
-            </div>
-          )}
         </div>
-        {estimate && <HeadFigures side="batter" head={spec.batter} figures={estimate.batter} ported={false} />}
-        {estimate?.resonant && spec.resonant && (
+        {estimate && <HeadFigures side="batter" head={spec.batter} tuning={estimate.tuning} />}
+        {estimate && spec.resonant && (
           <div>
-            <HeadFigures side="resonant" head={spec.resonant} figures={estimate.resonant} ported={spec.ported} />
+            <HeadFigures side="resonant" head={spec.resonant} tuning={estimate.tuning} />
             <p className="text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>
           </div>
         )}
       </div>
-      {estimate && <WhyTheseNumbers name={drum.name} estimate={estimate} ported={spec.ported} />}
+      {estimate?.tuning && <WhyTheseNumbers name={drum.name} input={estimate.input} />}
     </li>
   )
 }

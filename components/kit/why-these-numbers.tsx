@@ -1,14 +1,12 @@
 import { tuningCautions } from '@/lib/advance/cautions'
-import { explainHeadEstimate } from '@/lib/acoustics/explain-head-estimate'
-import type { ExplainedFigure } from '@/lib/acoustics/explain-head-estimate'
-import type { DrumEstimate, SideEstimate } from '@/lib/tuning/drum-estimate'
+import type { DrumTuningInput } from '@/lib/acoustics/drum-tuning'
+import { explainDrumTuning } from '@/lib/acoustics/explain-drum-tuning'
+import type { ExplainedFigure } from '@/lib/acoustics/explained-figure'
 import { figureWords } from './figure-words'
 
-/** Every figure of a drum with its formula, what went in, how far it can be trusted and where it comes from. */
-export function WhyTheseNumbers({ name, estimate, ported }: { name: string; estimate: DrumEstimate; ported: boolean }) {
-  const heads = [estimate.batter, ported ? null : estimate.resonant].filter(
-    (head): head is SideEstimate => head?.estimate != null,
-  )
+/** Every figure of a drum with its formula, what went in, its bounds, how far it can be trusted and where it comes from. */
+export function WhyTheseNumbers({ name, input }: { name: string; input: DrumTuningInput }) {
+  const { drum, heads } = explainDrumTuning(input)
   const [filmAndRods] = tuningCautions
   return (
     <details className="mt-2">
@@ -17,19 +15,14 @@ export function WhyTheseNumbers({ name, estimate, ported }: { name: string; esti
       </summary>
       <div className="mt-2 border-l-4 border-line pl-4">
         <p className="max-w-prose text-sm">
-          These are estimates of each head by itself in the open air. The air inside the shell and the pull of the other
-          head are not in the model yet: on a real shell the note of a head lies from 1 % under to 11 % over the figure,
-          which is why tap and tension stand with their bounds. A measured pitch is worth more than any of them.
+          These are estimates. A drum has one note: both heads and the air between them swing together. The tap beside a
+          lug is another shape of one head, and air weighs less on it: it lies near 1.7 or 1.8 times the note, not at
+          the 1.593 of a bare membrane. The bounds are the scatter of real heads against the model, and of film against
+          its nominal thickness. A ratio measured on this drum replaces the model: write it in the kit.
         </p>
-        {heads.map((head) => (
-          <section key={head.side} className="mt-3">
-            <h4 className="name text-base">{head.side === 'batter' ? 'Batter head' : 'Resonant head'}</h4>
-            <dl className="mt-1 grid gap-x-6 gap-y-3 sm:grid-cols-2 xl:grid-cols-3">
-              {explainHeadEstimate(head.input).map((figure) => (
-                <Figure key={figure.id} figure={figure} />
-              ))}
-            </dl>
-          </section>
+        <Figures title="The drum" figures={drum} />
+        {heads.map(({ side, figures }) => (
+          <Figures key={side} title={side === 'batter' ? 'Batter head' : 'Resonant head'} figures={figures} />
         ))}
         {filmAndRods && (
           <p className="mt-3 max-w-prose border-l-4 border-brass pl-2 text-sm">
@@ -43,19 +36,38 @@ export function WhyTheseNumbers({ name, estimate, ported }: { name: string; esti
   )
 }
 
+function Figures({ title, figures }: { title: string; figures: readonly ExplainedFigure[] }) {
+  return (
+    <section className="mt-3">
+      <h4 className="name text-base">{title}</h4>
+      <dl className="mt-1 grid gap-x-6 gap-y-3 sm:grid-cols-2 xl:grid-cols-3">
+        {figures.map((figure) => (
+          <Figure key={figure.id} figure={figure} />
+        ))}
+      </dl>
+    </section>
+  )
+}
+
 function Figure({ figure }: { figure: ExplainedFigure }) {
+  const { bounds, unit } = figure
   return (
     <div className="min-w-0 border-t border-line pt-1 text-sm">
       <dt className="flex flex-wrap items-baseline justify-between gap-x-3">
         <span>
           {figure.label} <span className="text-soft">({figure.mark})</span>
         </span>
-        <span className="figures font-bold">{figureWords(figure.value, figure.unit)}</span>
+        <span className="figures font-bold">{figureWords(figure.value, unit)}</span>
       </dt>
       <dd>
+        {bounds && (
+          <p className="figures text-soft">
+            {figureWords(bounds.low, unit)} to {figureWords(bounds.high, unit)}
+          </p>
+        )}
         <p className="figures break-words">{figure.formula}</p>
         <p className="figures text-soft">
-          {figure.inputs.map(({ symbol, value, unit }) => `${symbol} = ${figureWords(value, unit)}`).join(', ')}
+          {figure.inputs.map(({ symbol, value, unit: of }) => `${symbol} = ${figureWords(value, of)}`).join(', ')}
         </p>
         <p className="text-soft">{figure.source}</p>
       </dd>

@@ -1,5 +1,5 @@
 import { Hoop } from '@/components/signature/hoop'
-import type { SheetHead, TuningSheet } from '@/lib/advance/tuning-sheet'
+import type { SheetHead, SheetNote, TuningSheet } from '@/lib/advance/tuning-sheet'
 
 /** One drum's tuning sheet, without the blank columns that paper has. */
 export function PackSheet({ sheet }: { sheet: TuningSheet }) {
@@ -19,6 +19,22 @@ export function PackSheet({ sheet }: { sheet: TuningSheet }) {
               .filter(Boolean)
               .join('; ')}
           </p>
+          {sheet.note && (
+            <p>
+              <span className="figures text-2xl font-bold">{sheet.note.hz.toFixed(1)} Hz</span> {noteWords(sheet.note)}
+            </p>
+          )}
+          {sheet.figures && (
+            <p className="text-sm">
+              tap over note{' '}
+              <span className="figures">
+                {sheet.figures.tapRatio.value.toFixed(2)}
+                {sheet.figures.tapRatioMeasured
+                  ? ', measured'
+                  : `, ${sheet.figures.tapRatio.low.toFixed(2)} to ${sheet.figures.tapRatio.high.toFixed(2)}`}
+              </span>
+            </p>
+          )}
           {batter && <p className="text-sm">Lug order {batter.order.join(', ')}</p>}
         </div>
         <Hoop
@@ -27,7 +43,7 @@ export function PackSheet({ sheet }: { sheet: TuningSheet }) {
           depthIn={sheet.depthIn}
           lugs={sheet.lugCount}
           name={sheet.name}
-          note={batter?.note?.name ?? null}
+          note={sheet.note?.name ?? null}
           view="facing"
           pxPerInch={7}
         />
@@ -41,22 +57,30 @@ export function PackSheet({ sheet }: { sheet: TuningSheet }) {
   )
 }
 
+function noteWords({ name, cents }: SheetNote): string {
+  return cents === 0 ? name : `${name} ${cents > 0 ? '+' : '−'}${Math.abs(cents)} cents`
+}
+
 function Head({ head }: { head: SheetHead }) {
-  const { note, tap } = head
+  const { tap, tensionNPerM } = head
   return (
     <div>
       <p className="font-bold">{head.side === 'batter' ? 'Batter head' : 'Resonant head'}</p>
       <p className="text-sm text-soft">{head.words}</p>
-      {note && (
+      {tap && (
         <p>
-          <span className="figures text-2xl font-bold">{note.hz.toFixed(1)} Hz</span>{' '}
-          {note.cents === 0 ? note.name : `${note.name} ${note.cents > 0 ? '+' : '−'}${Math.abs(note.cents)} cents`}
+          tap <span className="figures text-xl font-bold">{tap.hz.toFixed(1)} Hz</span>{' '}
+          <span className="figures text-sm text-soft">
+            {tap.lowHz.toFixed(0)} to {tap.highHz.toFixed(0)}
+          </span>
         </p>
       )}
-      {tap && (
+      {tensionNPerM && (
         <p className="text-sm">
-          tap <span className="figures font-bold">{tap.hz.toFixed(0)} Hz</span>, {tap.lowHz.toFixed(0)} to{' '}
-          {tap.highHz.toFixed(0)}
+          film <span className="figures">{(tensionNPerM.value / 1000).toFixed(2)} kN/m</span>{' '}
+          <span className="figures text-soft">
+            {(tensionNPerM.low / 1000).toFixed(2)} to {(tensionNPerM.high / 1000).toFixed(2)}
+          </span>
         </p>
       )}
       <p className="text-sm">

@@ -22,18 +22,31 @@ export type TwoHeadDrum = {
 export type LoadedPair = Omit<HeadPair, 'tensionNPerM'>
 
 /**
- * Masses of both heads in shape (m,1) in air, kg/m²: film, half the open-air load β_m·ρa for the outer face, and the shell's air
- * (`shellAir`) for the inner.
+ * What moves with one head of a closed shell in shape (m,1) by its own movement, kg/m²: film, half the open-air load β_m·ρa for the
+ * outer face, and the shell's air (`shellAir` self) for the inner. With m = 1 it is the mass of a tap with the other head damped.
+ * @throws AcousticsError naming the field that was refused
+ */
+export function loadedHeadKgPerM2(
+  m: number,
+  film: Film,
+  { diameterM, depthM, temperatureC = ROOM_TEMPERATURE_C }: Omit<TwoHeadDrum, 'batter' | 'resonant'>,
+): number {
+  const { selfKgPerM2 } = shellAir(m, { diameterM, depthM, temperatureC })
+  const outside = (airLoadFactor(m) / 2) * airDensityKgPerM3(temperatureC) * (diameterM / 2)
+  return filmArealDensityKgPerM2(film) + selfKgPerM2 + outside
+}
+
+/**
+ * Masses of both heads in shape (m,1) in air, see `loadedHeadKgPerM2`, and what the shell's air hands across.
  * @throws AcousticsError naming the field that was refused
  */
 export function loadedPair(m: number, drum: TwoHeadDrum): LoadedPair {
-  const temperatureC = drum.temperatureC ?? ROOM_TEMPERATURE_C
-  const { selfKgPerM2, crossKgPerM2 } = shellAir(m, { ...drum, temperatureC })
-  const radiusM = requireDiameterM(drum.diameterM) / 2
-  const air = selfKgPerM2 + (airLoadFactor(m) / 2) * airDensityKgPerM3(temperatureC) * radiusM
+  const { diameterM, depthM, temperatureC = ROOM_TEMPERATURE_C } = drum
   return {
-    ...{ radiusM, depthM: drum.depthM, crossMassKgPerM2: crossKgPerM2 },
-    massKgPerM2: [filmArealDensityKgPerM2(drum.batter) + air, filmArealDensityKgPerM2(drum.resonant) + air],
+    radiusM: requireDiameterM(diameterM) / 2,
+    depthM,
+    massKgPerM2: [loadedHeadKgPerM2(m, drum.batter, drum), loadedHeadKgPerM2(m, drum.resonant, drum)],
+    crossMassKgPerM2: shellAir(m, { diameterM, depthM, temperatureC }).crossKgPerM2,
   }
 }
 

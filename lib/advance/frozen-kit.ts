@@ -10,6 +10,8 @@ export interface FrozenHead {
   readonly damping: 'none' | 'ring' | 'dot' | 'gel' | 'felt'
   /** The drum tech's own noted reading, relative to that gauge. */
   readonly gauge: number | null
+  /** The head's own playable range, N/m; absent or null: the default of its role. */
+  readonly range?: { readonly slackNPerM: number; readonly chokedNPerM: number } | null
 }
 
 export interface SizeRange {
@@ -31,7 +33,10 @@ export interface FrozenDrumSpec {
   readonly resonant: FrozenHead | null
   readonly note: { readonly semitone: number; readonly cents: number } | null
   readonly noteLocked: boolean
+  /** Tap of the resonant over that of the batter head, each with the other damped. */
   readonly headRelationCents: number
+  /** Batter tap over the drum's note as measured on this drum; absent or null: the model's. */
+  readonly measuredTapRatio?: number | null
   readonly toleranceCents: number
   readonly muffling: string
   readonly insteadOf: SizeRange | null

@@ -25,6 +25,7 @@ describe('what a line asks', () => {
     ['the note', withSpec({ note: { semitone: 50, cents: 0 } })],
     ['the lock on the note', withSpec({ noteLocked: true })],
     ['the relation of the heads', withSpec({ headRelationCents: 300 })],
+    ['the measured tap ratio', withSpec({ measuredTapRatio: 1.7 })],
     ['the tolerance', withSpec({ toleranceCents: 4 })],
     ['the muffling', withSpec({ muffling: 'one gel' })],
     [
@@ -33,6 +34,10 @@ describe('what a line asks', () => {
         batter: { ...tom.spec.batter, gauge: 81 },
         resonant: { ...tom.spec.batter, film: 'clear', coatingGPerM2: 0, gauge: 1 },
       }),
+    ],
+    [
+      'the playable range of a head',
+      withSpec({ batter: { ...tom.spec.batter, range: { slackNPerM: 650, chokedNPerM: 4200 } } }),
     ],
     ['the place in the kit', { ...tom, position: 40 }],
   ])('stays the same when only %s changes, so nobody is asked again', (_, changed) => {

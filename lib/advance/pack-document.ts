@@ -3,7 +3,7 @@ import type { PlotDocument, StageSize } from '@/plots/model/document'
 import { readDocument } from '@/plots/model/read-document'
 import type { Caution } from './cautions'
 import type { Units } from './kit-words'
-import type { TuningSheet } from './tuning-sheet'
+import type { SheetHead, TuningSheet } from './tuning-sheet'
 
 /** Version of the document's shape. An older one is upgraded in memory, never on disk. */
 export const PACK_SCHEMA_VERSION = 1
@@ -105,9 +105,22 @@ export function upgradePackDocument(stored: unknown): PackDocument {
   if (stored.schemaVersion > PACK_SCHEMA_VERSION) {
     throw new TypeError(`This pack was made by a newer release (document version ${stored.schemaVersion})`)
   }
-  // Version 1 is the only one so far; the plot inside has its own version and its own upgrade.
+  // Version 1 is the only one so far; what came to it later is filled in. The plot inside has its own version and upgrade.
   const document = stored as unknown as PackDocument
+  const sheets = document.sheets.map(filledIn)
   return document.plot
-    ? { ...document, plot: { ...document.plot, document: readDocument(document.plot.document) } }
-    : document
+    ? { ...document, sheets, plot: { ...document.plot, document: readDocument(document.plot.document) } }
+    : { ...document, sheets }
+}
+
+type LaterOfSheet = 'note' | 'figures' | 'heads'
+type LaterOfHead = 'tensionNPerM' | 'rodPullBoundsN'
+type StoredHead = Omit<SheetHead, LaterOfHead> & Partial<Pick<SheetHead, LaterOfHead>>
+type StoredSheet = Omit<TuningSheet, LaterOfSheet> &
+  Partial<Pick<TuningSheet, 'note' | 'figures'>> & { readonly heads: readonly StoredHead[] }
+
+/** A sheet from before a drum's figures were worked out of both heads together: its batter's note is the drum's. */
+function filledIn(stored: StoredSheet): TuningSheet {
+  const heads = stored.heads.map((head) => ({ tensionNPerM: null, rodPullBoundsN: null, ...head }))
+  return { figures: null, ...stored, note: stored.note ?? heads[0]?.note ?? null, heads }
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { matchedRodPullN, matchedTapRatio, matchedTapScatter, matchedTensionNPerM } from '@/tests/helpers/matched-drum'
 import { sampleDrum } from './sample-revision'
 import { tuningSheet } from './tuning-sheet'
 
@@ -18,10 +19,13 @@ describe('a tuning sheet', () => {
     )
   })
 
-  it('stands the resonant head over the batter by the drum’s relation', () => {
-    const [batter, resonant] = tuningSheet(drum({ note: D3, headRelationCents: 1200 }), reader).heads
-    expect(resonant?.note?.hz).toBeCloseTo(2 * (batter?.note?.hz ?? 0), 6)
-    expect(resonant?.note?.name).toBe('D4')
+  it('stands the resonant tap over the batter’s by the drum’s relation, for one note', () => {
+    const sheet = tuningSheet(drum({ note: D3, headRelationCents: 1200 }), reader)
+    const [batter, resonant] = sheet.heads
+    expect((resonant?.tap?.hz ?? 0) / (batter?.tap?.hz ?? 1)).toBeCloseTo(2, 9)
+    // The drum has one note, whichever head it is asked of.
+    expect([sheet.note?.name, batter?.note?.name, resonant?.note?.name]).toEqual(['D3', 'D3', 'D3'])
+    expect(sheet.relationWords).toBe('resonant tap 1200 cents over the batter’s')
   })
 
   it('names notes in the reader’s language', () => {
@@ -30,13 +34,27 @@ describe('a tuning sheet', () => {
     expect([name('en-GB'), name('de'), name('fr-CA'), name('pt')]).toEqual(['B3', 'H3', 'si3', 'B3'])
   })
 
-  // A tap is sharper than the note: at least by the ideal membrane's 1.593 (ACOUSTICS: Abramowitz & Stegun, zeros of J1 and J0).
-  it('gives the tap inside its bounds, and the bounds over the membrane’s ratio', () => {
-    const head = tuningSheet(drum({ note: D3 }), reader).heads[0]
-    if (!head?.tap || !head.note) throw new Error('no tap')
-    expect(head.tap.lowHz / head.note.hz).toBeCloseTo(1.593, 3)
-    expect(head.tap.hz).toBeGreaterThan(head.tap.lowHz)
-    expect(head.tap.highHz).toBeGreaterThan(head.tap.hz)
+  it('gives tap, tension and pull of matched heads inside their bounds (closed form, derived)', () => {
+    const plain = { plyMils: [10], film: 'clear', coatingGPerM2: 0, damping: 'none', gauge: null } as const
+    const sheet = tuningSheet(drum({ note: D3, batter: plain, resonant: plain }), reader)
+    const [head] = sheet.heads
+    if (!head?.tap || !head.tensionNPerM || !head.rodPullBoundsN) throw new Error('no figures')
+    expect(head.tap.hz / (146.832 * matchedTapRatio())).toBeCloseTo(1, 3)
+    expect(head.tap.highHz / head.tap.hz).toBeCloseTo(matchedTapScatter(), 4)
+    expect(head.tap.hz / head.tap.lowHz).toBeCloseTo(matchedTapScatter(), 4)
+    expect(head.tensionNPerM.value / matchedTensionNPerM(146.832)).toBeCloseTo(1, 3)
+    expect((head.rodPullN ?? 0) / matchedRodPullN(146.832)).toBeCloseTo(1, 3)
+    expect(head.rodPullBoundsN.low).toBeLessThan(head.rodPullN ?? 0)
+    expect(head.rodPullBoundsN.high).toBeGreaterThan(head.rodPullN ?? 0)
+    expect(sheet.figures).toMatchObject({ model: 'two-heads', tapRatioMeasured: false })
+    expect(sheet.figures?.sustain).toBeCloseTo(1, 6)
+  })
+
+  it('has no figures for a head with a port, and says so', () => {
+    const sheet = tuningSheet(drum({ note: D3, ported: true }), reader)
+    expect(sheet.heads[1]).toMatchObject({ tap: null, tensionNPerM: null, rodPullN: null })
+    expect(sheet.heads[1]?.without).toContain('port')
+    expect(sheet.figures).toMatchObject({ model: 'one-head', upperPartner: null, sustain: null, falseWarbleHz: null })
   })
 
   it('crosses over from lug to lug and counts from the badge on each head', () => {

@@ -1,7 +1,9 @@
-import type { HeadCaution } from '@/lib/acoustics/head-estimate'
+import type { DrumTuning } from '@/lib/acoustics/drum-tuning'
+import type { Estimated } from '@/lib/acoustics/estimated'
+import type { HeadCaution } from '@/lib/acoustics/head-cautions'
 import { nearestNote } from '@/lib/acoustics/note'
 import { noteName } from '@/lib/acoustics/note-name'
-import type { SideEstimate } from '@/lib/tuning/drum-estimate'
+import type { DrumEstimate } from '@/lib/tuning/drum-estimate'
 import { drumEstimate } from '@/lib/tuning/drum-estimate'
 import { evenLugAngles, lugsFacing } from '@/lib/tuning/lug-angles'
 import { lugOrder } from '@/lib/tuning/lug-order'
@@ -18,6 +20,28 @@ export interface SheetNote {
   readonly cents: number
 }
 
+/** An estimated pitch, its bounds, and the name nearest to it. */
+export interface SheetPitch {
+  readonly hz: number
+  readonly lowHz: number
+  readonly highHz: number
+  readonly name: string
+}
+
+/** What belongs to the drum and not to one head. */
+export interface SheetFigures {
+  readonly model: DrumTuning['model']
+  /** Batter tap over the drum's note. */
+  readonly tapRatio: Estimated
+  readonly tapRatioMeasured: boolean
+  /** The heads against each other; null for one head, like the two after it. */
+  readonly upperPartner: SheetPitch | null
+  /** Share of the note that the heads pass to each other, 1 when they match; no seconds. */
+  readonly sustain: number | null
+  /** Warble feigned by the other head when it is not damped, Hz. */
+  readonly falseWarbleHz: number | null
+}
+
 /** One lug as seen facing the head, on a circle of radius 1 with the badge at the top; y downwards. */
 export interface SheetLug {
   readonly lug: number
@@ -30,11 +54,15 @@ export interface SheetLug {
 export interface SheetHead {
   readonly side: 'batter' | 'resonant'
   readonly words: string
+  /** The drum's note: both heads sound it together. */
   readonly note: SheetNote | null
-  /** Pitch of a tap near a lug, with the bounds of the estimate, Hz. */
-  readonly tap: { readonly hz: number; readonly lowHz: number; readonly highHz: number; readonly name: string } | null
-  /** Pull on each rod, N, an estimate. */
+  /** Pitch of a tap near a lug, the other head damped, with the bounds of the estimate. */
+  readonly tap: SheetPitch | null
+  /** Film tension, N/m, an estimate. */
+  readonly tensionNPerM: Estimated | null
+  /** Pull on each rod, N, an estimate, and its bounds. */
   readonly rodPullN: number | null
+  readonly rodPullBoundsN: Omit<Estimated, 'value'> | null
   /** The drum tech's own noted reading. */
   readonly gauge: number | null
   readonly lugs: readonly SheetLug[]
@@ -57,20 +85,21 @@ export interface TuningSheet {
   readonly toleranceCents: number
   readonly muffling: string
   readonly relationWords: string | null
+  /** The drum's one note. */
+  readonly note: SheetNote | null
+  /** Null without a note, when the drum cannot sound it, and in packs from before they were worked out. */
+  readonly figures: SheetFigures | null
   readonly heads: readonly SheetHead[]
 }
 
-/** A drum's sheet for whoever tunes it. Every figure is an estimate of the core, as a head in the open air. */
+/** A drum's sheet for whoever tunes it. Every figure is an estimate of the core, both heads worked out together. */
 export function tuningSheet(
   drum: FrozenDrum,
   reader: { readonly locale: string; readonly units: Units; readonly referenceHz: number },
 ): TuningSheet {
   const { spec } = drum
-  const figures = drumEstimate(spec, { referenceHz: reader.referenceHz })
-  const heads = [
-    sheetHead(drum, 'batter', spec.batter, figures?.batter ?? null, reader),
-    ...(spec.resonant ? [sheetHead(drum, 'resonant', spec.resonant, figures?.resonant ?? null, reader)] : []),
-  ]
+  const estimate = drumEstimate(spec, { referenceHz: reader.referenceHz })
+  const note = estimate && sheetNote(estimate.noteHz, reader)
   return {
     entryId: drum.id,
     name: drum.name,
@@ -83,21 +112,37 @@ export function tuningSheet(
     toleranceCents: spec.toleranceCents,
     muffling: spec.muffling,
     relationWords: spec.resonant ? relationWords(spec.headRelationCents) : null,
-    heads,
+    note,
+    figures: estimate?.tuning ? sheetFigures(estimate.tuning, reader) : null,
+    heads: [
+      sheetHead(drum, 'batter', spec.batter, estimate, reader),
+      ...(spec.resonant ? [sheetHead(drum, 'resonant', spec.resonant, estimate, reader)] : []),
+    ],
   }
 }
 
+function sheetFigures(tuning: DrumTuning, reader: PitchReader): SheetFigures {
+  const { model, tapRatio, tapRatioMeasured, upperPartnerHz, sustain, falseWarbleHz } = tuning
+  const upperPartner = upperPartnerHz && sheetPitch(upperPartnerHz, reader)
+  return { model, tapRatio, tapRatioMeasured, upperPartner, sustain, falseWarbleHz }
+}
+
 function relationWords(cents: number): string {
-  if (cents === 0) return 'both heads at one pitch'
-  return `resonant head ${Math.abs(cents)} cents ${cents > 0 ? 'over' : 'under'} the batter`
+  if (cents === 0) return 'both heads at one tap pitch'
+  return `resonant tap ${Math.abs(cents)} cents ${cents > 0 ? 'over' : 'under'} the batter’s`
+}
+
+interface PitchReader {
+  readonly locale: string
+  readonly referenceHz: number
 }
 
 function sheetHead(
   drum: FrozenDrum,
   side: SheetHead['side'],
   head: FrozenHead,
-  figures: SideEstimate | null,
-  reader: { readonly locale: string; readonly referenceHz: number },
+  estimate: DrumEstimate | null,
+  reader: PitchReader,
 ): SheetHead {
   const { spec } = drum
   const order = lugOrder(spec.lugs)
@@ -105,35 +150,40 @@ function sheetHead(
   const common = {
     side,
     words: headWords(head),
+    note: estimate && sheetNote(estimate.noteHz, reader),
     gauge: head.gauge,
     order,
     lugs: lugsFacing(side, evenLugAngles(spec.lugs)).map(({ lug, x, y }) => ({ lug, x, y, turn: turns.get(lug) ?? 0 })),
   }
-  const bare = { ...common, tap: null, rodPullN: null, cautions: [] }
-  if (figures === null)
-    return { ...bare, note: null, without: 'No note is set for this drum: tune it even and ask the drum tech.' }
-  const note = sheetNote(figures.noteHz, reader)
-  const { estimate } = figures
-  if (estimate === null) {
-    const without = 'This head cannot be estimated at this note: ask the drum tech before you bring it up.'
-    return { ...bare, note, without }
+  const figures = estimate?.tuning?.[side]
+  if (!figures) {
+    const without = withoutWords(estimate)
+    return { ...common, tap: null, tensionNPerM: null, rodPullN: null, rodPullBoundsN: null, cautions: [], without }
   }
+  const { value, low, high } = figures.rodPullN
   return {
     ...common,
-    note,
-    tap: {
-      hz: estimate.tapHz,
-      lowHz: estimate.interval.tapLowHz,
-      highHz: estimate.interval.tapHighHz,
-      name: sheetNote(estimate.tapHz, reader).name,
-    },
-    rodPullN: estimate.rodPullN,
-    cautions: estimate.cautions,
+    tap: sheetPitch(figures.tapHz, reader),
+    tensionNPerM: figures.tensionNPerM,
+    rodPullN: value,
+    rodPullBoundsN: { low, high },
+    cautions: figures.cautions,
     without: null,
   }
 }
 
-function sheetNote(hz: number, reader: { readonly locale: string; readonly referenceHz: number }): SheetNote {
+/** Why a head has no figures. */
+function withoutWords(estimate: DrumEstimate | null): string {
+  if (!estimate) return 'No note is set for this drum: tune it even and ask the drum tech.'
+  if (!estimate.tuning) return 'This drum cannot be estimated at this note: ask the drum tech before you bring it up.'
+  return 'This head has a port: there is no figure for it. Tune it even, by ear.'
+}
+
+function sheetPitch({ value, low, high }: Estimated, reader: PitchReader): SheetPitch {
+  return { hz: value, lowHz: low, highHz: high, name: sheetNote(value, reader).name }
+}
+
+function sheetNote(hz: number, reader: PitchReader): SheetNote {
   const nearest = nearestNote(hz, reader.referenceHz)
   return { hz, name: noteName(nearest.semitone, noteLocale(reader.locale)), cents: Math.round(nearest.cents) || 0 }
 }

@@ -4,7 +4,7 @@ import type { DrumRole, DrumSpec, EntryInput, EntryKind, Head } from './kit'
 /** What a new entry starts from, so that adding one takes seconds: common sizes of each role (common practice). */
 
 const onePly = (film: Head['film'], plyMil = 10): Head => ({
-  ...{ plyMils: [plyMil], film, coatingGPerM2: 0, damping: 'none', gauge: null },
+  ...{ plyMils: [plyMil], film, coatingGPerM2: 0, damping: 'none', gauge: null, range: null },
 })
 
 const roleDefaults: Record<
@@ -48,7 +48,7 @@ export function newDrum(role: DrumRole, size: Partial<Pick<DrumSpec, 'diameterIn
     ...{ kind: 'drum' as const, name: usualDrumName(role, usual.diameterIn), ...common, count: 1 as const },
     spec: {
       ...{ role, ...usual, shell: '', note: null, noteLocked: false, headRelationCents: 0, toleranceCents: 10 },
-      ...{ muffling: '', insteadOf: null },
+      ...{ measuredTapRatio: null, muffling: '', insteadOf: null },
     },
   } satisfies EntryInput
 }

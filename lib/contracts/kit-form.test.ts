@@ -28,15 +28,18 @@ describe('the form of a drum', () => {
         spec.resonant.gauge = '74.5'
         spec.note = 'Eb3 +12'
         spec.headRelationCents = '−200'
+        spec.measuredTapRatio = '1,72'
+        spec.batter.range = { slackNPerM: '650', chokedNPerM: '4200' }
       }),
     )
     expect(spec).toMatchObject({
       diameterIn: 13,
       depthIn: 6.5,
-      batter: { plyMils: [7, 7], coatingGPerM2: 45.5, gauge: null },
-      resonant: { gauge: 74.5 },
+      batter: { plyMils: [7, 7], coatingGPerM2: 45.5, gauge: null, range: { slackNPerM: 650, chokedNPerM: 4200 } },
+      resonant: { gauge: 74.5, range: null },
       note: { semitone: 51, cents: 12 },
       headRelationCents: -200,
+      measuredTapRatio: 1.72,
       insteadOf: null,
     })
   })
@@ -52,6 +55,9 @@ describe('the form of a drum', () => {
         form.spec.resonant.gauge = 'tight'
         form.spec.note = 'H9'
         form.spec.toleranceCents = ''
+        form.spec.measuredTapRatio = '174'
+        form.spec.batter.range = { slackNPerM: '900', chokedNPerM: '' }
+        form.spec.resonant.range = { slackNPerM: '3000', chokedNPerM: '900' }
         form.spec.insteadOf = { diameterMinIn: '13', diameterMaxIn: '12', depthMinIn: '7', depthMaxIn: 'deep' }
       }),
     )
@@ -60,11 +66,20 @@ describe('the form of a drum', () => {
       'spec.diameterIn': '300 mm is no whole or quarter inch: 11¾ in is 298 mm, 12 in is 305 mm',
       'spec.depthIn': 'at least 3 in',
       'spec.batter.plyMils': 'at least 2 mil',
+      'spec.batter.range.chokedNPerM': 'write a number',
       'spec.resonant.gauge': 'write a number',
+      'spec.resonant.range.chokedNPerM': 'the choked edge lies over the slack edge',
+      'spec.measuredTapRatio': 'at most 2.5',
       'spec.note': 'write a note such as D3, or a frequency such as 146.8 Hz',
       'spec.toleranceCents': 'write a number',
       'spec.insteadOf.depthMaxIn': 'write a size such as 12, 5½, 12" or 305 mm',
     })
+  })
+
+  it('forgets the port of a kick that became a tom: a tom with a port would be tuned as one head', () => {
+    const form = drumFormOf(newDrum('kick'), 'en')
+    expect(specOf(form).ported).toBe(true)
+    expect(specOf({ ...form, spec: { ...form.spec, role: 'tom' } }).ported).toBe(false)
   })
 
   it('asks nothing of a head or a range that is not there', () => {
@@ -121,6 +136,13 @@ describe('the contract of an entry', () => {
   it('takes every default as it is', () => {
     for (const entry of [...fivePieceKit(), newPiece('cymbal'), newPiece('hardware'), newPiece('microphone')])
       expect(entryInputSchema.parse(entry)).toEqual(entry)
+  })
+
+  it('takes a drum that was written before heads had a range and drums a measured ratio', () => {
+    const { spec, ...drum } = newDrum('tom')
+    const { measuredTapRatio: _ratio, batter, ...older } = spec
+    const { range: _range, ...olderHead } = batter
+    expect(entryInputSchema.parse({ ...drum, spec: { ...older, batter: olderHead } })).toEqual({ ...drum, spec })
   })
 
   it('calls a drum by what it is and its width', () => {

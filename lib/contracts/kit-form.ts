@@ -19,6 +19,7 @@ export type HeadForm = {
   coatingGPerM2: string
   damping: Head['damping']
   gauge: string
+  range: { slackNPerM: string; chokedNPerM: string }
 }
 type CommonForm = { name: string; supply: EntryInput['supply']; count: string; remark: string }
 type DrumSpec = Extract<EntryInput, { kind: 'drum' }>['spec']
@@ -34,6 +35,7 @@ export type DrumForm = CommonForm & {
     resonant: HeadForm
     note: string
     headRelationCents: string
+    measuredTapRatio: string
     toleranceCents: string
     insteadOf: SizeRangeForm
   }
@@ -64,7 +66,8 @@ export function drumFormSchema(reader: NoteReader): z.ZodType<EntryInput, DrumFo
         ...{
           role: spec.role,
           shell: spec.shell,
-          ported: spec.ported,
+          // Only a kick is asked for its port: the answer of a drum that was one before does not stay behind.
+          ported: spec.role === 'kick' && spec.ported,
           noteLocked: spec.noteLocked,
           muffling: spec.muffling,
         },
@@ -75,6 +78,7 @@ export function drumFormSchema(reader: NoteReader): z.ZodType<EntryInput, DrumFo
         resonant: hasResonant ? readHead(read, 'spec.resonant', spec.resonant) : null,
         note: read('spec.note', noteValue(spec.note, reader)),
         headRelationCents: read('spec.headRelationCents', numberValue(spec.headRelationCents)),
+        measuredTapRatio: read('spec.measuredTapRatio', optionalNumber(spec.measuredTapRatio)),
         toleranceCents: read('spec.toleranceCents', numberValue(spec.toleranceCents)),
         insteadOf: takesOther
           ? {
@@ -132,8 +136,22 @@ function readHead(read: Read, path: string, head: HeadForm) {
     ...{ film: head.film, damping: head.damping },
     plyMils: read(`${path}.plyMils`, plies.problem === null ? { value: plies.plyMils } : { problem: plies.problem }),
     coatingGPerM2: read(`${path}.coatingGPerM2`, numberValue(head.coatingGPerM2)),
-    gauge: head.gauge.trim() === '' ? null : read(`${path}.gauge`, numberValue(head.gauge)),
+    gauge: read(`${path}.gauge`, optionalNumber(head.gauge)),
+    range: readRange(read, `${path}.range`, head.range),
   }
+}
+
+/** Both edges or neither: one alone is asked for the other. */
+function readRange(read: Read, path: string, { slackNPerM, chokedNPerM }: HeadForm['range']) {
+  if (slackNPerM.trim() === '' && chokedNPerM.trim() === '') return null
+  return {
+    slackNPerM: read(`${path}.slackNPerM`, numberValue(slackNPerM)),
+    chokedNPerM: read(`${path}.chokedNPerM`, numberValue(chokedNPerM)),
+  }
+}
+
+function optionalNumber(text: string): { value: number | null } | { problem: string } {
+  return text.trim() === '' ? { value: null } : numberValue(text)
 }
 
 function sizeValue(text: string): { value: number } | { problem: string } {
@@ -169,6 +187,10 @@ function headForm(head: Head): HeadForm {
     coatingGPerM2: String(head.coatingGPerM2),
     damping: head.damping,
     gauge: head.gauge === null ? '' : String(head.gauge),
+    range: {
+      slackNPerM: head.range === null ? '' : String(head.range.slackNPerM),
+      chokedNPerM: head.range === null ? '' : String(head.range.chokedNPerM),
+    },
   }
 }
 
@@ -189,9 +211,10 @@ export function drumFormOf(entry: Extract<EntryInput, { kind: 'drum' }>, locale:
       depthIn: inchFractions(spec.depthIn),
       lugs: String(spec.lugs),
       batter: headForm(spec.batter),
-      resonant: headForm(spec.resonant ?? spec.batter),
+      resonant: headForm(spec.resonant ?? { ...spec.batter, range: null }),
       note: note === null ? '' : noteText(note, locale),
       headRelationCents: String(spec.headRelationCents),
+      measuredTapRatio: spec.measuredTapRatio === null ? '' : String(spec.measuredTapRatio),
       toleranceCents: String(spec.toleranceCents),
       insteadOf: {
         diameterMinIn: inchFractions(range.diameterMinIn),

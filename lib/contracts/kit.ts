@@ -35,6 +35,17 @@ const inches = (low: number, high: number) =>
     .max(high, `at most ${high} in`)
     .refine((value) => Number.isInteger(value * 4), 'whole or quarter inches')
 
+/** Film tensions between which a head is playable, N/m; kept per head once the party has learnt them. */
+const headRangeSchema = z
+  .object({
+    slackNPerM: z.number('write a tension in N/m').min(50, 'at least 50 N/m').max(20_000, 'at most 20 000 N/m'),
+    chokedNPerM: z.number('write a tension in N/m').min(50, 'at least 50 N/m').max(20_000, 'at most 20 000 N/m'),
+  })
+  .refine((range) => range.slackNPerM < range.chokedNPerM, {
+    path: ['chokedNPerM'],
+    message: 'the choked edge lies over the slack edge',
+  })
+
 export const headSchema = z.object({
   /** One film thickness per ply, in mil (1 mil = 25.4 µm). */
   plyMils: z
@@ -47,6 +58,8 @@ export const headSchema = z.object({
   damping: z.enum(['none', 'ring', 'dot', 'gel', 'felt'], 'choose a damping'),
   /** The drum tech's own noted gauge reading, relative to that gauge. */
   gauge: z.number().min(0, 'at least 0').max(120, 'at most 120').nullable(),
+  /** The head's own playable range; null: the default of its role. Heads written before there was one have none. */
+  range: headRangeSchema.nullable().default(null),
 })
 export type Head = z.infer<typeof headSchema>
 
@@ -74,8 +87,10 @@ export const drumSpecSchema = z.object({
   note: drumNoteSchema.nullable(),
   /** A locked note is left alone when a template plans the others. */
   noteLocked: z.boolean(),
-  /** How far the resonant head's pitch stands above the batter's, cents. */
+  /** How far the resonant head's tap stands above the batter's, each with the other head damped, cents. */
   headRelationCents: headRelationSchema,
+  /** The batter's tap over the drum's note, measured on this drum; null: the model's. Replaces it where it is there. */
+  measuredTapRatio: z.number().min(1.2, 'at least 1.2').max(2.5, 'at most 2.5').nullable().default(null),
   /** How far a lug may stand from the target and still be even, cents. */
   toleranceCents: z.number().min(1, 'at least 1 cent').max(100, 'at most 100 cents'),
   muffling: z.string().trim().max(200, 'at most 200 characters'),

@@ -2,19 +2,12 @@ import { beforeAll, describe, expect, it } from 'vitest'
 import { stranger } from '../helpers/http-client'
 import type { HttpClient } from '../helpers/http-client'
 import { makeParty, type PartyFixture } from '../helpers/party-fixture'
+import { matchedRodPullN, matchedTapRatio, matchedTapScatter, matchedTensionNPerM } from '../helpers/matched-drum'
 import { makeTour, type TourFixture } from '../helpers/tour-fixture'
 
-/**
- * The page's figures against the closed form, worked out here and nowhere near the code: a 12 in head of 10 mil film, as the
- * fixture's Tom 12 has on both sides, in the open air. Air loads 1.4928 (note) and 0.6602 (tap) and ρ 1.2041 kg/m³ at 20 °C: derived
- * and published values of the model's own sources; j01 and j11: Abramowitz & Stegun 9.5.
- */
-const radiusM = 0.1524
-const j01 = 2.404825557696
-const j11 = 3.831705970208
-const film = 1390 * 254e-6
-const moving = (beta: number) => film + beta * 1.2041 * radiusM
-const tapRatio = (j11 / j01) * Math.sqrt(moving(1.4928) / moving(0.6602))
+/** The fixture's Tom 12: 12×8 in, 10 mil on both sides, heads matched. D3 over A4 = 440 Hz (ISO 16:1975). */
+const noteHz = 440 * 2 ** ((50 - 69) / 12)
+const tapHz = noteHz * matchedTapRatio()
 
 describe('the kit page', () => {
   let party: PartyFixture
@@ -41,25 +34,20 @@ describe('the kit page', () => {
     const shown = await words(party.drumTech.call, page)
     expect(shown).toContain('12 in across, 8 deep (305 × 203 mm)')
     expect(shown).toContain('6 lugs a head, rented')
-    // D3 over A4 = 440 Hz (ISO 16:1975).
-    const noteHz = 440 * 2 ** ((50 - 69) / 12)
     expect(noteHz.toFixed(1)).toBe('146.8')
     expect(shown).toContain('146.8 Hz D3')
-    // From the ideal membrane's ratio, to 2 % over the open-air ratio (Rossing's scatter).
-    const bounds = `${Math.round((noteHz * j11) / j01)}–${Math.round(noteHz * tapRatio * 1.02)}`
-    const taps = shown.split(`tap ${(noteHz * tapRatio).toFixed(1)} Hz ${bounds} gauge 75`)
-    expect(taps).toHaveLength(3)
+    const bounds = `${Math.round(tapHz / matchedTapScatter())}–${Math.round(tapHz * matchedTapScatter())}`
+    expect(shown.split(`tap ${tapHz.toFixed(1)} Hz ${bounds} gauge 75`)).toHaveLength(3)
   })
 
   it('shows in the notes view what the note asks of film and rods', async () => {
     const shown = await words(party.drumTech.call, `${page}?rig=${tour.rigId}&view=notes`)
-    const noteHz = 440 * 2 ** ((50 - 69) / 12)
-    const tension = moving(1.4928) * ((2 * Math.PI * radiusM * noteHz) / j01) ** 2
-    const pull = (2 * Math.PI * radiusM * tension) / 6
-    expect(shown).toContain(`film ${(tension / 1000).toFixed(2)} kN/m`)
-    expect(shown).toContain(`each rod ${Math.round(pull)} N`)
+    expect(shown).toContain(`film ${(matchedTensionNPerM(noteHz) / 1000).toFixed(2)} kN/m`)
+    expect(shown).toContain(`each rod ${Math.round(matchedRodPullN(noteHz))} N`)
+    expect(shown).toContain(`tap over note ${matchedTapRatio().toFixed(2)}`)
+    expect(shown).toContain('sustain share 1.00')
     expect(shown).toContain('Why these numbers')
-    expect(shown).toContain('in the open air')
+    expect(shown).toContain('The two taps, each with the other head damped')
     expect(shown).toContain('Film and rods.')
   })
 
