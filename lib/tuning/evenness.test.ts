@@ -130,7 +130,13 @@ describe('evenness by taps', () => {
 
   it('names the lug to read again, and both of a facing pair where six lugs cannot tell', () => {
     const wrong = (lugs: number, missing: number[] = []) =>
-      tapEvenness({ lugs: head(lugs, (seenRad, lug) => twoFold(250, 2, 0.5)(seenRad) + (lug === 3 ? 9 : 0), missing) })
+      tapEvenness({
+        lugs: head(
+          lugs,
+          (seenRad, lug) => twoFold(250, 2, 0.5)(seenRad) + (lug === 3 ? 9 : 0) + Math.cos(5 * lug) / 4,
+          missing,
+        ),
+      })
     expect(wrong(7)).toMatchObject({ kind: 'not-sure', again: [3] })
     expect(wrong(6)).toMatchObject({ kind: 'not-sure', again: [3, 6] })
     // Six lugs less two leave one value over: nothing to try without.
@@ -148,6 +154,33 @@ describe('evenness by taps', () => {
     expect(off[3]).toBeCloseTo(0, 8)
   })
 
+  it('weighs readings by their trust: two facing lugs count as their weighted mean (derived: equal rows of least squares)', () => {
+    const exact = twoFold(250, 4, 0.4)
+    const at = (second: number, sixth: number) => {
+      const lugs = head(8, (seenRad, lug) => exact(seenRad) + (lug === 2 ? second : lug === 6 ? sixth : 0))
+      return read(
+        tapEvenness({ lugs: lugs.map((lug) => (lug.lug === 2 ? { ...lug, trust: 0.25 } : lug)), noiseCents: 30 }),
+      )
+    }
+    expect(at(2, -1).warble.value).toBeCloseTo(at(-0.4, -0.4).warble.value, 9)
+    expect(at(2, -1).mean).toBeCloseTo(at(-0.4, -0.4).mean, 9)
+  })
+
+  it('does not cry "not sure" for a reading that was doubtful from the start', () => {
+    const lugs = head(8, (seenRad, lug) => twoFold(250, 4, 0.4)(seenRad) + (lug === 2 ? 6 : 0))
+    expect(tapEvenness({ lugs }).kind).toBe('not-sure')
+    expect(tapEvenness({ lugs: lugs.map((lug) => (lug.lug === 2 ? { ...lug, trust: 0.02 } : lug)) }).kind).toBe('read')
+  })
+
+  it('counts no reading that is not trusted at all', () => {
+    const lugs = head(5, twoFold(250, 4, 0.4), [1])
+    expect(tapEvenness({ lugs }).kind).toBe('read')
+    expect(tapEvenness({ lugs: lugs.map((lug) => (lug.lug === 2 ? { ...lug, trust: 0 } : lug)) })).toEqual({
+      kind: 'not-enough',
+      read: [3, 4, 5],
+    })
+  })
+
   it('has not enough with too few lugs, or with lugs that stand badly', () => {
     const exact = twoFold(250, 4, 0.4)
     expect(tapEvenness({ lugs: head(6, exact, [1, 2, 3]) })).toEqual({ kind: 'not-enough', read: [4, 5, 6] })
@@ -161,6 +194,9 @@ describe('evenness by taps', () => {
     expect(onLugs.warble.value).toBeCloseTo(6, 8)
     expect(onLugs).toMatchObject({ phases: 'one', axis: { highLugs: [1, 3], lowLugs: [2, 4] } })
     expect(read(tapEvenness({ lugs: head(4, twoFold(250, 6, 0)) })).warble.value).toBeCloseTo(0, 8)
+    // A lug four degrees off tells no more: noise would swamp it.
+    const byHand = head(4, () => 250).map((lug) => ({ ...lug, seenRad: lug.seenRad + (lug.lug === 3 ? 0.07 : 0) }))
+    expect(read(tapEvenness({ lugs: byHand })).phases).toBe('one')
   })
 
   it('an alternate pattern is not taken for warble, k = 3 of six lugs', () => {
@@ -240,9 +276,9 @@ describe('evenness by the gauge', () => {
   })
 
   it('has no film figures where the gauge was not calibrated', () => {
-    const tensionAt = (reading: number) => (reading > 76 ? null : 20 * reading)
+    const tensionAt = (reading: number) => (reading > 75.5 ? null : 20 * reading)
     expect(
-      read(gaugeEvenness({ lugs: head(6, (_, lug) => 73 + lug), film: { tensionAt, tapHz: 300 } })).film,
+      read(gaugeEvenness({ lugs: head(6, (_, lug) => 70 + lug), film: { tensionAt, tapHz: 300 } })).film,
     ).toBeNull()
   })
 

@@ -17,15 +17,18 @@ type Chance = ReturnType<typeof chance>
 type Drum = { lugs: number; basis: ReadingBasis; hoop: number; gain: number; noise: number }
 const steel: Drum = { lugs: 8, basis: 'gauge', hoop: 0.05, gain: 26, noise: 0.35 }
 
-/** Moves as a tech logs them: a quarter turn at one lug or at two facing ones, missed by a fifth, read with noise, a lug missing now and then. */
+/** Moves as a tech logs them: a quarter turn at one lug, at two facing ones, or once round with turns that differ, missed by a fifth, read with noise, a lug missing now and then. */
 function moves(count: number, { lugs, basis, hoop, gain, noise }: Drum, { uniform, normal }: Chance): LoggedMove[] {
   const response = lugResponse({ lugs, basis, hoop })
   return Array.from({ length: count }, () => {
     const first = Math.floor(lugs * uniform())
-    const both = uniform() < 0.5
+    const kind = ['one', 'facing', 'round'][Math.floor(3 * uniform())]
     const size = uniform() < 0.7 ? 0.25 : -0.25
     const facing = (first + Math.floor(lugs / 2)) % lugs
-    const turns = Array.from({ length: lugs }, (_, i) => (i === first || (both && i === facing) ? size : 0))
+    const turns = Array.from({ length: lugs }, (_, i) => {
+      if (kind === 'round') return size * (0.2 + uniform())
+      return i === first || (kind === 'facing' && i === facing) ? size : 0
+    })
     const changes = readingChanges(
       response,
       turns.map((turn) => turn * (1 + 0.2 * normal())),
@@ -100,7 +103,7 @@ describe('what is learned of a hoop', () => {
 
   it('one bad log moves it little and is named: turned the other way, or another lug than logged', () => {
     const source = chance(9)
-    const good = moves(12, steel, source)
+    const good = moves(5, steel, source)
     const clean = learnt(steel, good)
     const turns = [0, 0.5, 0, 0, 0, 0, 0, 0]
     const changes = readingChanges(lugResponse(steel), turns, steel.gain)
@@ -113,6 +116,15 @@ describe('what is learned of a hoop', () => {
       expect(Math.abs(Math.log(made.gain.value / clean.gain.value))).toBeLessThan(widthOf(clean.gain) / 2)
       expect(Math.abs(Math.log(made.hoop.value / clean.hoop.value))).toBeLessThan(widthOf(clean.hoop) / 2)
     }
+  })
+
+  it('a hand that misses by a fifth here and a fifth there, once round, is no slip', () => {
+    const turns = Array.from({ length: 8 }, () => 0.25)
+    const missed = [0.2, -0.2, 0.1, 0.2, -0.1, -0.2, 0.2, -0.2].map((miss) => 0.25 * (1 + miss))
+    const changes = readingChanges(lugResponse(steel), missed, steel.gain)
+    const round = { turns, before: turns.map(() => 75), after: changes.map((change) => 75 + change) }
+    expect(learnHoop({ lugs: 8, basis: 'gauge', noise: 0.05, moves: [round] }).doubtful).toEqual([])
+    expect(learnHoop({ lugs: 8, basis: 'gauge', noise: 0.05, handError: 0, moves: [round] }).doubtful).toEqual([0])
   })
 
   it('moves that say nothing change nothing', () => {
