@@ -4,6 +4,8 @@ import { WIDEST_PAIR_HZ } from './pitch-models'
 
 /** Two pitches this near in height cannot be told apart by strength, dB. */
 const EQUAL_DB = 1.5
+/** No head's tap lies higher, Hz. */
+const HIGHEST_TAP_HZ = 750
 /** How far from the target is still near it, cents, unless told. */
 const NEAR_TARGET_CENTS = 500
 
@@ -17,9 +19,9 @@ export function chooseTapPartial(
   { expectHz, expectWithinCents = NEAR_TARGET_CENTS }: { expectHz?: number; expectWithinCents?: number },
 ): FoundPartial | 'unclear' | 'too-noisy' {
   const hz = (partial: DampedPartial) => (partial.angle * rateHz) / (2 * Math.PI)
-  const near = found.filter(
-    (partial) => expectHz === undefined || Math.abs(1200 * Math.log2(hz(partial) / expectHz)) <= expectWithinCents,
-  )
+  const isNear = (partial: DampedPartial) =>
+    expectHz === undefined || Math.abs(1200 * Math.log2(hz(partial) / expectHz)) <= expectWithinCents
+  const near = found.filter((partial) => hz(partial) < HIGHEST_TAP_HZ && isNear(partial))
   const [first, ...others] = near
   if (first === undefined) return found.length === 0 ? 'too-noisy' : 'unclear'
   const rival = others.find((other) => Math.abs(hz(other) - hz(first)) > WIDEST_PAIR_HZ)

@@ -8,7 +8,7 @@ import { peakOffset } from './spectrum'
 /** What is looked through, Hz: from under a large kick's note to above any tom's tap. */
 export const LOWEST_HZ = 30
 export const HIGHEST_HZ = 1000
-const MOST_PARTIALS = 7
+export const MOST_PARTIALS = 7
 /** Peaks this far under the highest are left alone. */
 const FAINTEST = 0.01
 /** A peak must stand this many times over the spectrum's middle height. */

@@ -9,12 +9,12 @@ import { LOW_RATE_STEP, lowRate } from './low-rate'
 import type { PitchFits } from './pitch-models'
 import { fitPitchModels, WIDEST_PAIR_HZ } from './pitch-models'
 import type { FittedPitch } from './pitch-of-fit'
-import { pitchOfFit } from './pitch-of-fit'
+import { pitchOfFit, T60_PER_TAU } from './pitch-of-fit'
 import { hasSecondStrike } from './second-strike'
 import type { Spectrum } from './spectrum'
 import { spectrumOf } from './spectrum'
 import type { TapGlide, TapReading, TapRefusalKind } from './tap-report'
-import { isHarmonic, LEAST_LOW_SHARE, lowShare } from './tap-signs'
+import { isDense, isHarmonic, LEAST_LOW_SHARE, lowShare } from './tap-signs'
 
 export type StrikeToHear = {
   samples: Float32Array
@@ -36,13 +36,18 @@ const FIRST_SKIP_S = 0.004
 const RING_TAUS = 7
 const SHORTEST_WINDOW_S = 0.15
 /** Decays that a head can have, s for 60 dB; what rings longer is held, what is shorter is a knock. */
-const SHORTEST_T60_S = 0.05
-const LONGEST_T60_S = 4.5
+const SHORTEST_T60_S = 0.075
+const LONGEST_T60_S = 2.7
+/** Fewer periods than this in the decay are a thump, not a pitch. */
+const FEWEST_PERIODS = 5.5
+/** What decays slower than this is mains hum or another steady sound, s. */
+const STEADY_T60_S = 6
 /** Of the pitch's band, power: over the first a glide is looked for, over the second the sound is no ringing head. */
 const GLIDE_UNEXPLAINED = 0.02
 const MOST_UNEXPLAINED = 0.25
 /** A pitch less sure than this is not named, cents. */
 const MOST_ERROR_CENTS = 25
+const LEAST_CONFIDENCE = 0.35
 
 /** The pitch of one strike, or why none is named. */
 export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
@@ -58,8 +63,9 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const rateHz = sampleRateHz / LOW_RATE_STEP
   const firstFrom = Math.max(unclippedFrom, strikeAt + Math.round(FIRST_SKIP_S * sampleRateHz))
   const found = findPartials(spectrumFrom(samples, firstFrom, end), rateHz).partials
-  if (isHarmonic(found)) return 'not-a-tap'
-  const chosen = chooseTapPartial(found, rateHz, expect)
+  const ringing = found.filter(({ decay }) => T60_PER_TAU / (decay * rateHz) < STEADY_T60_S)
+  if (isHarmonic(ringing) || isDense(found) || (ringing.length === 0 && found.length > 0)) return 'not-a-tap'
+  const chosen = chooseTapPartial(ringing, rateHz, expect)
   if (typeof chosen === 'string') return gliding(strike, end) ?? chosen
 
   // Once the decay is known: begin as early and end as soon as it allows.
@@ -77,11 +83,13 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
     if (glide !== null) return glide
   }
   const pitch = pitchOfFit(fits.best, rateHz, (from - strikeAt) / sampleRateHz, (until - from) / sampleRateHz)
+  const confidence = confidenceOf(pitch, unexplained)
   const refused = refusalOf(pitch, unexplained, share)
   if (refused !== null) return refused
+  if (confidence < LEAST_CONFIDENCE) return 'unclear'
   return {
     ...pitch,
-    confidence: confidenceOf(pitch, unexplained),
+    confidence,
     glide: glideOf(fits, rateHz),
     snrDb: snrDb(pitch, fits.best.noiseVariance * LOW_RATE_STEP),
     heardForS: (until - strikeAt) / sampleRateHz,
@@ -140,6 +148,7 @@ function gliding({ samples, sampleRateHz, strikeAt, quiet }: StrikeToHear, end: 
 function refusalOf(pitch: FittedPitch, unexplained: number, share: number | null): TapRefusalKind | null {
   if (unexplained > MOST_UNEXPLAINED) return share === null ? 'too-noisy' : 'not-a-tap'
   if (pitch.t60S > LONGEST_T60_S || pitch.t60S < SHORTEST_T60_S) return 'not-a-tap'
+  if (pitch.t60S * pitch.pitchHz < FEWEST_PERIODS) return 'not-a-tap'
   if (errorCents(pitch) > MOST_ERROR_CENTS) return 'too-noisy'
   return null
 }

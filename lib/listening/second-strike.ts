@@ -13,6 +13,10 @@ const SOUND_RISE = 3
 /** A second click fainter than this beside the first is no strike (power). */
 const FAINTEST_CLICK = 0.004
 const FAINTEST_SOUND = 0.05
+/** And it stands so many times over what is there in the quietest quarter. */
+const OVER_FLOOR = 8
+/** Steps that are taken together. */
+const TOGETHER = 3
 
 /**
  * Whether a second strike falls into the ring of the first: a jump of the sound above 1.2 kHz, or of all of it, that no
@@ -34,9 +38,10 @@ function jumps(curve: Float64Array, first: number, after: number, rise: number, 
   let loudest = 0
   for (let i = first; i < after; i++) loudest = Math.max(loudest, curve[i] ?? 0)
   const floor = middle(curve)
-  for (let i = after; i < curve.length - 1; i++) {
-    const here = ((curve[i] ?? 0) + (curve[i + 1] ?? 0)) / 2
-    if (here < faintest * loudest || here < rise * floor) continue
+  for (let i = after; i < curve.length - TOGETHER; i++) {
+    let here = 0
+    for (let j = 0; j < TOGETHER; j++) here += (curve[i + j] ?? 0) / TOGETHER
+    if (here < faintest * loudest || here < OVER_FLOOR * floor) continue
     let before = 0
     for (let j = Math.max(0, i - GAP - LOOK_BACK); j < i - GAP; j++) before = Math.max(before, curve[j] ?? 0)
     if (here > rise * before) return true

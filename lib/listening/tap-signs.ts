@@ -1,11 +1,12 @@
 import type { FoundPartial } from './find-partials'
+import { MOST_PARTIALS } from './find-partials'
 import { LOW_RATE_STEP, lowRate } from './low-rate'
 
 /** The ring that is weighed, s after the strike. */
 const FROM_S = 0.01
 const TO_S = 0.2
 /** A drum's ring lies low: less than this of it under 1.2 kHz is a cymbal, wires, a clap or a hiss. */
-export const LEAST_LOW_SHARE = 0.5
+export const LEAST_LOW_SHARE = 0.3
 const LEAST_OVER_QUIET = 0.3
 
 type Ring = { samples: Float32Array; sampleRateHz: number; strikeAt: number; end: number; quiet: number }
@@ -27,8 +28,8 @@ export function lowShare({ samples, sampleRateHz, strikeAt, end, quiet }: Ring):
 }
 
 const HARMONICS = [2, 3, 4, 5, 6]
-const HARMONIC_SHARE = 0.01
-const MANY_HARMONICS = 3
+const HARMONIC_SHARE = 0.003
+const MANY_HARMONICS = 2
 const FAINTEST_HARMONIC = 0.05
 
 /** Whether the partials stand at whole multiples of one, as a voice's or a string's do and a head's do not. */
@@ -41,4 +42,13 @@ export function isHarmonic(partials: readonly FoundPartial[]): boolean {
     )
     return on.length >= MANY_HARMONICS
   })
+}
+
+/** Of a head's partials the seventh is faint beside the first; a cymbal's or a chord's is not. */
+const DENSE_SHARE = 0.35
+
+/** Whether partial stands beside partial with no few that lead. @param partials highest first */
+export function isDense(partials: readonly FoundPartial[]): boolean {
+  const last = partials[MOST_PARTIALS - 1]
+  return last !== undefined && last.height > DENSE_SHARE * (partials[0]?.height ?? 0)
 }
