@@ -65,7 +65,7 @@ export function DrumFields({ reader }: { reader: NoteReader }) {
             label="Tap over note, measured"
             optional
             unit=""
-            hint="batter tap ÷ drum’s note, near 1.7"
+            hint="batter tap ÷ note, heads as they stand"
           />
           <TextField path="spec.toleranceCents" label="Even within" unit="cents" hint="how far a lug may stand off" />
           <TextField path="spec.muffling" label="Muffling" optional />

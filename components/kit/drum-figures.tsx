@@ -1,3 +1,4 @@
+import { MOST_WARBLE_HZ } from '@/lib/acoustics/drum-tuning'
 import type { DrumTuning } from '@/lib/acoustics/drum-tuning'
 import { hertz } from './figure-words'
 
@@ -40,7 +41,9 @@ export function DrumFigures({ tuning }: { tuning: DrumTuning }) {
             <dt className="text-soft">other head open</dt>
             <dd>
               <span className="figures font-bold">{falseWarbleHz.toFixed(1)} Hz</span>{' '}
-              <span className="text-soft">false warble: damp it to tap</span>
+              <span className="text-soft">
+                {falseWarbleHz > MOST_WARBLE_HZ ? 'apart, two pitches: damp it to tap' : 'false warble: damp it to tap'}
+              </span>
             </dd>
           </>
         )}

@@ -29,7 +29,7 @@ export type Drum = {
   ported?: boolean
   /** Tap pitch of the resonant over that of the batter head, cents, each with the other damped; −1200 to 1200. */
   relationCents: number
-  /** Batter tap over the drum's note as measured on this drum, 1.2 to 2.5: replaces the model of the note. */
+  /** Batter tap over the drum's note as measured on this drum with its heads in this relation, 1.2 to 2.5: replaces the model of the note. */
   measuredTapRatio?: number
 }
 

@@ -54,12 +54,15 @@ export type DrumTuning = {
   upperPartnerHz: Estimated | null
   /** Share of the note that the heads pass to each other, 1 when matched (see `sustainShare`); null for one head. */
   sustain: number | null
-  /** Warble feigned by the other head when it is not damped, Hz; null for one head. */
+  /** Distance of the two tap pitches while the other head rings, Hz: up to `MOST_WARBLE_HZ` a feigned warble; null for one head. */
   falseWarbleHz: number | null
   batter: HeadTuning
   /** Null without a resonant head, and for a ported one: a head with a hole has no figures. */
   resonant: HeadTuning | null
 }
+
+/** Two pitches further apart than this are heard as two and not as a warble, Hz (from memory). */
+export const MOST_WARBLE_HZ = 20
 
 /** Scatter of modelled pitches against real heads: 2 %, T. D. Rossing, Acoustics of Timpani, 1982 (published for bare heads). */
 export const MODEL_SCATTER = 0.02

@@ -5,12 +5,12 @@ import { mm } from '../paper-measure'
 import { Figures, Heading, Plain } from '../words'
 import { LugDrawing } from './lug-drawing'
 
-const drawingMm = 47
+const drawingMm = 40
 /** A row's height and, over thirteen of them, the room of a table: fewer lugs have taller rows, easier to write in. */
 const rowMm = { least: 5.8, most: 8.5 }
 const blankColumns = ['gauge', 'tap Hz', 'gauge', 'tap Hz'] as const
 
-/** One head of a drum: its note largest, then the tap, the gauge to start from, the drawn order, and room for readings. */
+/** One head of a drum: its tap largest, then the gauge to start from, the drawn order, and room for readings. */
 export function HeadColumn({ head }: { head: SheetHead }) {
   return (
     <View>
@@ -20,24 +20,16 @@ export function HeadColumn({ head }: { head: SheetHead }) {
       </View>
       <View style={{ flexDirection: 'row' }}>
         <View style={{ flex: 1 }}>
-          {head.note ? (
-            <>
-              <Figures bold size={21} style={{ lineHeight: 1.05 }}>{`${head.note.hz.toFixed(1)} Hz`}</Figures>
-              <Heading size={13}>{noteWords(head.note)}</Heading>
-            </>
-          ) : (
-            <Heading size={13}>No note set</Heading>
-          )}
           {head.tap && (
-            <View style={{ marginTop: mm(1.5) }}>
+            <>
               <Plain size={8} colour="soft">
-                tap beside a lug
+                tap beside a lug, other head damped
               </Plain>
-              <Figures bold size={13} style={{ lineHeight: 1.1 }}>{`${head.tap.hz.toFixed(0)} Hz`}</Figures>
+              <Figures bold size={21} style={{ lineHeight: 1.05 }}>{`${head.tap.hz.toFixed(1)} Hz`}</Figures>
               <Figures
                 size={7.5}
               >{`${head.tap.lowHz.toFixed(0)} to ${head.tap.highHz.toFixed(0)}, near ${head.tap.name}`}</Figures>
-            </View>
+            </>
           )}
           <View style={{ marginTop: mm(1.5) }}>
             <Plain size={8} colour="soft">
@@ -48,12 +40,15 @@ export function HeadColumn({ head }: { head: SheetHead }) {
             </Figures>
             <Plain size={7.5}>{head.gauge === null ? 'none noted' : 'as noted, relative to this gauge'}</Plain>
           </View>
-          {head.rodPullN !== null && (
+          {head.tensionNPerM && (
             <Plain
               size={7.5}
               style={{ marginTop: mm(1.5) }}
-            >{`about ${Math.round(head.rodPullN / 10) * 10} N on each rod`}</Plain>
+            >{`film ${thousands(head.tensionNPerM.value)} kN/m, ${thousands(
+              head.tensionNPerM.low,
+            )} to ${thousands(head.tensionNPerM.high)}`}</Plain>
           )}
+          {head.rodPullN !== null && <Plain size={7.5}>{rodWords(head.rodPullN, head.rodPullBoundsN)}</Plain>}
           {head.without && (
             <Plain size={8} style={{ marginTop: mm(1.5) }}>
               {head.without}
@@ -67,9 +62,12 @@ export function HeadColumn({ head }: { head: SheetHead }) {
   )
 }
 
-function noteWords({ name, cents }: { name: string; cents: number }): string {
-  if (cents === 0) return name
-  return `${name} ${cents > 0 ? '+' : '−'}${Math.abs(cents)} cents`
+const thousands = (value: number) => (value / 1000).toFixed(2)
+const tens = (value: number) => Math.round(value / 10) * 10
+
+function rodWords(pullN: number, bounds: SheetHead['rodPullBoundsN']): string {
+  const about = `about ${tens(pullN)} N on each rod`
+  return bounds ? `${about}, ${tens(bounds.low)} to ${tens(bounds.high)}` : about
 }
 
 /** Blank columns for two passes, the lugs in the order in which they are turned. */

@@ -24,7 +24,7 @@ export function KitKey({ pack, plot }: { pack: PackDocument; plot: PackPlot }) {
             <Plain bold>{sheet.name}</Plain>
             <Plain size={8}>{sheet.sizeWords}</Plain>
           </View>
-          <Figures bold>{sheet.heads[0]?.note?.name ?? '–'}</Figures>
+          <Figures bold>{sheet.note?.name ?? '–'}</Figures>
         </View>
       ))}
       {channels.length > 0 && (

@@ -1,11 +1,12 @@
 import { View } from '@react-pdf/renderer'
+import { MOST_WARBLE_HZ } from '@/lib/acoustics/drum-tuning'
 import { planningCaution, tuningCautions } from '@/lib/advance/cautions'
 import type { PackDocument } from '@/lib/advance/pack-document'
 import { lugOneRule, tuningSteps } from '@/lib/advance/tuning-method'
-import type { SheetHead, TuningSheet } from '@/lib/advance/tuning-sheet'
+import type { SheetFigures, SheetHead, TuningSheet } from '@/lib/advance/tuning-sheet'
 import { ink } from '../ink'
 import { mm } from '../paper-measure'
-import { Heading, Plain } from '../words'
+import { Figures, Heading, Plain } from '../words'
 import { HeadColumn } from './head-column'
 import { LinkCode } from './link-code'
 import { PageFrame } from './page-frame'
@@ -35,9 +36,10 @@ export function SheetPage({
       <View style={{ flexDirection: 'row', justifyContent: 'space-between' }}>
         <View style={{ flex: 1, paddingRight: mm(4) }}>
           <Heading size={22}>{sheet.name}</Heading>
-          <Plain>{`${sheet.roleWord}, ${sheet.sizeWords}`}</Plain>
+          <DrumNote note={sheet.note} />
           <Plain>
             {[
+              `${sheet.roleWord}, ${sheet.sizeWords}`,
               `even within ±${sheet.toleranceCents} cents`,
               ...(sheet.relationWords ? [sheet.relationWords] : []),
               ...(sheet.muffling === '' ? [] : [`muffling: ${sheet.muffling}`]),
@@ -92,7 +94,7 @@ export function SheetPage({
           <Plain key={name} size={7.5}>{`${name}: ${words}`}</Plain>
         ))}
         <Plain size={7.5} colour="soft">
-          {`Frequencies are for a head in the open air; the shell moves the tap within the bounds given. ${planningCaution}`}
+          {[...(sheet.figures ? [`${figureWords(sheet.figures)}.`] : []), planningCaution].join(' ')}
         </Plain>
       </View>
       <View style={{ flexDirection: 'row', marginTop: mm(1) }}>
@@ -107,4 +109,31 @@ export function SheetPage({
       </View>
     </PageFrame>
   )
+}
+
+/** The drum's one note, largest on the page. */
+function DrumNote({ note }: { note: TuningSheet['note'] }) {
+  if (!note) return <Heading size={13}>No note set</Heading>
+  const { hz, name, cents } = note
+  return (
+    <View style={{ flexDirection: 'row', alignItems: 'baseline', marginBottom: mm(0.8) }}>
+      <Figures bold size={24} style={{ lineHeight: 1.05, marginRight: mm(3) }}>{`${hz.toFixed(1)} Hz`}</Figures>
+      <Heading size={13}>{cents === 0 ? name : `${name} ${cents > 0 ? '+' : '−'}${Math.abs(cents)} cents`}</Heading>
+    </View>
+  )
+}
+
+function openHeadWords(apartHz: number): string {
+  return apartHz > MOST_WARBLE_HZ
+    ? 'two pitches in every tap while the other head rings'
+    : `false warble ${apartHz.toFixed(1)} Hz while the other head rings`
+}
+
+function figureWords({ tapRatio, tapRatioMeasured, upperPartner, falseWarbleHz }: SheetFigures): string {
+  const ratio = (value: number) => value.toFixed(2)
+  return [
+    `Tap over note ${ratio(tapRatio.value)}, ${tapRatioMeasured ? 'measured' : `${ratio(tapRatio.low)} to ${ratio(tapRatio.high)}`}`,
+    ...(upperPartner ? [`upper partner ${upperPartner.lowHz.toFixed(0)} to ${upperPartner.highHz.toFixed(0)} Hz`] : []),
+    ...(falseWarbleHz === null ? [] : [openHeadWords(falseWarbleHz)]),
+  ].join('; ')
 }
