@@ -22,7 +22,9 @@ export interface RangeBarProps {
   label: string
   /** Stands in place of the bead, where the note can be moved; it places itself by `scalePercent`. */
   bead?: ReactNode
-  /** Writes "slack" and "choked" under the two ends. */
+  /** Another note to compare with, drawn as an empty ring behind the bead. */
+  ghost?: number | null
+  /** Writes "slack" and "choked" into the two ends, where there is room beside the bead. */
   ends?: boolean
   className?: string
 }
@@ -40,6 +42,9 @@ export function beadClasses(out: boolean): string {
   )
 }
 
+/** Nearer than this to an end of the bar, in semitones, a bead covers the word that stands there. */
+const endWordReach = 4
+
 /** A drum's playable range with its middle shaded and the note as a bead. A bead outside the range is square and spike. */
 export function RangeBar({
   scale,
@@ -50,6 +55,7 @@ export function RangeBar({
   note,
   label,
   bead,
+  ghost = null,
   ends,
   className,
 }: RangeBarProps) {
@@ -58,11 +64,31 @@ export function RangeBar({
     width: `${round(scalePercent(scale, to) - scalePercent(scale, from))}%`,
   })
   const out = note !== null && (note.at < low || note.at > high)
+  const clear = (end: number) =>
+    [note?.at ?? null, ghost].every((at) => at === null || Math.abs(at - end) > endWordReach)
   return (
     <div role={bead ? 'group' : 'img'} aria-label={label} className={className}>
       <div className="relative h-8">
-        <div className="absolute inset-y-2 border border-line bg-wash" style={place(low, high)} data-part="range" />
+        <div
+          className="absolute inset-y-2 flex items-center justify-between border border-line bg-wash px-1 text-[0.6875rem] leading-none text-soft"
+          style={place(low, high)}
+          data-part="range"
+        >
+          {ends && (
+            <>
+              <span className="max-sm:hidden">{clear(low) && 'slack'}</span>
+              <span className="max-sm:hidden">{clear(high) && 'choked'}</span>
+            </>
+          )}
+        </div>
         <div className="absolute inset-y-2 bg-reed/35" style={place(middleLow, middleHigh)} data-part="middle" />
+        {ghost !== null && ghost !== note?.at && (
+          <span
+            data-part="ghost"
+            className="absolute top-1/2 size-7 -translate-x-1/2 -translate-y-1/2 rounded-full border-2 border-dashed border-plum"
+            style={{ left: `${scalePercent(scale, ghost)}%` }}
+          />
+        )}
         {bead}
         {note && !bead && (
           <span data-part="note" className={beadClasses(out)} style={{ left: `${scalePercent(scale, note.at)}%` }}>
@@ -70,16 +96,6 @@ export function RangeBar({
           </span>
         )}
       </div>
-      {ends && (
-        <div className="relative h-4 text-[0.75rem] text-soft">
-          <span className="absolute" style={{ left: `${scalePercent(scale, low)}%` }}>
-            slack
-          </span>
-          <span className="absolute -translate-x-full" style={{ left: `${scalePercent(scale, high)}%` }}>
-            choked
-          </span>
-        </div>
-      )}
     </div>
   )
 }

@@ -1,7 +1,7 @@
 import type { Metadata, Route } from 'next'
 import { notFound } from 'next/navigation'
 import { KitList } from '@/components/kit/kit-list'
-import { NotePlanner } from '@/components/kit/note-planner'
+import { NotePlanner } from '@/components/kit/notes/note-planner'
 import { EmptyState } from '@/components/ui/empty-state'
 import { NavLinks } from '@/components/ui/nav-links'
 import { noteLocale } from '@/lib/advance/note-locale'
@@ -10,6 +10,7 @@ import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
 import { pageAnswer } from '@/lib/server/auth/page-answer'
 import { readKitPage } from '@/lib/server/kit/read-kit'
+import { readNoteTemplates } from '@/lib/server/note-templates/note-templates'
 
 export const metadata: Metadata = { title: 'Kit' }
 
@@ -44,6 +45,7 @@ export default async function KitPage({ params, searchParams }: Props) {
   const href = (to: 'kit' | 'notes') =>
     `/tours/${tour.id}/kit?rig=${rig.id}${to === 'notes' ? '&view=notes' : ''}` as Route
   const reader = { ...rig.reader, locale: noteLocale(rig.reader.locale) }
+  const templates = view === 'notes' ? (await readNoteTemplates(actor)).templates : []
   const shared = { rigId: rig.id, initial: rig.entries, reader, mayEdit }
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-24 sm:px-6">
@@ -62,7 +64,7 @@ export default async function KitPage({ params, searchParams }: Props) {
       {view === 'kit' ? (
         <KitList key={rig.id} {...shared} sources={rig.sources} />
       ) : (
-        <NotePlanner key={rig.id} {...shared} kitHref={href('kit')} />
+        <NotePlanner key={rig.id} {...shared} {...{ templates, partyId: actor.partyId, kitHref: href('kit') }} />
       )}
     </main>
   )

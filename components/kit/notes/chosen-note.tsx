@@ -1,0 +1,88 @@
+import { Button } from '@/components/ui/button'
+import { Checkbox } from '@/components/ui/checkbox'
+import { noteName } from '@/lib/acoustics/note-name'
+import type { Note } from '@/lib/acoustics/note'
+import type { DrumEntry } from '@/lib/contracts/kit'
+import { noteText, noteValue } from '@/lib/contracts/kit-form'
+import type { MoveCost } from '@/lib/tuning/note-plan-model'
+import type { KitReader } from '../kit-reader'
+import { costWords } from './cost-words'
+import { TypedNote } from './typed-note'
+import { spokenNote } from './spoken-note'
+import { movedBy } from './note-draft'
+import type { Standing } from './standing'
+
+export interface ChosenNoteProps {
+  drum: DrumEntry
+  standings: readonly Standing[]
+  /** The whole plan's cost in words. */
+  planCost: string
+  /** The choice that costs the plan least, when it is another. */
+  best: Pick<MoveCost, 'note' | 'cost'> | null
+  reader: KitReader
+  onSet: (note: Note | null) => void
+  onLock: (locked: boolean) => void
+}
+
+/** The note that was last taken up: typed, moved by a step, locked, and what it costs. */
+export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onLock }: ChosenNoteProps) {
+  const { note, noteLocked } = drum.spec
+  const nameAt = (semitone: number) => noteName(semitone, reader.locale)
+  const [down, up] = note ? [movedBy(note, -1), movedBy(note, 1)] : [null, null]
+  return (
+    <section aria-label={`The note of ${drum.name}`} className="border-l-4 border-spike bg-sheet px-3 py-3">
+      <div className="flex flex-wrap items-end gap-x-3 gap-y-2">
+        <div className="max-sm:basis-full">
+          <h3 className="text-xl">{drum.name}</h3>
+          <p className="figures text-sm">{note ? spokenNote(note, reader) : 'no note yet'}</p>
+        </div>
+        <TypedNote
+          key={drum.id}
+          value={note ? noteText(note, reader.locale) : ''}
+          onCommit={(text) => {
+            const read = noteValue(text, reader)
+            if ('problem' in read) return read.problem
+            if (read.value && (read.value.semitone < 12 || read.value.semitone > 96))
+              return `from ${nameAt(12)} to ${nameAt(96)}`
+            onSet(read.value)
+            return null
+          }}
+        />
+        {down && up && (
+          <div className="flex flex-wrap gap-2">
+            <Button onClick={() => onSet(down)}>Down to {nameAt(down.semitone)}</Button>
+            <Button onClick={() => onSet(up)}>Up to {nameAt(up.semitone)}</Button>
+          </div>
+        )}
+        <Checkbox
+          checked={noteLocked}
+          disabled={!note}
+          onChange={(event) => onLock(event.target.checked)}
+          label={
+            <>
+              Lock<span className="sr-only"> the note of {drum.name}</span>
+            </>
+          }
+        />
+      </div>
+      {standings.length > 0 && (
+        <p className="mt-2 text-sm">
+          {drum.name}: {standings.map(({ words }) => words).join('; ')}.
+        </p>
+      )}
+      {note && (
+        <p className="text-sm text-soft">
+          The plan so costs {planCost}.{' '}
+          {best ? (
+            <>
+              It would cost least, {costWords(best.cost)}, with {drum.name} at {nameAt(best.note.semitone)}.
+            </>
+          ) : (
+            'No other note of this drum costs less.'
+          )}{' '}
+          An interval one semitone off costs 1.
+        </p>
+      )}
+    </section>
+  )
+}
