@@ -64,7 +64,9 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const firstFrom = Math.max(unclippedFrom, strikeAt + Math.round(FIRST_SKIP_S * sampleRateHz))
   const found = findPartials(spectrumFrom(samples, firstFrom, end), rateHz).partials
   const ringing = found.filter(({ decay }) => T60_PER_TAU / (decay * rateHz) < STEADY_T60_S)
-  if (isHarmonic(ringing) || isDense(found) || (ringing.length === 0 && found.length > 0)) return 'not-a-tap'
+  if (ringing.length === 0 && found.length > 0) return 'not-a-tap'
+  // A pitch on its way looks like many partials side by side.
+  if (isHarmonic(ringing) || isDense(found)) return gliding(strike, end) ?? 'not-a-tap'
   const chosen = chooseTapPartial(ringing, rateHz, expect)
   if (typeof chosen === 'string') return gliding(strike, end) ?? chosen
 

@@ -21,6 +21,9 @@ const GAP = 3
 /** The floor falls to what is heard in some 10 ms and climbs by 6 dB a second. */
 const FALL = 0.2
 const CLIMB_A_SECOND = 4
+/** Nor is it one when it is much fainter than what was heard just before; that is forgotten by 30 dB a second. */
+const BESIDE_LOUDEST = 0.02
+const FORGET_A_SECOND = 1e-3
 /** Kept from before the strike, s. */
 const PRE_ROLL_S = 0.02
 /** A strike that comes later than this into a ring ends it and begins its own; sooner, the two are one double hit. */
@@ -45,6 +48,7 @@ export class TapListener {
   private pushed = 0
   private judged = 0
   private floor = LEAST_FLOOR
+  private loudest = 0
   private readonly recent = new Float64Array(LOOK_BACK + GAP)
   private capture: Capture | null = null
 
@@ -109,7 +113,7 @@ export class TapListener {
   }
 
   private isStrike(loudness: number): boolean {
-    if (loudness < OVER_FLOOR * this.floor) return false
+    if (loudness < OVER_FLOOR * this.floor || loudness < BESIDE_LOUDEST * this.loudest) return false
     let before = 0
     for (let i = 0; i < LOOK_BACK; i++) before = Math.max(before, this.recent[i] ?? 0)
     return loudness > RISE * before
@@ -118,6 +122,7 @@ export class TapListener {
   private follow(loudness: number): void {
     this.recent.copyWithin(0, 1)
     this.recent[this.recent.length - 1] = loudness
+    this.loudest = Math.max(loudness, this.loudest * FORGET_A_SECOND ** (STEP / this.sampleRateHz))
     const climb = CLIMB_A_SECOND ** (STEP / this.sampleRateHz)
     const followed =
       loudness < this.floor ? this.floor + FALL * (loudness - this.floor) : Math.min(loudness, this.floor * climb)
