@@ -1,10 +1,9 @@
-import { nearestNote } from '@/lib/acoustics/note'
+import { noteFrequencyHz } from '@/lib/acoustics/note'
 import { noteName } from '@/lib/acoustics/note-name'
-import { openAirModeHz } from '@/lib/acoustics/open-air-head'
-import { defaultTensionRange } from '@/lib/acoustics/tension-range'
 import type { DrumRole } from '@/lib/acoustics/tension-range'
 import { planNotes } from '@/lib/tuning/note-plan'
 import { NOTE_TEMPLATES } from '@/lib/tuning/note-template'
+import { planDrumOf } from '@/lib/tuning/plan-drum'
 import { buildScene, channelKey, emptyDocument, newPiece, screenTextSizes } from '@/plots/index'
 import type { KitPiece, Piece, Scene } from '@/plots/index'
 
@@ -17,7 +16,9 @@ interface ExampleDrum {
   lugs: number
 }
 
-const film = { plyMils: [10], coatingKgPerM2: 0.05 }
+const batter = { plyMils: [10], coatingGPerM2: 50 }
+const resonant = { plyMils: [7.5], coatingGPerM2: 0 }
+const snareSide = { plyMils: [3], coatingGPerM2: 0 }
 
 const drums: readonly ExampleDrum[] = [
   { id: 'snare', name: 'Snare', role: 'snare', diameterIn: 14, depthIn: 6.5, lugs: 10 },
@@ -57,31 +58,35 @@ const microphones: readonly { id: string; aim: string; at: [number, number]; cha
 
 const fourths = NOTE_TEMPLATES.find((template) => template.id === 'fourths') ?? NOTE_TEMPLATES[0]!
 
+const withRanges = drums.map((drum) => ({
+  drum,
+  planDrum: planDrumOf(drum.id, drum.name, {
+    ...{ ...drum, batter, resonant: drum.role === 'snare' ? snareSide : resonant, ported: false },
+    ...{ headRelationCents: 0, note: null, noteLocked: false },
+  }),
+}))
+
 /** Fourths down from D3 on the 12 in tom, planned by the same rules as everybody's kit. */
 const plan = planNotes({
   template: fourths,
-  drums: drums.map(({ id, role, diameterIn }) => ({ id, role, diameterIn, batter: film })),
+  drums: withRanges.map(({ planDrum }) => planDrum),
   anchor: { drumId: 'tom-12', note: { semitone: 50, cents: 0 } },
-})
+  alternatives: 0,
+}).best
 
 function plannedNote(drumId: string) {
-  const planned = plan.find((drum) => drum.drumId === drumId)
-  return planned ? { name: noteName(planned.note.semitone), semitone: planned.note.semitone, hz: planned.noteHz } : null
+  const planned = plan.drums.find((drum) => drum.drumId === drumId)
+  if (!planned) return null
+  const { note } = planned
+  return { name: noteName(note.semitone), semitone: note.semitone, hz: noteFrequencyHz(note) }
 }
 
-/** The example kit's drums with their planned notes. */
-export const exampleDrums = drums.map((drum) => ({ ...drum, note: plannedNote(drum.id) }))
-
-/** Where a head of this drum is slack, in its middle third, and choked, as semitones with their fractions. */
-export function pitchRange({ role, diameterIn }: Pick<ExampleDrum, 'role' | 'diameterIn'>) {
-  const { slackNPerM, chokedNPerM } = defaultTensionRange(role)
-  const semitoneAt = (fraction: number) => {
-    const tensionNPerM = slackNPerM * (chokedNPerM / slackNPerM) ** fraction
-    const { semitone, cents } = nearestNote(openAirModeHz(0, tensionNPerM, { ...film, diameterM: diameterIn * 0.0254 }))
-    return semitone + cents / 100
-  }
-  return { low: semitoneAt(0), middleLow: semitoneAt(1 / 3), middleHigh: semitoneAt(2 / 3), high: semitoneAt(1) }
-}
+/** The example kit's drums with their planned notes, and where each is slack, in its middle third, and choked, as pitches. */
+export const exampleDrums = withRanges.map(({ drum, planDrum }) => ({
+  ...drum,
+  note: plannedNote(drum.id),
+  range: planDrum.range,
+}))
 
 function piece(id: string, kind: string, rest: Partial<Piece>): Piece {
   const [xM = 0, yM = 0] = places[id] ?? []
@@ -91,7 +96,7 @@ function piece(id: string, kind: string, rest: Partial<Piece>): Piece {
 /** The example kit from above as the plot draws it, with words that read at `pxPerM` pixels a metre. */
 export function exampleScene(pxPerM: number): Scene {
   const kit: KitPiece[] = [
-    ...exampleDrums.map(({ note, ...drum }): KitPiece => ({
+    ...exampleDrums.map(({ note, range: _range, ...drum }): KitPiece => ({
       ...drum,
       kind: 'drum',
       noteLabel: note?.name ?? null,

@@ -1,6 +1,6 @@
 import { RangeChart } from '@/components/signature/range-chart'
 import { noteName } from '@/lib/acoustics/note-name'
-import { exampleDrums, pitchRange } from './example-kit'
+import { exampleDrums } from './example-kit'
 
 const scale = { from: 22, to: 64 }
 const marks = [24, 29, 33, 36, 41, 45, 48, 53, 57, 60].map((at) => ({ at, name: noteName(at), minor: at % 12 !== 0 }))
@@ -26,7 +26,7 @@ export function ExampleNotes() {
         return {
           id: drum.id,
           name: drum.name,
-          ...pitchRange(drum),
+          ...drum.range,
           note: drum.note && { at: drum.note.semitone, name: drum.note.name },
           label: `${drum.name}: ${drum.note?.name ?? 'no note yet'}`,
           interval: intervalWords[steps] ?? null,

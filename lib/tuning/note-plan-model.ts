@@ -71,7 +71,10 @@ export type JudgedInterval = {
 }
 
 export type PlanClash =
-  /** Two drums nearer than the set distance, in semitones. */
+  /**
+   * Two drums nearer than the set distance, in semitones. Charged between toms next to each other in size, between a kick and the
+   * lowest tom, and between a snare and any other; elsewhere the drums in between are charged already and the cost here is 0.
+   */
   | { kind: 'too-close'; drumIds: readonly [string, string]; semitones: number; cost: number }
   /** A snare on a tom's note name, in whatever octave: the tom stirs its wires. */
   | { kind: 'shared-name'; snareId: string; tomId: string; cost: number }

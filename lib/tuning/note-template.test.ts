@@ -1,35 +1,38 @@
-import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { NOTE_TEMPLATES, templateInterval } from './note-template'
+import { NOTE_TEMPLATES, requireTemplate } from './note-template'
+import type { NoteTemplate } from './note-template'
+
+const [fourths] = NOTE_TEMPLATES
+if (!fourths) throw new Error('no templates')
 
 describe('note templates', () => {
-  it.each([
-    [12, 14, -5],
-    [12, 10, 5],
-    [12, 16, -10],
-    [12, 12, 0],
-    [12, 13, -2],
-    [13, 12, 2],
-    [10, 13, -7],
-  ])('fourths: %i to %i in is %i semitones (common practice: 2 in a perfect fourth)', (from, to, semitones) => {
-    expect(templateInterval(from, to, 2.5)).toBe(semitones)
+  it('start a party with fourths: 5 semitones for 2 in (common practice)', () => {
+    expect(fourths).toMatchObject({
+      id: 'fourths',
+      steps: { kind: 'per-inch', semitonesPerInch: 2.5 },
+      resonantCents: 0,
+    })
   })
 
-  it('there and back is the same interval', () => {
-    const inches = fc.integer({ min: 6, max: 26 })
-    fc.assert(
-      fc.property(inches, inches, fc.constantFrom(1, 1.5, 2, 2.5), (a, b, perInch) => {
-        expect(templateInterval(a, b, perInch) + templateInterval(b, a, perInch)).toBe(0)
-      }),
-    )
-  })
-
-  it('starts a party with fourths', () => {
-    expect(NOTE_TEMPLATES[0]).toMatchObject({ id: 'fourths', steps: { semitonesPerInch: 2.5 }, resonantCents: 0 })
+  it('have ids of their own, and each is one that is allowed', () => {
     expect(new Set(NOTE_TEMPLATES.map(({ id }) => id)).size).toBe(NOTE_TEMPLATES.length)
+    for (const template of NOTE_TEMPLATES) expect(() => requireTemplate(template)).not.toThrow()
   })
 
-  it('refuses metres passed as inches', () => {
-    expect(() => templateInterval(0.3048, 14, 2.5)).toThrow(expect.objectContaining({ field: 'diameterIn' }))
+  it('cover every kind of step', () => {
+    const kinds = new Set(NOTE_TEMPLATES.map(({ steps }) => steps.kind))
+    expect(kinds).toEqual(new Set(['per-inch', 'per-pair', 'equal-feel', 'free']))
+  })
+
+  it.each<[string, Partial<NoteTemplate>]>([
+    ['semitonesPerInch', { steps: { kind: 'per-inch', semitonesPerInch: Number.NaN } }],
+    ['semitonesPerInch', { steps: { kind: 'per-inch', semitonesPerInch: -1 } }],
+    ['semitones', { steps: { kind: 'per-pair', semitones: [] } }],
+    ['semitones', { steps: { kind: 'per-pair', semitones: [5, Number.POSITIVE_INFINITY] } }],
+    ['semitones', { steps: { kind: 'per-pair', semitones: [25] } }],
+    ['kickBelowLowestTom', { kickBelowLowestTom: [5, 7.5] }],
+    ['resonantCents', { resonantCents: 1300 }],
+  ])('refuse nonsense, naming %s', (field, change) => {
+    expect(() => requireTemplate({ ...fourths, ...change })).toThrow(expect.objectContaining({ field }))
   })
 })

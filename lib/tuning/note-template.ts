@@ -1,5 +1,5 @@
 import { AcousticsError } from '@/lib/acoustics/acoustics-error'
-import { requireQuantity } from '@/lib/acoustics/require-quantity'
+import { requireQuantity, requireWhole } from '@/lib/acoustics/require-quantity'
 
 /**
  * What a template asks from each tom down to the next larger one.
@@ -49,7 +49,7 @@ export const NOTE_TEMPLATES: readonly NoteTemplate[] = STARTING.map((template) =
 export function requireTemplate({ steps, resonantCents, kickBelowLowestTom }: NoteTemplate): void {
   requireQuantity('resonantCents', resonantCents, { min: -1200, max: 1200, unit: 'cents' })
   for (const semitones of kickBelowLowestTom) {
-    requireQuantity('kickBelowLowestTom', semitones, { min: 0, max: 36, unit: 'semitones' })
+    requireWhole('kickBelowLowestTom', semitones, { min: 0, max: 36, unit: 'semitones' })
   }
   if (steps.kind === 'per-inch') {
     requireQuantity('semitonesPerInch', steps.semitonesPerInch, { min: 0, max: 12, unit: 'semitones' })
@@ -60,20 +60,4 @@ export function requireTemplate({ steps, resonantCents, kickBelowLowestTom }: No
     }
     for (const each of steps.semitones) requireQuantity('semitones', each, { min: 0, max: 24, unit: 'semitones' })
   }
-}
-
-/**
- * Semitones from one diameter to another under a fixed-interval template: negative when the second is larger, rounded to
- * whole semitones (a half goes to the smaller step). Diameters in nominal inches.
- * @throws AcousticsError
- */
-export function templateInterval(fromDiameterIn: number, toDiameterIn: number, semitonesPerInch: number): number {
-  const inches = { min: 4, max: 31, unit: 'in' }
-  requireQuantity('diameterIn', fromDiameterIn, inches)
-  requireQuantity('diameterIn', toDiameterIn, inches)
-  requireQuantity('semitonesPerInch', semitonesPerInch, { min: 0, max: 12, unit: 'semitones' })
-  const exact = (fromDiameterIn - toDiameterIn) * semitonesPerInch
-  // Rounding the size and not the signed value keeps the way down equal to the way up. 2.5 is taken as 2.
-  const size = Math.ceil(Math.abs(exact) - 0.5)
-  return size === 0 ? 0 : Math.sign(exact) * size
 }
