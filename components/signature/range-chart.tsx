@@ -46,7 +46,7 @@ export function RangeChart({ scale, rows, marks }: RangeChartProps) {
       <div aria-hidden className="pt-6">
         {rows.map((row) => (
           <div key={row.id} className="flex flex-col justify-center" style={{ height: rowHeightPx }}>
-            <span className="name leading-tight">{row.name}</span>
+            <span className="name leading-tight max-sm:text-sm max-sm:leading-tight">{row.name}</span>
             {row.standing}
           </div>
         ))}

@@ -1,18 +1,7 @@
-import { encode } from 'next-auth/jwt'
-import { expect, test, type Browser, type Page } from '@playwright/test'
-import { makeParty, type Member } from '../helpers/party-fixture'
+import { expect, test, type Page } from '@playwright/test'
+import { makeParty } from '../helpers/party-fixture'
 import { makeTour } from '../helpers/tour-fixture'
-
-/** A page of a signed-in member, as its device would hold it. */
-async function pageOf(browser: Browser, member: Member): Promise<Page> {
-  const secret = process.env['NEXTAUTH_SECRET']
-  const url = process.env['APP_URL']
-  if (!secret || !url) throw new Error('NEXTAUTH_SECRET and APP_URL must be set: npm test sets them')
-  const value = await encode({ token: { sub: member.personId, sessionId: member.sessionId }, secret })
-  const context = await browser.newContext()
-  await context.addCookies([{ name: 'next-auth.session-token', value, url, httpOnly: true, sameSite: 'Lax' }])
-  return context.newPage()
-}
+import { pageOf } from './member-page'
 
 const sheetOf = (page: Page) => page.getByRole('group', { name: /^Plot, seen from above/ })
 const saved = (page: Page) => expect(page.getByText('saved', { exact: true })).toBeVisible()

@@ -90,7 +90,7 @@ export function NoteBead(props: NoteBeadProps) {
       aria-valuenow={Math.round(at)}
       aria-valuetext={valueText}
       data-part="note"
-      className={`${beadClasses(at < low || at > high)} ${chosen ? 'z-20 ring-3 ring-spike' : 'z-10'} cursor-ew-resize touch-none select-none after:absolute after:-inset-2`}
+      className={`${beadClasses(at < low || at > high)} ${chosen ? 'z-20 ring-3 ring-spike' : 'z-10'} scroll-my-36 cursor-ew-resize touch-none select-none after:absolute after:-inset-2`}
       style={{ left: `${scalePercent(scale, at)}%` }}
       onFocus={onChoose}
       onKeyDown={onKeyDown}

@@ -3,11 +3,13 @@ import type { CostStep } from '@/components/signature/cost-steps'
 import type { RangeScale } from '@/components/signature/range-bar'
 import { RangeChart } from '@/components/signature/range-chart'
 import { classes } from '@/components/ui/classes'
+import type { Note } from '@/lib/acoustics/note'
 import { noteName } from '@/lib/acoustics/note-name'
 import type { DrumEntry } from '@/lib/contracts/kit'
 import type { JudgedPlan, PlanDrum } from '@/lib/tuning/note-plan-model'
 import type { KitReader } from '../kit-reader'
 import type { NoteMove } from './note-bead'
+import { FirstNote } from './first-note'
 import { NoteBead } from './note-bead'
 import { pitchOf } from './note-draft'
 import { spokenNote } from './spoken-note'
@@ -32,6 +34,8 @@ export interface NoteChartProps {
     move: (drum: DrumEntry, move: NoteMove) => void
     slide: (drum: DrumEntry, move: NoteMove) => void
     putDown: (drum: DrumEntry) => void
+    /** Gives a drum its first note. */
+    give: (drum: DrumEntry, note: Note) => void
     letGo: () => void
   } | null
 }
@@ -60,19 +64,27 @@ export function NoteChart(props: NoteChartProps) {
       intervalOff: (interval?.offSemitones ?? 0) > 0,
       standing: <RowStanding standing={standings[0] ?? null} held={held} />,
       costs: drum.id === chosenId ? costs : null,
-      bead: at !== null && hands && (
-        <NoteBead
-          {...{ scale, at, name, low: range.low, high: range.high }}
-          label={`Note of ${drum.name}`}
-          valueText={[said, stands].filter(Boolean).join(', ')}
-          chosen={drum.id === chosenId}
-          onChoose={() => hands.choose(drum)}
-          onMove={(move) => hands.move(drum, move)}
-          onSlide={(move) => hands.slide(drum, move)}
-          onPutDown={() => hands.putDown(drum)}
-          onLetGo={hands.letGo}
-        />
-      ),
+      bead:
+        hands &&
+        (at === null ? (
+          <FirstNote
+            at={(range.middleLow + range.middleHigh) / 2}
+            {...{ scale, drumName: drum.name }}
+            onGive={(to) => hands.give(drum, { semitone: Math.round(to), cents: 0 })}
+          />
+        ) : (
+          <NoteBead
+            {...{ scale, at, name, low: range.low, high: range.high }}
+            label={`Note of ${drum.name}`}
+            valueText={[said, stands].filter(Boolean).join(', ')}
+            chosen={drum.id === chosenId}
+            onChoose={() => hands.choose(drum)}
+            onMove={(move) => hands.move(drum, move)}
+            onSlide={(move) => hands.slide(drum, move)}
+            onPutDown={() => hands.putDown(drum)}
+            onLetGo={hands.letGo}
+          />
+        )),
     }
   })
   return <RangeChart scale={scale} rows={rows} marks={marksOf(scale, reader)} />

@@ -2,6 +2,7 @@
 
 import type { Route } from 'next'
 import { memo, useState } from 'react'
+import { Button } from '@/components/ui/button'
 import { ButtonLink } from '@/components/ui/button-link'
 import { EmptyState } from '@/components/ui/empty-state'
 import { LiveRegion } from '@/components/ui/live-region'
@@ -96,7 +97,7 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
       )}
       {mayEdit && state.keptAt && toSet.length > 0 && (
         <Notice kind="wait" word="Not set" className="mt-4">
-          The plan of {keptWords(state.keptAt)} was kept on this device. Rings are the notes in the kit.
+          The plan of {keptWords(state.keptAt)} was kept on this device.
         </Notice>
       )}
       <div className="mt-4 grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_21rem]">
@@ -110,6 +111,22 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
             costs={view.costSteps}
             hands={editing ? hands.onChart : null}
           />
+          {mayEdit && (
+            <p className="mt-2 flex min-h-control flex-wrap items-center gap-x-1 border-t border-line text-sm">
+              {toSet.length === 0 ? (
+                <span className="text-soft">The kit has these notes.</span>
+              ) : (
+                <>
+                  <span className="text-plum">
+                    {drumsWord(toSet.length)} not as in the kit, whose notes are the rings.
+                  </span>
+                  <Button kind="quiet" disabled={set.isPending} onClick={hands.drop}>
+                    Back to the notes in the kit
+                  </Button>
+                </>
+              )}
+            </p>
+          )}
         </div>
         {mayEdit && (
           <div className="flex min-w-0 flex-col gap-4">
@@ -170,7 +187,6 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
           }
           onUndo={hands.undo}
           onRedo={hands.redo}
-          onDrop={hands.drop}
           onKeepTried={hands.keepTried}
           onLeaveTried={() => hands.look(null)}
         />

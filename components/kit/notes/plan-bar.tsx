@@ -10,7 +10,7 @@ import { headRelationWords } from '@/lib/tuning/interval-name'
 import type { NoteTemplate } from '@/lib/tuning/note-template'
 import type { PlanChoices } from './note-session'
 import { TemplateTools } from './template-tools'
-import { stepsWords } from './template-words'
+import { kickWords, stepsWords } from './template-words'
 
 export interface PlanBarProps {
   partyId: string
@@ -44,51 +44,45 @@ export function PlanBar(props: PlanBarProps) {
   const apart = String(choices.apartSemitones)
   const apartWords = apartOptions.find(({ value }) => value === apart)?.label ?? `${apart} semitones apart`
   return (
-    <>
-      <form
-        aria-label="How to plan the notes"
-        onSubmit={(event) => {
-          event.preventDefault()
-          onPlan?.()
-        }}
-      >
-        <div className="grid items-start gap-x-4 gap-y-3 sm:grid-cols-2 lg:grid-cols-[1.3fr_1fr_auto]">
-          <Field label="Plan by" hint={stepsWords(template.steps)}>
-            {(control) => (
-              <Select
-                {...control}
-                value={template.id}
-                onChange={(event) => onChoose({ templateId: event.target.value })}
-                options={[
-                  ...everybodys.map(({ id, name }) => ({ value: id, label: name })),
-                  ...own.map(({ id, name }) => ({ value: id, label: `${name}, the party’s own` })),
-                ]}
-              />
-            )}
-          </Field>
-          <Field
-            label="From"
-            hint={
-              choices.anchorId === null
-                ? 'wherever the ranges fit best'
-                : 'the anchor: it keeps its note, the others are stepped from it'
-            }
-          >
-            {(control) => (
-              <Select
-                {...control}
-                value={choices.anchorId ?? ''}
-                onChange={(event) => onChoose({ anchorId: event.target.value || null })}
-                placeholder="No anchor"
-                options={toms.map(({ id, name }) => ({ value: id, label: name }))}
-              />
-            )}
-          </Field>
-          <Button type="submit" disabled={!onPlan} className="sm:col-span-2 lg:col-span-1 lg:mt-[1.625rem]">
-            Plan the notes
-          </Button>
-        </div>
-        <details open={more} onToggle={(event) => setMore(event.currentTarget.open)} className="mt-1">
+    <div role="group" aria-label="How to plan the notes">
+      <div className="grid items-start gap-x-4 gap-y-3 sm:grid-cols-2 lg:grid-cols-[1.3fr_1fr_auto]">
+        <Field label="Plan by" hint={`${stepsWords(template.steps)}; ${kickWords(template.kickBelowLowestTom)}`}>
+          {(control) => (
+            <Select
+              {...control}
+              value={template.id}
+              onChange={(event) => onChoose({ templateId: event.target.value })}
+              options={[
+                ...everybodys.map(({ id, name }) => ({ value: id, label: name })),
+                ...own.map(({ id, name }) => ({ value: id, label: `${name}, the party’s own` })),
+              ]}
+            />
+          )}
+        </Field>
+        <Field
+          label="From"
+          hint={
+            choices.anchorId === null
+              ? 'wherever the ranges fit best'
+              : 'the anchor: it keeps its note, the others are stepped from it'
+          }
+        >
+          {(control) => (
+            <Select
+              {...control}
+              value={choices.anchorId ?? ''}
+              onChange={(event) => onChoose({ anchorId: event.target.value || null })}
+              placeholder="No anchor"
+              options={toms.map(({ id, name }) => ({ value: id, label: name }))}
+            />
+          )}
+        </Field>
+        <Button disabled={!onPlan} onClick={() => onPlan?.()} className="sm:col-span-2 lg:col-span-1 lg:mt-[1.625rem]">
+          Plan the notes
+        </Button>
+      </div>
+      <div className="mt-1 flex flex-wrap items-start justify-between gap-x-6">
+        <details open={more} onToggle={(event) => setMore(event.currentTarget.open)} className="min-w-0 grow basis-80">
           <summary className="flex min-h-control w-fit cursor-pointer items-center text-sm">
             <span>
               <span className="font-bold underline underline-offset-4">What else to heed</span>
@@ -139,8 +133,8 @@ export function PlanBar(props: PlanBarProps) {
             </Field>
           </div>
         </details>
-      </form>
-      <TemplateTools {...{ partyId, own, chosen: template, onChoose: (templateId) => onChoose({ templateId }) }} />
-    </>
+        <TemplateTools {...{ partyId, own, chosen: template, onChoose: (templateId) => onChoose({ templateId }) }} />
+      </div>
+    </div>
   )
 }

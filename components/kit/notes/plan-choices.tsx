@@ -10,7 +10,7 @@ import { costWords } from './cost-words'
 /** One plan that could be taken. */
 export interface PlanChoice {
   readonly id: string
-  /** "the best plan", "plan 3". */
+  /** "the best", "plan 3". */
   readonly name: string
   readonly plan: JudgedPlan
   /** Why it stands where it does, a sentence each. */
@@ -67,16 +67,11 @@ export function PlanChoices({ title, choices, drums, reader, lookedAt, hands }: 
                 <p className="text-sm font-bold text-reed">Your plan as it is</p>
               ) : (
                 hands && (
-                  <div className="mt-1 -ml-3 flex flex-wrap">
-                    <Button
-                      kind="quiet"
-                      className="px-3"
-                      aria-pressed={looking}
-                      onClick={() => hands.look(looking ? null : choice)}
-                    >
+                  <div className="-ml-4 flex flex-wrap">
+                    <Button kind="quiet" aria-pressed={looking} onClick={() => hands.look(looking ? null : choice)}>
                       {looking ? 'Back to my plan' : `Look at ${choice.name}`}
                     </Button>
-                    <Button kind="quiet" className="px-3" onClick={() => hands.keep(choice)}>
+                    <Button kind="quiet" onClick={() => hands.keep(choice)}>
                       Keep {choice.name}
                     </Button>
                   </div>

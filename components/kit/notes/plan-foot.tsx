@@ -15,14 +15,13 @@ export interface PlanFootProps {
   onSet: () => void
   onUndo: () => void
   onRedo: () => void
-  onDrop: () => void
   onKeepTried: () => void
   onLeaveTried: () => void
 }
 
 /** What can be done with the plan as a whole, always in reach at the foot of the page. */
 export function PlanFoot(props: PlanFootProps) {
-  const { toSet, history, trying, setting, onSet, onUndo, onRedo, onDrop, onKeepTried, onLeaveTried } = props
+  const { toSet, history, trying, setting, onSet, onUndo, onRedo, onKeepTried, onLeaveTried } = props
   const { busy, tries, error } = setting
   const back = history.undo.at(-1)
   const forth = history.redo.at(-1)
@@ -53,7 +52,7 @@ export function PlanFoot(props: PlanFootProps) {
             disabled={toSet === 0}
             busy={busy && 'Setting the notes'}
             onClick={onSet}
-            className="max-sm:grow"
+            className="max-sm:basis-full"
           >
             {toSet === 0 ? 'Set notes' : `Set notes for ${drumsWord(toSet)}`}
           </Button>
@@ -63,13 +62,6 @@ export function PlanFoot(props: PlanFootProps) {
           <Button disabled={busy || !forth} aria-keyshortcuts="Control+Shift+Z" onClick={onRedo}>
             {forth ? `Redo: ${forth.says}` : 'Redo'}
           </Button>
-          {toSet === 0 ? (
-            <span className="text-soft max-sm:hidden">The kit has these notes.</span>
-          ) : (
-            <Button kind="quiet" disabled={busy} onClick={onDrop}>
-              Back to the notes in the kit
-            </Button>
-          )}
         </div>
       )}
     </div>

@@ -3,6 +3,7 @@ import type { JudgedPlan, PlanChange } from '@/lib/tuning/note-plan-model'
 import { splitWords } from './cost-words'
 import { intervalWords, standingsOf } from './standing'
 import type { NameOf } from './standing'
+import { withArticle } from './with-article'
 
 /** More would not be read. */
 const sentencesAtMost = 2
@@ -10,12 +11,12 @@ const sentencesAtMost = 2
 /** How an alternative differs from the best plan, in words. */
 export function changeWords(change: PlanChange, nameOf: NameOf): string {
   if (change.kind === 'shifted') {
-    const size = intervalName(change.semitones * 100)
-    return `The same intervals a ${size} ${change.semitones > 0 ? 'higher' : 'lower'}.`
+    const size = withArticle(intervalName(change.semitones * 100))
+    return `The same intervals ${size} ${change.semitones > 0 ? 'higher' : 'lower'}.`
   }
   const words = change.intervals.map(
     ({ upperId, lowerId, best, here }) =>
-      `${intervalName(here * 100)} from ${nameOf(upperId)} to ${nameOf(lowerId)}, not ${intervalName(best * 100)}`,
+      `${intervalName(here * 100)} from ${nameOf(upperId)} to ${nameOf(lowerId)}, not ${withArticle(intervalName(best * 100))}`,
   )
   return sentence(words.join('; '))
 }

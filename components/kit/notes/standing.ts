@@ -1,4 +1,5 @@
 import type { JudgedDrum, JudgedInterval, JudgedPlan, PlanClash } from '@/lib/tuning/note-plan-model'
+import { withArticle } from './with-article'
 
 /** How a note stands on its drum and among the others: in a word for the chart, and in words. */
 export interface Standing {
@@ -68,9 +69,5 @@ export function standingsOf(plan: JudgedPlan | null, drumId: string, nameOf: Nam
 
 /** An interval as it is, and what it should have been ("major third for a fourth"). */
 export function intervalWords({ gotName, askedName, offSemitones }: JudgedInterval): string {
-  return offSemitones > 0 && askedName ? `${gotName}, not ${article(askedName)}` : gotName
-}
-
-function article(name: string): string {
-  return /^(two|\d|same)/.test(name) ? name : `${/^[aeiou]/.test(name) ? 'an' : 'a'} ${name}`
+  return offSemitones > 0 && askedName ? `${gotName}, not ${withArticle(askedName)}` : gotName
 }

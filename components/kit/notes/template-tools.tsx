@@ -30,24 +30,26 @@ export function TemplateTools({ partyId, chosen, own, onChoose }: TemplateToolsP
   }
   if (open) {
     return (
-      <FormSheet>
-        <TemplateForm
-          key={`${open} ${chosen.id}`}
-          partyId={partyId}
-          template={open === 'change' ? mine : null}
-          start={open === 'change' && mine ? mine : copy}
-          onSaved={(saved) => {
-            setOpen(null)
-            onChoose(saved.id)
-            showToast(`${saved.name} is kept with the party’s templates.`)
-          }}
-          onClose={() => setOpen(null)}
-        />
-      </FormSheet>
+      <div className="mt-2 basis-full">
+        <FormSheet>
+          <TemplateForm
+            key={`${open} ${chosen.id}`}
+            partyId={partyId}
+            template={open === 'change' ? mine : null}
+            start={open === 'change' && mine ? mine : copy}
+            onSaved={(saved) => {
+              setOpen(null)
+              onChoose(saved.id)
+              showToast(`${saved.name} is kept with the party’s templates.`)
+            }}
+            onClose={() => setOpen(null)}
+          />
+        </FormSheet>
+      </div>
     )
   }
   return (
-    <div className="-ml-4 flex flex-wrap items-center">
+    <div className="-mx-4 flex flex-wrap items-center">
       <Button kind="quiet" onClick={() => setOpen('new')}>
         Make a template from {chosen.name}
       </Button>

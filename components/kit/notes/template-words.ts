@@ -1,5 +1,6 @@
 import type { NoteTemplate } from '@/lib/tuning/note-template'
-import { headRelationWords, intervalName } from '@/lib/tuning/interval-name'
+import { intervalName } from '@/lib/tuning/interval-name'
+import { withArticle } from './with-article'
 
 /** A number without needless noughts: "2.5", "2". */
 const plain = (value: number) => String(Number(value.toFixed(2)))
@@ -8,7 +9,7 @@ const plain = (value: number) => String(Number(value.toFixed(2)))
 export function stepsWords(steps: NoteTemplate['steps']): string {
   switch (steps.kind) {
     case 'per-inch':
-      return `a ${intervalName(steps.semitonesPerInch * 200)} for every 2 in of width`
+      return `${withArticle(intervalName(steps.semitonesPerInch * 200))} for every 2 in of width`
     case 'per-pair':
       return `from the smallest tom down: ${steps.semitones.map((each) => intervalName(each * 100)).join(', ')}, and on so`
     case 'equal-feel':
@@ -21,17 +22,12 @@ export function stepsWords(steps: NoteTemplate['steps']): string {
 /** Where a template has the kick, in words. */
 export function kickWords(kickBelowLowestTom: readonly number[]): string {
   if (kickBelowLowestTom.length === 0) return 'the kick in the middle of its own range'
-  return `the kick ${orList(kickBelowLowestTom.map((each) => intervalName(each * 100)))} under the lowest tom`
+  return `the kick ${orList(kickBelowLowestTom.map((each) => withArticle(intervalName(each * 100))))} under the lowest tom`
 }
 
 function orList(words: readonly string[]): string {
   const last = words.at(-1) ?? ''
   return words.length < 2 ? last : `${words.slice(0, -1).join(', ')} or ${last}`
-}
-
-/** A template in one sentence's worth of words. */
-export function templateWords({ steps, resonantCents, kickBelowLowestTom }: Omit<NoteTemplate, 'id' | 'name'>): string {
-  return `${stepsWords(steps)}; ${headRelationWords(resonantCents)}; ${kickWords(kickBelowLowestTom)}`
 }
 
 /** Semitones as they are typed, smallest tom first: "5, 5, 4". */

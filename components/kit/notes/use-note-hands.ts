@@ -53,8 +53,11 @@ export function useNoteHands(input: {
     setSaid(says)
   }
   const baseOf = (drum: DrumEntry) => inKit.find(({ id }) => id === drum.id) ?? drum
+  const setNote = (drum: DrumEntry, note: Note | null) =>
+    step(toWords(drum, note), (draft) => noted(draft, baseOf(drum), note))
+  const planSays = (name: string) => `${name === view.best?.name ? 'plan' : name} by ${view.title}`
   const keep = (choice: PlanChoice) =>
-    step(`${choice.name} by ${view.title}`, (draft) => ({ ...draft, ...view.draftOf(choice.plan) }))
+    step(planSays(choice.name), (draft) => ({ ...draft, ...view.draftOf(choice.plan) }))
 
   return {
     /** The last step in words, for screen readers. */
@@ -73,8 +76,12 @@ export function useNoteHands(input: {
         setSaid(says)
       },
       letGo: () => session.letGo(),
+      give: (drum: DrumEntry, note: Note) => {
+        choose(drum.id)
+        setNote(drum, note)
+      },
     },
-    set: (drum: DrumEntry, note: Note | null) => step(toWords(drum, note), (draft) => noted(draft, baseOf(drum), note)),
+    set: setNote,
     lock: (drum: DrumEntry, noteLocked: boolean) =>
       step(`${noteLocked ? 'lock' : 'unlock'} ${drum.name}`, (draft) =>
         withChange(draft, baseOf(drum), { noteLocked }),
@@ -95,7 +102,7 @@ export function useNoteHands(input: {
     },
     keepTried: () => {
       const { trying } = session.state()
-      if (trying) step(`${trying.name} by ${view.title}`, (draft) => draft)
+      if (trying) step(planSays(trying.name), (draft) => draft)
     },
     undo: () => {
       const last = session.state().history.undo.at(-1)

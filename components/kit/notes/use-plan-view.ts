@@ -81,7 +81,7 @@ export function usePlanView({ inKit, own, state, reader, chosenId, temperatureC 
       ? []
       : [{ plan: plans.best, change: null }, ...plans.alternatives].map(({ plan, change }, index) => ({
           id: plan.drums.map(({ drumId, note }) => `${drumId} ${pitchOf(note)}`).join(' '),
-          name: index === 0 ? 'the best plan' : `plan ${index + 1}`,
+          name: index === 0 ? 'the best' : `plan ${index + 1}`,
           plan,
           why: planWhy(plan, change, nameOf),
           current: notesToSet(mine, draftOf(plan)).length === 0,
