@@ -145,7 +145,7 @@ describe('a calibration', () => {
         const { uniform, normal } = seeded(1000 * count + seed)
         const dial = dials[seed % dials.length] ?? springDial
         const noise = [0.35, 0.6, 1][seed % 3] ?? 1
-        const offset = new Map(heads.map((head) => [head, Math.exp(0.03 * normal())]))
+        const offset = new Map(heads.map((head) => [head, Math.exp(0.037 * normal())]))
         const real = (head: (typeof heads)[number], tension: number) => tension / (offset.get(head) ?? 1)
         const known = heads.slice(0, 1 + (seed % 3))
         const pairs = Array.from({ length: count }, (_, i) => {

@@ -126,6 +126,12 @@ describe('two plies against one at the same reading', () => {
 })
 
 describe('the tension of a tap', () => {
+  it('is that of shape (1,1) on the shell: 12×8 in, 10 mil, 255.32 Hz at 2000 N/m; 12×5 in 253.93 (derived)', () => {
+    expect(tensionOfTapNPerM(tom12, 255.32, 20)).toBeCloseTo(2000, 0)
+    expect(tapOfTensionHz(tom12, 2000, null)).toBeCloseTo(255.32, 2)
+    expect(tapOfTensionHz(sampleHead(12, 5, [10]), 2000, 20)).toBeCloseTo(253.93, 2)
+  })
+
   it('comes back as the same tap', () => {
     fc.assert(
       fc.property(within, heads, fc.double({ min: -20, max: 45, noNaN: true }), (tension, head, temperatureC) => {

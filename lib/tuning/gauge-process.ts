@@ -25,11 +25,12 @@ export type GaugeProcess = {
 }
 
 /**
- * Scatter of film tension between heads, in ln T: 2 % of pitch between a real head and the tap model (Rossing 1982, taken as
- * the 90 % bound: 2.4 % of tension) with 1.5 % for the film's bending stiffness, which a gauge feels and the tap model leaves
- * out (derived: √(D/T) is 2 mm for 10 mil at 2000 N/m and 1.6 mm for 7+7 mil, against feet some 50 mm apart).
+ * Standard deviation between heads of what the pairs' tensions leave out, in ln T, root of the squares of: 2.4 %, the tap model
+ * against real heads (2 % of pitch, Rossing 1982, taken as the 90 % bound); 2.4 %, film 5 % off its nominal thickness (from
+ * memory, the same); 1.5 %, the film's bending stiffness, which a gauge feels and the tap model leaves out (derived: √(D/T) is
+ * 2 mm for 10 mil at 2000 N/m and 1.6 mm for 7+7 mil, against feet some 50 mm apart).
  */
-export const HEAD_SCATTER = 0.03
+export const HEAD_SCATTER = 0.037
 
 /** One hand's repeats, as shares of the span: 0.35 to 1 on a dial of 100 (common practice). Centre and spread of the prior. */
 const NOISE_SHARES = [0.0025, 0.004, 0.0065, 0.01, 0.016, 0.026, 0.042]

@@ -1,8 +1,8 @@
 import { AcousticsError } from '@/lib/acoustics/acoustics-error'
 import { ROOM_TEMPERATURE_C } from '@/lib/acoustics/air'
-import { idealModeHz, idealTensionNPerM } from '@/lib/acoustics/membrane-mode'
-import { openAirDensityKgPerM2 } from '@/lib/acoustics/open-air-head'
+import { lugTapHz, lugTapTensionNPerM } from '@/lib/acoustics/lug-tap'
 import { METRE_PER_INCH } from '@/lib/acoustics/require-quantity'
+import { loadedHeadKgPerM2 } from '@/lib/acoustics/two-head-drum'
 import { filmOf } from './drum-estimate'
 import { GaugeError } from './gauge-error'
 import { requireFigure, requireGaugeHead } from './gauge-profile'
@@ -16,25 +16,22 @@ export const MOST_TENSION_N_PER_M = 15_000
 const temperatureOf = (temperatureC: number | null) =>
   temperatureC === null ? ROOM_TEMPERATURE_C : requireFigure('temperatureC', temperatureC, -30, 60, '°C')
 
-function loadedHead(head: GaugeHead, temperatureC: number | null) {
+/** What moves in a tap with the other head damped, and the radius it moves within. */
+function tappedHead(head: GaugeHead, temperatureC: number | null) {
   requireGaugeHead(head)
   const diameterM = head.diameterIn * METRE_PER_INCH
-  const arealDensityKgPerM2 = openAirDensityKgPerM2(1, {
-    ...filmOf(head),
-    diameterM,
-    temperatureC: temperatureOf(temperatureC),
-  })
-  return { diameterM, arealDensityKgPerM2 }
+  const shell = { diameterM, depthM: head.depthIn * METRE_PER_INCH, temperatureC: temperatureOf(temperatureC) }
+  return { massKgPerM2: loadedHeadKgPerM2(1, filmOf(head), shell), radiusM: diameterM / 2 }
 }
 
 /**
- * Film tension, N/m, of a head whose tap near a lug sounds at `tapHz` with the other head damped: shape (1,1).
+ * Film tension, N/m, of a head whose tap near a lug sounds at `tapHz` with the other head damped: shape (1,1) on a closed shell.
  * @throws GaugeError `quantity`: a figure out of range, or a tap that no film on this drum can sound
  */
 export function tensionOfTapNPerM(head: GaugeHead, tapHz: number, temperatureC: number | null): number {
-  const loaded = loadedHead(head, temperatureC)
+  const { massKgPerM2, radiusM } = tappedHead(head, temperatureC)
   requireFigure('tapHz', tapHz, 20, 2000, 'Hz')
-  const tensionNPerM = idealTensionNPerM({ m: 1, n: 1 }, tapHz, loaded)
+  const tensionNPerM = lugTapTensionNPerM(tapHz, massKgPerM2, radiusM)
   if (tensionNPerM < LEAST_TENSION_N_PER_M || tensionNPerM > MOST_TENSION_N_PER_M)
     throw new GaugeError(
       'quantity',
@@ -49,9 +46,9 @@ export function tensionOfTapNPerM(head: GaugeHead, tapHz: number, temperatureC: 
  * @throws GaugeError `quantity`
  */
 export function tapOfTensionHz(head: GaugeHead, tensionNPerM: number, temperatureC: number | null): number {
-  const loaded = loadedHead(head, temperatureC)
+  const { massKgPerM2, radiusM } = tappedHead(head, temperatureC)
   try {
-    return idealModeHz({ m: 1, n: 1 }, { ...loaded, tensionNPerM })
+    return lugTapHz(tensionNPerM, massKgPerM2, radiusM)
   } catch (error) {
     if (error instanceof AcousticsError) throw new GaugeError('quantity', error.field, error.message)
     throw error
