@@ -13,7 +13,11 @@ function groupsOf(changes: SpecChanges): Group[] {
     { title: 'New lines', detail: 'asked for the first time', sentences: changes.added.map(({ words }) => words) },
     { title: 'Dropped lines', detail: 'no longer wanted', sentences: changes.dropped.map(({ words }) => words) },
     { title: 'Changed lines', detail: 'asked again', sentences: told(changes.changed) },
-    { title: 'Tuning', detail: 'the sheets change, nobody is asked again', sentences: told(changes.tuning) },
+    {
+      title: 'Tuning',
+      detail: 'the sheets change, nobody is asked again',
+      sentences: [...told(changes.tuning), ...changes.gauge],
+    },
     {
       title: 'Plot and patch',
       detail: 'the drawing and the channel list change',

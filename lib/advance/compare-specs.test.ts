@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { changeSentences, compareSpecs, specsAreSame } from './compare-specs'
 import type { FrozenEntry } from './frozen-kit'
 import type { RigSpec } from './revision-document'
-import { sampleSpec } from './sample-revision'
+import { sampleDrum, sampleSpec } from './sample-revision'
 
 const kit = (change: (entry: FrozenEntry) => FrozenEntry | null): RigSpec => ({
   ...sampleSpec,
@@ -39,6 +39,23 @@ describe('what changed between two states of a rig', () => {
     expect(changes.tuning).toEqual([
       { entryId: 'k-tom', name: 'Tom 12', differences: ['note D3 −5 cents → C♯3', 'tolerance 8 cents → 10 cents'] },
     ])
+  })
+
+  it('says what was learnt about a drum: its tap over its note, and how far a head goes', () => {
+    const learnt = tomWith({
+      measuredTapRatio: 1.72,
+      batter: {
+        ...sampleDrum({ id: '', name: '', position: 0 }, { role: 'tom', diameterIn: 12, depthIn: 8, lugs: 6 }).spec
+          .batter,
+        range: { slackNPerM: 650, chokedNPerM: 4200 },
+      },
+    })
+    expect(compareSpecs(sampleSpec, learnt)).toMatchObject({
+      changed: [],
+      tuning: [
+        { differences: ['measured tap over note not measured → 1.72', 'batter range as usual → 650 to 4200 N/m'] },
+      ],
+    })
   })
 
   it('tells a new reference pitch for every drum', () => {
@@ -81,6 +98,11 @@ describe('two states of a rig', () => {
         kit: [...sampleSpec.kit].reverse(),
       }),
     ).toBe(true)
+  })
+
+  it('are the same when one was written before heads had a range and drums a measured ratio', () => {
+    expect(specsAreSame(sampleSpec, tomWith({ measuredTapRatio: null }))).toBe(true)
+    expect(specsAreSame(tomWith({ measuredTapRatio: 1.7 }), tomWith({ measuredTapRatio: null }))).toBe(false)
   })
 
   it('differ by a note, a channel, the paper', () => {

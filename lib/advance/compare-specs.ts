@@ -1,10 +1,11 @@
 import { noteName } from '@/lib/acoustics/note-name'
 import { piecesInOrder } from '@/plots/model/document'
 import { canonicalJson } from './canonical-json'
-import type { FrozenDrum, FrozenEntry } from './frozen-kit'
+import type { FrozenDrum, FrozenEntry, FrozenHead } from './frozen-kit'
 import { entriesInOrder } from './frozen-kit'
 import { cymbalSizeWords, cymbalTypeWord, drumSizeWords, headWords, typeWords } from './kit-words'
 import type { Units } from './kit-words'
+import { gaugeChanges } from './gauge-changes'
 import type { LineContent } from './line-content'
 import { insteadOfWords, linesOfKit, lineWords } from './line-content'
 import { noteLocale } from './note-locale'
@@ -24,6 +25,8 @@ export interface SpecChanges {
   readonly changed: readonly ChangedLine[]
   /** Notes, gauge, tolerance and the like: they ask nobody anything again, but the sheets change. */
   readonly tuning: readonly ChangedLine[]
+  /** What became of the tour's gauge: the sheets' starting readings follow from it. */
+  readonly gauge: readonly string[]
   readonly plot: readonly string[]
   readonly channels: readonly string[]
 }
@@ -46,6 +49,7 @@ export function compareSpecs(before: RigSpec | null, after: RigSpec): SpecChange
       return [{ entryId, name: content.name, differences: lineDifferences(old, content, units) }]
     }),
     tuning: before ? tuningChanges(before, after) : [],
+    gauge: before ? gaugeChanges(before.gauge, after.gauge) : [],
     plot: before ? plotChanges(before, after) : [],
     channels: before ? channelChanges(before.channels, after.channels) : [],
   }
@@ -53,9 +57,19 @@ export function compareSpecs(before: RigSpec | null, after: RigSpec): SpecChange
 
 /** Whether two states of a rig ask, draw and tune exactly the same. How often the plot was touched does not count. */
 export function specsAreSame(a: RigSpec, b: RigSpec): boolean {
-  const meant = ({ party, tour, rig, kit, plot, channels }: RigSpec) =>
-    canonicalJson({ party, tour, rig, kit: entriesInOrder(kit), plot: plot.document, channels })
+  const meant = ({ party, tour, rig, kit, plot, channels, gauge }: RigSpec) =>
+    canonicalJson({ party, tour, rig, kit: entriesInOrder(kit).map(written), plot: plot.document, channels, gauge })
   return meant(a) === meant(b)
+}
+
+/** A drum from before heads had a range and drums a measured tap ratio says the same as one that has none. */
+function written(entry: FrozenEntry): FrozenEntry {
+  if (entry.kind !== 'drum') return entry
+  const { spec } = entry
+  const head = (of: FrozenHead) => ({ ...of, range: of.range ?? null })
+  const resonant = spec.resonant && head(spec.resonant)
+  const measuredTapRatio = spec.measuredTapRatio ?? null
+  return { ...entry, spec: { ...spec, batter: head(spec.batter), resonant, measuredTapRatio } }
 }
 
 /** All changes as one list of sentences, the most important first. */
@@ -65,6 +79,7 @@ export function changeSentences(changes: SpecChanges): string[] {
     ...changes.dropped.map(({ words }) => `No longer wanted: ${words}`),
     ...changes.changed.map(({ name, differences }) => `${name}: ${differences.join('; ')}`),
     ...changes.tuning.map(({ name, differences }) => `${name}, tuning: ${differences.join('; ')}`),
+    ...changes.gauge,
     ...changes.plot,
     ...changes.channels,
   ]
@@ -139,11 +154,22 @@ function tuningDifferences(before: FrozenDrum, after: FrozenDrum, specBefore: Ri
   say('note', noteWords(before, specAfter.party.locale), noteWords(after, specAfter.party.locale))
   say('A4', `${specBefore.party.referenceHz} Hz`, `${specAfter.party.referenceHz} Hz`)
   say('resonant head over batter', `${before.spec.headRelationCents} cents`, `${after.spec.headRelationCents} cents`)
+  say('measured tap over note', ratio(before), ratio(after))
   say('tolerance', `${before.spec.toleranceCents} cents`, `${after.spec.toleranceCents} cents`)
   say('batter gauge', gauge(before.spec.batter), gauge(after.spec.batter))
   say('resonant gauge', gauge(before.spec.resonant), gauge(after.spec.resonant))
+  say('batter range', rangeWords(before.spec.batter), rangeWords(after.spec.batter))
+  say('resonant range', rangeWords(before.spec.resonant), rangeWords(after.spec.resonant))
   say('muffling', before.spec.muffling || 'none', after.spec.muffling || 'none')
   return differences
+}
+
+function ratio({ spec }: FrozenDrum): string {
+  return spec.measuredTapRatio == null ? 'not measured' : String(spec.measuredTapRatio)
+}
+
+function rangeWords(head: FrozenHead | null): string {
+  return head?.range ? `${head.range.slackNPerM} to ${head.range.chokedNPerM} N/m` : 'as usual'
 }
 
 function noteWords({ spec: { note } }: FrozenDrum, locale: string): string {

@@ -118,6 +118,7 @@ function seenBy(audience: PackAudience, spec: RigSpec): RigSpec {
     kit: spec.kit.filter((entry) => entry.supply === 'rented').map(untuned),
     plot: { sequence: 0, document: { ...spec.plot.document, pieces: {} } },
     channels: [],
+    gauge: null,
   }
 }
 
@@ -132,10 +133,11 @@ function untuned(entry: FrozenEntry): FrozenEntry {
       note: null,
       noteLocked: false,
       headRelationCents: 0,
+      measuredTapRatio: null,
       toleranceCents: 0,
       muffling: '',
-      batter: { ...spec.batter, gauge: null },
-      resonant: spec.resonant && { ...spec.resonant, gauge: null },
+      batter: { ...spec.batter, gauge: null, range: null },
+      resonant: spec.resonant && { ...spec.resonant, gauge: null, range: null },
     },
   }
 }

@@ -1,5 +1,6 @@
 import { readDocument } from '@/plots/model/read-document'
 import type { PlotDocument } from '@/plots/model/document'
+import type { FrozenGauge } from './frozen-gauge'
 import type { FrozenEntry } from './frozen-kit'
 import type { Units } from './kit-words'
 import type { AskedLine } from './line-content'
@@ -37,6 +38,8 @@ export interface RigSpec {
   /** The rig's plot and the last command that is in it. */
   readonly plot: { readonly sequence: number; readonly document: PlotDocument }
   readonly channels: readonly FrozenChannel[]
+  /** The tour's gauge; null where none was chosen, and in revisions from before there were gauges. */
+  readonly gauge: FrozenGauge | null
 }
 
 export interface RevisionLine extends AskedLine {
@@ -69,9 +72,13 @@ export function upgradeRevisionDocument(stored: unknown): RevisionDocument {
   if (version > REVISION_SCHEMA_VERSION) {
     throw new TypeError(`This revision was issued by a newer release (document version ${version})`)
   }
-  // Version 1 is the only one so far; the plot inside has its own version and its own upgrade.
-  const document = stored as unknown as RevisionDocument
-  return { ...document, plot: { ...document.plot, document: readDocument(document.plot.document) } }
+  // Version 1 is the only one so far; what came to it later is filled in. The plot inside has its own version and upgrade.
+  const document = stored as unknown as Omit<RevisionDocument, 'gauge'> & Partial<Pick<RevisionDocument, 'gauge'>>
+  return {
+    ...document,
+    gauge: document.gauge ?? null,
+    plot: { ...document.plot, document: readDocument(document.plot.document) },
+  }
 }
 
 function isObject(value: unknown): value is Record<string, unknown> {

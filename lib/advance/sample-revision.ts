@@ -148,6 +148,7 @@ export const sampleSpec: RigSpec = {
   ).map(([pieceId, name], index) => ({
     ...{ id: `c-${index + 1}`, number: index + 1, name, pieceId, output: 'mic', stand: 'short', phantom: false },
   })),
+  gauge: null,
 }
 
 /** A revision of a spec, its lines named after their entries: what the use case does with real ids and hashes. */

@@ -30,6 +30,7 @@ export const specChangesSchema = z.object({
   dropped: z.array(wordsSchema).readonly(),
   changed: z.array(changedSchema).readonly(),
   tuning: z.array(changedSchema).readonly(),
+  gauge: z.array(z.string()).readonly(),
   plot: z.array(z.string()).readonly(),
   channels: z.array(z.string()).readonly(),
 })

@@ -50,8 +50,8 @@ export async function readKnownHeads(actor: Actor): Promise<KnownHead[]> {
   const known = new Map<string, KnownHead>()
   for (const { name, spec } of await listPartyDrums(db(), actor)) {
     const figures = drumEstimate(spec, { referenceHz: party.referenceHz })
-    const batterTap = figures?.batter.estimate?.tapHz ?? null
-    const resonantTap = figures?.resonant?.estimate?.tapHz ?? null
+    const batterTap = figures?.tuning?.batter.tapHz.value ?? null
+    const resonantTap = figures?.tuning?.resonant?.tapHz.value ?? null
     for (const head of [
       knownHead(name, spec, 'batter', spec.batter, batterTap),
       spec.resonant && knownHead(name, spec, 'resonant', spec.resonant, resonantTap),

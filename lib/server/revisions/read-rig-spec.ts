@@ -4,6 +4,7 @@ import { findRigPlot } from '@/db/queries/plot'
 import { findRigHead, listSpecEntries } from '@/db/queries/revision'
 import type { FrozenEntry } from '@/lib/advance/frozen-kit'
 import type { RigSpec } from '@/lib/advance/revision-document'
+import { loadToursGauge } from '@/lib/server/gauges/read-gauges'
 import { loadPlot } from '@/lib/server/plots/load-plot'
 import { emptyDocument } from '@/plots/model/document'
 
@@ -14,6 +15,7 @@ export async function readRigSpec(db: Db, scope: Scope, rigId: string): Promise<
   const entries = await listSpecEntries(db, scope, rigId)
   const channels = await listChannels(db, scope, rigId)
   const plot = await findRigPlot(db, scope, rigId)
+  const gauge = await loadToursGauge(db, scope)
   const { sequence, document } = plot ? await loadPlot(db, scope, plot.id) : { sequence: 0, document: emptyDocument }
   return {
     ...head,
@@ -23,5 +25,6 @@ export async function readRigSpec(db: Db, scope: Scope, rigId: string): Promise<
     channels: channels.map(({ id, number, name, pieceId, output, stand, phantom }) => ({
       ...{ id, number, name, pieceId, output, stand, phantom },
     })),
+    gauge,
   }
 }

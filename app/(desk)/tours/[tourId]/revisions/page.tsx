@@ -39,7 +39,10 @@ export default async function RevisionsPage({ params, searchParams }: PageProps<
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-16 sm:px-6">
       <RefreshOnLive
-        topics={[`revision:${next.rigId}`, `kit:${next.rigId}`, `plot:${next.rigId}`, `patch:${next.rigId}`]}
+        topics={[
+          ...[`revision:${next.rigId}`, `kit:${next.rigId}`, `plot:${next.rigId}`, `patch:${next.rigId}`],
+          `gauge:${actor.partyId}`,
+        ]}
       />
       <h1 className="mb-6 text-4xl">
         Revisions <span className="text-soft">{next.rigName}</span>
