@@ -3,6 +3,7 @@ import { findReadings } from '@/db/queries/bench'
 import { dateAfter } from '@/lib/staging/calendar'
 import { makeAdvance } from './demo-answers'
 import { lastDemoReadingId, makeBench } from './demo-bench'
+import { makeGauge } from './demo-gauge'
 import { demoToday } from './demo-run'
 import { makeSpec } from './demo-spec'
 import { demoPartyId, makeTeam } from './demo-team'
@@ -18,6 +19,7 @@ async function main(): Promise<string> {
   const today = process.env['HOOPWRIGHT_TODAY'] || new Date().toISOString().slice(0, 10)
   const team = await makeTeam()
   await makeTour(team, today)
+  await makeGauge(team)
   await makeSpec(team)
   await makeAdvance(team, today)
   await makeBench(team, today, dateAfter(today, -demoToday))

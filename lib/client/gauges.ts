@@ -57,6 +57,13 @@ export function useChooseToursGauge(partyId: string) {
   )
 }
 
+/** Puts a gauge back that was taken away. */
+export function useRestoreGauge(partyId: string) {
+  return useGaugeChange(partyId, ({ gaugeId, version }: { gaugeId: string; version: number }) =>
+    gauges.restore(gaugeId, version),
+  )
+}
+
 /** Strikes a pair, or lets it count again. */
 export function useStrikeGaugePair(partyId: string) {
   return useGaugeChange(partyId, ({ pairId, struck }: { pairId: string; struck: boolean }) =>

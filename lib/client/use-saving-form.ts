@@ -10,7 +10,8 @@ import { AppError } from '@/lib/errors'
 
 export interface SavingFormOptions<Fields extends FieldValues, Row> {
   schema: z.ZodType<Fields, Fields>
-  start: Fields
+  /** What stands in the fields at first; a number that only its reader knows is left out. */
+  start: DefaultValues<Fields>
   /** The version that the form was opened on; null where it makes something new. */
   version: number | null
   /** The key under which the request carries the fields: the route names them with it. */
@@ -51,7 +52,7 @@ export function useSavingForm<Fields extends FieldValues, Row>(
   const [filled, setFilled] = useState(0)
   const form = useForm<Fields, unknown, Fields>({
     resolver: zodResolver(schema),
-    defaultValues: start as DefaultValues<Fields>,
+    defaultValues: start,
   })
   const sending = useMutation({ mutationFn: save })
 

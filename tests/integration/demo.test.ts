@@ -44,6 +44,8 @@ const seen: Record<string, string> = {
           (select count(*)::int from hire_show x where x.hire_id = h.id) shows
           from hire h join supplier su on su.id = h.supplier_id order by su.name`,
   kit: `select id, name, kind, supply, count, spec, position from kit_entry order by id`,
+  gauges: `select g.id, g.name, g.tours_gauge, p.id pair, p.reading, p.tap_hz, p.diameter_in, p.struck_at is not null struck
+           from gauge g join gauge_pair p on p.gauge_id = g.id order by p.id`,
   plots: `select plot_id is not null drawn, sequence, command from plot_command order by command->>'clientId'`,
   channels: `select rig_id, number, name, piece_id, output, phantom from channel order by rig_id, number`,
   // A line's id is made when it is first issued; what it says is not.
@@ -79,6 +81,9 @@ test('the demo holds what it promises', async () => {
   expect(await count('supplier')).toBe(2)
   expect(await count('hire')).toBe(2)
   expect(await count('person')).toBe(4)
+  expect(await count('gauge where tours_gauge')).toBe(1)
+  expect(await count('gauge_pair where struck_at is null')).toBe(11)
+  expect(await count('gauge_pair where struck_at is not null')).toBe(1)
 })
 
 test('making the demo again changes nothing', async () => {

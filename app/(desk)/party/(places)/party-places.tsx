@@ -9,6 +9,7 @@ export function PartyPlaces({ seesAudit }: { seesAudit: boolean }) {
   const places = [
     { href: '/party', label: 'Members' },
     { href: '/party/settings', label: 'Settings' },
+    { href: '/party/gauges', label: 'Gauges' },
     ...(seesAudit ? [{ href: '/party/audit', label: 'Audit trail' }] : []),
     { href: '/party/you', label: 'You' },
   ]
@@ -16,7 +17,7 @@ export function PartyPlaces({ seesAudit }: { seesAudit: boolean }) {
     <div className="border-b-2 border-ink px-4 sm:px-6 print:hidden">
       <NavLinks
         label="Party"
-        links={places.map((place) => ({ ...place, href: place.href as Route, current: path === place.href }))}
+        links={places.map((place) => ({ ...place, href: place.href as Route, current: path === place.href || path.startsWith(`${place.href}/`) && place.href !== '/party' }))}
       />
     </div>
   )
