@@ -1,6 +1,6 @@
 import type { DampedPartial } from './damped-partial'
 import type { FoundPartial } from './find-partials'
-import { WIDEST_PAIR_HZ } from './pitch-models'
+import { WIDEST_PAIR_HZ } from './pair-of-partials'
 
 /** Two pitches this near in height cannot be told apart by strength, dB. */
 const EQUAL_DB = 1.5

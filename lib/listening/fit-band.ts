@@ -33,6 +33,7 @@ type Solved = {
   columns: Float64Array[]
 }
 
+const still: Complex = { re: 0, im: 0 }
 const MOST_ROUNDS = 30
 const MOST_REFUSED = 6
 /** A round that gains less than this in twice the log likelihood is the last. */
@@ -92,9 +93,14 @@ export class BandFitter {
     return this.amplitudesAt(kind, parameters, 0)?.residual ?? null
   }
 
+  /** What is left in each bin of the band, real and imaginary parts in turn; null when the voices cannot be told apart. */
+  restAt(kind: ModelKind, parameters: Float64Array): Float64Array | null {
+    return this.amplitudesAt(kind, parameters, 0)?.left ?? null
+  }
+
   /**
    * The best fit of a model.
-   * @param start first guess of its free parameters
+   * @param start first guess of its free parameters, then of those of its neighbours
    * @returns null when the voices cannot be told apart
    */
   fit(kind: ModelKind, start: Float64Array): BandFit | null {
@@ -130,7 +136,9 @@ export class BandFitter {
     const hold = (at: number, least: number, most: number) => {
       kept[at] = Math.min(most, Math.max(least, kept[at] ?? 0))
     }
-    for (const at of kind === 'two' ? [0, 2] : [0]) {
+    const own = parametersOf[kind]
+    const neighbours = Array.from({ length: (kept.length - own) / 2 }, (_, i) => own + 2 * i)
+    for (const at of kind === 'two' ? [0, 2, ...neighbours] : [0, ...neighbours]) {
       hold(at, 1 / (20 * this.spectrum.count), MOST_DECAY)
       hold(at + 1, this.leastAngle, this.mostAngle)
     }
@@ -174,7 +182,7 @@ export class BandFitter {
 
   /** The best amplitudes at these parameters, and the derivatives there. */
   private solve(kind: ModelKind, parameters: Float64Array): Solved | null {
-    const free = parametersOf[kind]
+    const free = parameters.length
     const solved = this.amplitudesAt(kind, parameters, free)
     if (solved === null) return null
     const { shapes, linear, left, residual, amplitudes } = solved
@@ -252,11 +260,12 @@ export class BandFitter {
     const ci = sign * c.im
     const { turn, turnAll } = this
     const shape = into[0]
-    const derivatives = into.slice(1).map((column, f) => {
-      const ds = toS[f] ?? { re: 0, im: 0 }
-      const dc = toC[f] ?? { re: 0, im: 0 }
+    const derivatives = into.slice(1).flatMap((column, f) => {
+      const ds = toS[f] ?? still
+      const dc = toC[f] ?? still
+      if (ds.re === 0 && ds.im === 0 && dc.re === 0 && dc.im === 0) return []
       const dsi = sign * ds.im
-      return { column, kr: cr * ds.re - ci * dsi, ki: cr * dsi + ci * ds.re, cr: dc.re, ci: sign * dc.im }
+      return [{ column, kr: cr * ds.re - ci * dsi, ki: cr * dsi + ci * ds.re, cr: dc.re, ci: sign * dc.im }]
     })
     for (let i = 0; i < 2 * this.bins; i += 2) {
       const wr = turn[i] ?? 0

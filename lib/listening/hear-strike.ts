@@ -1,13 +1,10 @@
 import { chooseTapPartial } from './choose-tap-partial'
 import { clippedUntil } from './clipped-until'
-import type { DampedPartial } from './damped-partial'
-import { addPartial } from './damped-partial'
-import type { FoundPartial } from './find-partials'
-import { findPartials, fitOne, HIGHEST_HZ } from './find-partials'
+import { findPartials } from './find-partials'
 import { glidingPitch } from './gliding-pitch'
 import { LOW_RATE_STEP, lowRate } from './low-rate'
 import type { PitchFits } from './pitch-models'
-import { fitPitchModels, WIDEST_PAIR_HZ } from './pitch-models'
+import { fitPitchAmongNeighbours } from './pitch-among-neighbours'
 import type { FittedPitch } from './pitch-of-fit'
 import { pitchOfFit, T60_PER_TAU } from './pitch-of-fit'
 import { hasSecondStrike } from './second-strike'
@@ -76,8 +73,7 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const from = Math.max(unclippedFrom, strikeAt + skip)
   const ring = Math.round(Math.max(SHORTEST_WINDOW_S, RING_TAUS * tauS) * sampleRateHz)
   const until = Math.min(end, from + ring)
-  const { spectrum, companion } = alone(spectrumFrom(samples, from, until), found, chosen, rateHz)
-  const fits = fitPitchModels(spectrum, rateHz, chosen, companion)
+  const fits = fitPitchAmongNeighbours(spectrumFrom(samples, from, until), rateHz, found, chosen)
   if (fits === null) return 'unclear'
   const unexplained = fits.best.residual / fits.best.energy
   if (unexplained > GLIDE_UNEXPLAINED) {
@@ -103,30 +99,6 @@ function spectrumFrom(samples: Float32Array, from: number, to: number): Spectrum
   let size = 1024
   while (size < low.length) size *= 2
   return spectrumOf(low, size)
-}
-
-/** The spectrum with everything but the chosen partial and its near companions taken out. */
-function alone(
-  spectrum: Spectrum,
-  found: FoundPartial[],
-  chosen: FoundPartial,
-  rateHz: number,
-): { spectrum: Spectrum; companion: DampedPartial | null } {
-  const binHz = rateHz / spectrum.size
-  const reach = Math.ceil((HIGHEST_HZ + 100) / binHz)
-  const isNear = (partial: DampedPartial) =>
-    (Math.abs(partial.angle - chosen.angle) * rateHz) / (2 * Math.PI) <= WIDEST_PAIR_HZ
-  const rest: Spectrum = { ...spectrum, re: Float64Array.from(spectrum.re), im: Float64Array.from(spectrum.im) }
-  const kept: DampedPartial[] = []
-  // Strongest first, each with those before it taken out, so that none is fitted through another's skirt.
-  for (const partial of found) {
-    const fit = fitOne(rest, partial, binHz)
-    if (fit === null) continue
-    addPartial(rest, fit, -1, reach)
-    if (isNear(partial)) kept.push(fit)
-  }
-  for (const fit of kept) addPartial(rest, fit, 1, reach)
-  return { spectrum: rest, companion: found.find((partial) => partial !== chosen && isNear(partial)) ?? null }
 }
 
 function gliding({ samples, sampleRateHz, strikeAt, quiet }: StrikeToHear, end: number): HeardStrike | null {

@@ -18,8 +18,22 @@ const one: Complex = { re: 1, im: 0 }
  * tell their decays apart; `glide` [d, w, γ] one whose pitch falls with its energy, w + 2dγ·e^{−2dn}, the film's
  * stretch going by amplitude squared: phase γ·(1 − e^{−2dn}), so that the voice is
  * e^{iγ}·Σ_m (−iγ)^m/m!·e^{(−(1 + 2m)d + iw)n}, cut off where the terms are below 10⁻⁶.
+ * Parameters past the model's own are neighbours, [d, w] of one damped sinusoid each.
  */
 export function voicesOf(kind: ModelKind, p: Float64Array): Term[][] {
+  return [...ownVoices(kind, p), ...neighbours(kind, p)]
+}
+
+function neighbours(kind: ModelKind, p: Float64Array): Term[][] {
+  const own = parametersOf[kind]
+  return Array.from({ length: (p.length - own) / 2 }, (_, i) => {
+    const first = own + 2 * i
+    const before = Array.from({ length: first }, () => zero)
+    return [simple(p[first] ?? 0, p[first + 1] ?? 0, [...before, decayTo, angleTo])]
+  })
+}
+
+function ownVoices(kind: ModelKind, p: Float64Array): Term[][] {
   const at = (i: number) => p[i] ?? 0
   switch (kind) {
     case 'one':

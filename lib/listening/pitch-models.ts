@@ -1,11 +1,10 @@
 import { bandRound } from './find-partials'
 import type { BandFit } from './fit-band'
 import { BandFitter } from './fit-band'
+import { isPair } from './pair-of-partials'
 import type { ModelKind } from './partial-shape'
 import type { Spectrum } from './spectrum'
 
-/** How far apart two partials may lie and still be one mode's pair, Hz. */
-export const WIDEST_PAIR_HZ = 14
 /** Half the width of the band about the pitch, Hz, at least: it holds the pair. */
 const BAND_HZ = 20
 /** Splits that are tried, Hz. */
@@ -19,7 +18,7 @@ const BELIEVED_PAIR = 20
 /** Decays of a pair's partials are told apart when that gains this much. */
 const BELIEVED_DECAYS = 8
 
-type Guess = { decay: number; angle: number }
+export type Guess = { decay: number; angle: number }
 
 export type PitchFits = {
   one: BandFit
@@ -32,7 +31,7 @@ export type PitchFits = {
 /**
  * One damped sinusoid, one whose pitch glides, and a close pair, fitted to the band round the tap's pitch. A richer model is believed
  * when it gains more, freedom·ln(residual ratio), than chance gives.
- * @param companion the strongest other partial within {@link WIDEST_PAIR_HZ}
+ * @param companion the strongest other partial that could be its pair
  * @returns null when not even one holds
  */
 export function fitPitchModels(
@@ -41,15 +40,18 @@ export function fitPitchModels(
   target: Guess,
   companion: Guess | null,
 ): PitchFits | null {
-  const fitter = new BandFitter(spectrum, bandRound(target, spectrum.size, rateHz / spectrum.size, BAND_HZ))
+  const band = bandRound(target, spectrum.size, rateHz / spectrum.size, BAND_HZ)
+  const fitter = new BandFitter(spectrum, band)
   const one = fitter.fit('one', Float64Array.of(target.decay, target.angle))
   if (one === null) return null
   const gain = (residual: number) => one.freedom * Math.log(one.residual / residual)
   if (one.freedom < LEAST_FREEDOM) return { one, glide: null, pair: null, best: one }
 
   const glide = tryStarts(fitter, 'glide', glideStarts(one), gain)
-  let pair = tryStarts(fitter, 'envelope', envelopeStarts(one, rateHz), gain)
-  const apart = tryStarts(fitter, 'two', twoStarts(one, pair, target, companion, rateHz), gain)
+  const believable = (fit: BandFit | null) => (fit !== null && isPair(fit, one, rateHz) ? fit : null)
+  const left = (2 * Math.PI * (band.first + highestRest(fitter, one))) / spectrum.size
+  let pair = believable(tryStarts(fitter, 'envelope', envelopeStarts(one, left, rateHz), gain))
+  const apart = believable(tryStarts(fitter, 'two', twoStarts(one, left, pair, companion), gain))
   if (apart !== null && (pair === null || gain(apart.residual) - gain(pair.residual) > BELIEVED_DECAYS)) pair = apart
 
   let best = one
@@ -84,28 +86,37 @@ function glideStarts({ parameters: [d = 0, w = 0] }: BandFit): Float64Array[] {
   })
 }
 
-function envelopeStarts({ parameters: [d = 0, w = 0] }: BandFit, rateHz: number): Float64Array[] {
-  return SPLITS_HZ.flatMap((hz) => {
+/** Bin of the band, counted from its first, where the one partial leaves most. */
+function highestRest(fitter: BandFitter, one: BandFit): number {
+  const rest = fitter.restAt('one', one.parameters) ?? new Float64Array(0)
+  let [best, most] = [0, 0]
+  for (let i = 0; i < rest.length; i += 2) {
+    const power = (rest[i] ?? 0) ** 2 + (rest[i + 1] ?? 0) ** 2
+    if (power > most) [best, most] = [i / 2, power]
+  }
+  return best
+}
+
+/** Splits about the one partial, and that between it and the angle where it leaves most. */
+function envelopeStarts({ parameters: [d = 0, w = 0] }: BandFit, left: number, rateHz: number): Float64Array[] {
+  const even = SPLITS_HZ.flatMap((hz) => {
     const split = (2 * Math.PI * hz) / rateHz
     return [-0.4, 0, 0.4].map((off) => Float64Array.of(0.9 * d, w + off * split, split))
   })
+  return [...even, Float64Array.of(d, (w + left) / 2, w - left)]
 }
 
 function twoStarts(
   { parameters: [d = 0, w = 0] }: BandFit,
+  left: number,
   pair: BandFit | null,
-  target: Guess,
   companion: Guess | null,
-  rateHz: number,
 ): Float64Array[] {
-  const starts: Float64Array[] = []
+  const starts = [Float64Array.of(d, w, d, left)]
   if (pair !== null) {
     const [decay = d, middle = w, split = 0] = pair.parameters
     starts.push(Float64Array.of(decay, middle + split / 2, decay, middle - split / 2))
   }
-  if (companion !== null) {
-    const apart = Math.abs(companion.angle - target.angle) > (2 * Math.PI * 0.2) / rateHz
-    if (apart) starts.push(Float64Array.of(target.decay, target.angle, companion.decay, companion.angle))
-  }
+  if (companion !== null) starts.push(Float64Array.of(d, w, companion.decay, companion.angle))
   return starts
 }

@@ -79,10 +79,9 @@ export function pitchOfFit(fit: BandFit, rateHz: number, sinceStrikeS: number, w
         [2, -hz / 2],
       ]
     : [[3, hz]]
-  const heard = [
-    { ...first, slope: firstSlope, decayIndex: 0 },
-    { ...second, slope: secondSlope, decayIndex: shared ? 0 : 2 },
-  ].sort((x, y) => y.amplitude - x.amplitude)
+  const one = { ...first, slope: firstSlope, decayIndex: 0 }
+  const other = { ...second, slope: secondSlope, decayIndex: shared ? 0 : 2 }
+  const heard = first.amplitude >= second.amplitude ? ([one, other] as const) : ([other, one] as const)
   const [strong, weak] = heard
   const partials = heard.map(({ frequencyHz, t60S, amplitude, slope }) => ({
     frequencyHz,
@@ -90,17 +89,6 @@ export function pitchOfFit(fit: BandFit, rateHz: number, sinceStrikeS: number, w
     amplitude,
     t60S,
   }))
-  if (strong === undefined || weak === undefined || weak.amplitude < FAINTEST_PARTNER * strong.amplitude) {
-    return {
-      pitchHz: strong?.frequencyHz ?? 0,
-      standardErrorHz: partials[0]?.standardErrorHz ?? Infinity,
-      t60S: strong?.t60S ?? 0,
-      t60StandardErrorS: t60Error(strong?.decayIndex ?? 0),
-      partials: partials.slice(0, 1),
-      warble: null,
-    }
-  }
-
   // Mean weighted by amplitude at the strike; its slopes to angles and to each amplitude's two parts.
   const sum = first.amplitude + second.amplitude
   const pitchHz = (first.amplitude * first.frequencyHz + second.amplitude * second.frequencyHz) / sum
@@ -126,12 +114,15 @@ export function pitchOfFit(fit: BandFit, rateHz: number, sinceStrikeS: number, w
     t60S: strong.t60S,
     t60StandardErrorS: t60Error(strong.decayIndex),
     partials,
-    warble: {
-      differenceHz,
-      lowHz: Math.max(0, differenceHz - 1.96 * differenceError),
-      highHz: differenceHz + 1.96 * differenceError,
-      from: differenceHz * windowS < 2 ? 'envelope' : 'partials',
-    },
+    warble:
+      weak.amplitude < FAINTEST_PARTNER * strong.amplitude
+        ? null
+        : {
+            differenceHz,
+            lowHz: Math.max(0, differenceHz - 1.96 * differenceError),
+            highHz: differenceHz + 1.96 * differenceError,
+            from: differenceHz * windowS < 2 ? 'envelope' : 'partials',
+          },
   }
 }
 
