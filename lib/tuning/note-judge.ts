@@ -57,16 +57,19 @@ export function judgeKit(kit: PlanKit, notes: DrumNotes, origin: NoteOrigin): Ju
 type SoundingDrum = { drum: PlanDrum; note: Note; pitch: number }
 
 function judgeDrum({ drum, note, pitch }: SoundingDrum, kit: PlanKit, origin: NoteOrigin): JudgedDrum {
-  const { low, middleLow, middleHigh, high } = drum.range
-  const [offMiddle, outOfRange] = [outside(pitch, middleLow, middleHigh), outside(pitch, low, high)]
   return {
-    ...{ drumId: drum.id, note, origin: originOf(drum, pitch, kit) ?? origin, zone: zoneOf(offMiddle, outOfRange) },
-    ...{ centsOffMiddle: offMiddle * 100, centsOutOfRange: outOfRange * 100 },
+    ...{ drumId: drum.id, note, origin: originOf(drum, pitch, kit) ?? origin, ...placeIn(drum, pitch) },
     cost: {
       offMiddle: costOf(offMiddleCost(pitch, drum.range)),
       outOfRange: costOf(outOfRangeCost(pitch, drum.range)),
     },
   }
+}
+
+/** Where a pitch stands in a drum's range. */
+function placeIn({ range: { low, middleLow, middleHigh, high } }: PlanDrum, pitch: number) {
+  const [offMiddle, outOfRange] = [outside(pitch, middleLow, middleHigh), outside(pitch, low, high)]
+  return { zone: zoneOf(offMiddle, outOfRange), centsOffMiddle: offMiddle * 100, centsOutOfRange: outOfRange * 100 }
 }
 
 function originOf({ id, lockedNote }: PlanDrum, pitch: number, { anchorId, fixed }: PlanKit): NoteOrigin | null {
@@ -113,6 +116,7 @@ function judgeInterval(
     ...{ kind, upperId: upper.drum.id, lowerId: lower.drum.id, asked, askedExact },
     ...{ askedName: nearest === undefined ? null : intervalName(nearest * 100), got, gotName: intervalName(got * 100) },
     offSemitones: offAsked(got, asked),
+    ifAsked: nearest === undefined ? null : placeIn(lower.drum, upper.pitch - nearest),
     cost: { interval: costOf(intervalCost(got, asked)), order: costOf(orderCost(got)) },
   }
 }

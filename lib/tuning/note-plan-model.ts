@@ -67,6 +67,8 @@ export type JudgedInterval = {
   gotName: string
   /** How far `got` lies from the nearest of `asked`, semitones, never negative; 0 when nothing is asked. */
   offSemitones: number
+  /** Where the lower drum would stand if the nearest of `asked` were given from the upper drum as it is; null when nothing is asked. */
+  ifAsked: Pick<JudgedDrum, 'zone' | 'centsOffMiddle' | 'centsOutOfRange'> | null
   cost: { interval: number; order: number }
 }
 

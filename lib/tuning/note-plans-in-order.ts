@@ -128,9 +128,16 @@ function besideSnares(kit: PlanKit, graph: TomGraph): (snarePitches: readonly nu
     return keys
   }
   return (snarePitches) => {
-    const all = snarePitches.map(added)
-    return own.map((keys, tom) => keys.map((key, j) => all.reduce((sum, more) => sum + (more[tom]?.[j] ?? 0), key)))
+    const sums = own.map((keys) => keys.slice())
+    for (const pitch of snarePitches) {
+      added(pitch).forEach((more, tom) => more.forEach((key, j) => addTo(sums[tom], j, key)))
+    }
+    return sums
   }
+}
+
+function addTo(sums: Float64Array | undefined, index: number, key: number) {
+  if (sums) sums[index] = (sums[index] ?? 0) + key
 }
 
 function besideTom(snarePitch: number, tomPitch: number, { apartSemitones }: PlanKit): number {

@@ -12,6 +12,8 @@ export type TomLayer = {
   lowestAt: readonly number[]
   /** By choice of the tom before and choice of this one: the key of the step between them. Empty for the first tom. */
   stepKeys: Float64Array
+  /** By place of the tom before: where its row of `stepKeys` starts. */
+  stepRow: Int32Array
   /** By place of the tom before and choice of this one: the place it leads to, −1 for none. Empty for the first tom. */
   placesFrom: Int32Array
 }
@@ -50,7 +52,7 @@ function canFallInOrder(choices: readonly (readonly NoteChoice[])[]): boolean {
 function firstLayer(choices: readonly NoteChoice[]): TomLayer {
   return {
     ...{ choices, choiceAt: choices.map((_, index) => index), lowestAt: choices.map(({ pitch }) => pitch) },
-    ...{ stepKeys: new Float64Array(), placesFrom: new Int32Array() },
+    ...{ stepKeys: new Float64Array(), stepRow: new Int32Array(), placesFrom: new Int32Array() },
   }
 }
 
@@ -74,7 +76,8 @@ function layerAfter(
       placesFrom[at] = orderHolds && pitch > abovePitch ? -1 : placeOf(j, Math.min(lowest, pitch))
     })
   })
-  return { choices, choiceAt, lowestAt, stepKeys, placesFrom }
+  const stepRow = Int32Array.from(before.choiceAt, (choice) => choice * choices.length)
+  return { choices, choiceAt, lowestAt, stepKeys, stepRow, placesFrom }
 
   function placeOf(choice: number, lowest: number): number {
     const there = known[choice]?.get(lowest)

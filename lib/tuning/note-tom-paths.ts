@@ -60,82 +60,90 @@ function pathOrder(a: RankedPath, b: RankedPath): number {
 /** A way on to a tom's note. `after`: the smallest key from there to the end. */
 type Way = { choice: NoteChoice; place: number; key: number; after: number }
 
-function wayOrder(a: Way, b: Way): number {
-  return a.key + a.after - b.key - b.after || a.choice.pitch - b.choice.pitch
-}
-
 /** The way on to a tom from a place of the tom before (none for the first tom) by its rank, 0 the best; undefined past the last. */
 function waysThrough(graph: TomGraph, keys: PathKeys) {
   const after = smallestKeysAfter(graph, keys)
-  const known = graph.map(() => new Map<number, { ways: Way[]; best: Way | undefined; sorted: boolean }>())
+  const sorted = graph.map(() => new Map<number, Way[]>())
   return (tom: number, placeBefore = 0, rank: number): Way | undefined => {
-    let there = known[tom]?.get(placeBefore)
-    if (!there) {
-      const layer = graph[tom]
-      const ways = layer ? waysOnTo(layer, placeBefore, graph[tom - 1], keys.ofChoice[tom], after[tom]) : []
-      const best = ways.reduce<Way | undefined>((so, way) => (so && wayOrder(so, way) <= 0 ? so : way), undefined)
-      there = { ways, best, sorted: false }
-      known[tom]?.set(placeBefore, there)
-    }
-    if (rank === 0) return there.best
-    if (!there.sorted) there.ways.sort(wayOrder)
-    there.sorted = true
-    return there.ways[rank]
+    const [layer, ownKeys, keysAfter] = [graph[tom], keys.ofChoice[tom], after[tom]]
+    if (!layer || !ownKeys || !keysAfter) return undefined
+    const there = sorted[tom]?.get(placeBefore)
+    if (there) return there[rank]
+    if (rank === 0) return bestWay(layer, placeBefore, ownKeys, keysAfter)
+    const ways = layer.choices
+      .flatMap((_, index) => wayTo(layer, placeBefore, index, ownKeys, keysAfter) ?? [])
+      .sort((a, b) => a.key + a.after - b.key - b.after || a.choice.pitch - b.choice.pitch)
+    sorted[tom]?.set(placeBefore, ways)
+    return ways[rank]
   }
 }
 
-function waysOnTo(
-  layer: TomLayer,
+/** Of equal ones the lowest, as choices go from the lowest up. */
+function bestWay(layer: TomLayer, placeBefore: number, ownKeys: Float64Array, keysAfter: Float64Array) {
+  const { choices, placesFrom, stepKeys, stepRow } = layer
+  const [first, row, placeRow] = [stepRow.length === 0, stepRow[placeBefore] ?? 0, placeBefore * choices.length]
+  let [best, bestIndex] = [Infinity, -1]
+  for (let index = 0; index < choices.length; index++) {
+    const place = first ? index : (placesFrom[placeRow + index] ?? -1)
+    if (place < 0) continue
+    const key = (ownKeys[index] ?? 0) + (first ? 0 : (stepKeys[row + index] ?? 0)) + (keysAfter[place] ?? Infinity)
+    if (key < best) [best, bestIndex] = [key, index]
+  }
+  return wayTo(layer, placeBefore, bestIndex, ownKeys, keysAfter)
+}
+
+function wayTo(
+  { choices, placesFrom, stepKeys, stepRow }: TomLayer,
   placeBefore: number,
-  before: TomLayer | undefined,
-  ownKeys: Float64Array | undefined,
-  after: Float64Array | undefined,
-): Way[] {
-  const { choices, placesFrom, stepKeys } = layer
-  const firstStep = (before?.choiceAt[placeBefore] ?? 0) * choices.length
-  const ways: Way[] = []
-  choices.forEach((choice, j) => {
-    const place = before ? (placesFrom[placeBefore * choices.length + j] ?? -1) : j
-    const keyAfter = place < 0 ? Infinity : (after?.[place] ?? Infinity)
-    if (keyAfter === Infinity) return
-    const key = (ownKeys?.[j] ?? 0) + (before ? (stepKeys[firstStep + j] ?? 0) : 0)
-    ways.push({ choice, place, key, after: keyAfter })
-  })
-  return ways
+  index: number,
+  ownKeys: Float64Array,
+  keysAfter: Float64Array,
+): Way | undefined {
+  const first = stepRow.length === 0
+  const place = first ? index : (placesFrom[placeBefore * choices.length + index] ?? -1)
+  const [choice, after] = [choices[index], keysAfter[place] ?? Infinity]
+  if (!choice || after === Infinity) return undefined
+  const step = first ? 0 : (stepKeys[(stepRow[placeBefore] ?? 0) + index] ?? 0)
+  return { choice, place, key: (ownKeys[index] ?? 0) + step, after }
 }
 
 /** For each place of each tom the smallest key of all that comes after it. */
 function smallestKeysAfter(graph: TomGraph, { ofChoice, ofEnd }: PathKeys): Float64Array[] {
-  const after = graph.map(({ lowestAt }) => new Float64Array(lowestAt.length).fill(Infinity))
+  const after: Float64Array[] = []
   const last = graph.length - 1
-  graph[last]?.lowestAt.forEach((lowest, place) => {
-    const own = after[last]
-    if (own) own[place] = ofEnd(lowest)
-  })
-  for (let tom = last - 1; tom >= 0; tom--) {
-    const [layer, next, own, ahead, nextKeys] = [
-      graph[tom],
-      graph[tom + 1],
-      after[tom],
-      after[tom + 1],
-      ofChoice[tom + 1],
-    ]
-    if (!layer || !next || !own || !ahead || !nextKeys) continue
-    const { placesFrom, stepKeys, choices } = next
-    const width = choices.length
-    for (let place = 0; place < own.length; place++) {
-      const firstStep = (layer.choiceAt[place] ?? 0) * width
-      let best = Infinity
-      for (let j = 0; j < width; j++) {
-        const to = placesFrom[place * width + j] ?? -1
-        if (to < 0) continue
-        const key = (stepKeys[firstStep + j] ?? 0) + (nextKeys[j] ?? 0) + (ahead[to] ?? Infinity)
-        if (key < best) best = key
-      }
-      own[place] = best
-    }
+  for (let tom = last; tom >= 0; tom--) {
+    const [layer, next, nextOwn, nextAfter] = [graph[tom], graph[tom + 1], ofChoice[tom + 1], after[tom + 1]]
+    if (!layer) continue
+    after[tom] =
+      next && nextOwn && nextAfter
+        ? smallestFrom(layer.lowestAt.length, next, nextOwn, nextAfter)
+        : Float64Array.from(layer.lowestAt, ofEnd)
   }
   return after
+}
+
+/** The loop that planning spends its time in: plain numbers only. */
+function smallestFrom(
+  places: number,
+  { choices, placesFrom, stepKeys, stepRow }: TomLayer,
+  ownKeys: Float64Array,
+  keysAfter: Float64Array,
+): Float64Array {
+  const width = choices.length
+  const smallest = new Float64Array(places)
+  for (let place = 0; place < places; place++) {
+    const [row, placeRow] = [stepRow[place] ?? 0, place * width]
+    let best = Infinity
+    for (let j = 0; j < width; j++) {
+      const to = placesFrom[placeRow + j] ?? -1
+      // Choices go from the lowest up: past the first that is out of order all are.
+      if (to < 0) break
+      const key = (stepKeys[row + j] ?? 0) + (ownKeys[j] ?? 0) + (keysAfter[to] ?? Infinity)
+      if (key < best) best = key
+    }
+    smallest[place] = best
+  }
+  return smallest
 }
 
 /** The smallest key of any path. */
