@@ -4,14 +4,17 @@ import { WIDEST_PAIR_HZ } from './pair-of-partials'
 
 /** Two pitches this near in height cannot be told apart by strength, dB. */
 const EQUAL_DB = 1.5
+/** Near a target the lowest counts that stands at least so high beside the highest, dB. */
+const PROMINENT_DB = -12
 /** No head's tap lies higher, Hz. */
 const HIGHEST_TAP_HZ = 750
 /** How far from the target is still near it, cents, unless told. */
 const NEAR_TARGET_CENTS = 500
 
 /**
- * The partial that is the tap's pitch: the strongest, or the strongest near the target when one is expected.
- * `unclear`: another pitch is as strong, or none lies near the target; `too-noisy`: there is no partial at all.
+ * The partial that is the tap's pitch. With a target the lowest prominent one near it: close to a lug the next shape, half an octave
+ * up, can ring louder than the tap's own. Without one the strongest.
+ * `unclear`: without a target another pitch is as strong, or with one none lies near it; `too-noisy`: there is no partial at all.
  */
 export function chooseTapPartial(
   found: readonly FoundPartial[],
@@ -24,6 +27,14 @@ export function chooseTapPartial(
   const near = found.filter((partial) => hz(partial) < HIGHEST_TAP_HZ && isNear(partial))
   const [first, ...others] = near
   if (first === undefined) return found.length === 0 ? 'too-noisy' : 'unclear'
-  const rival = others.find((other) => Math.abs(hz(other) - hz(first)) > WIDEST_PAIR_HZ)
-  return rival !== undefined && 20 * Math.log10(first.height / rival.height) < EQUAL_DB ? 'unclear' : first
+  const isApart = (a: DampedPartial, b: DampedPartial) => Math.abs(hz(a) - hz(b)) > WIDEST_PAIR_HZ
+  const overDb = (a: FoundPartial, b: FoundPartial) => 20 * Math.log10(a.height / b.height)
+  if (expectHz === undefined) {
+    const rival = others.find((other) => isApart(other, first))
+    return rival !== undefined && overDb(first, rival) < EQUAL_DB ? 'unclear' : first
+  }
+  const prominent = near.filter((partial) => overDb(partial, first) >= PROMINENT_DB)
+  const lowest = prominent.reduce((low, partial) => (partial.angle < low.angle ? partial : low), first)
+  // Its pair may hold a stronger one: `near` is sorted by height.
+  return near.find((partial) => !isApart(partial, lowest)) ?? lowest
 }
