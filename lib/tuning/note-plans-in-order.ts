@@ -54,7 +54,7 @@ export function* plansInOrder(kit: PlanKit): Generator<FoundPlan> {
     const toms = stream.plan.tomPitches.join(' ')
     if (!given.has(toms)) {
       given.add(toms)
-      yield withSpareSnares(kit, stream.plan)
+      yield foundPlan(kit, stream.plan)
     }
     advance(stream)
   }
@@ -69,7 +69,7 @@ export function* plansInOrder(kit: PlanKit): Generator<FoundPlan> {
   function advance(stream: Omit<Stream, 'plan'>) {
     const next = stream.paths.next()
     if (next.done) return
-    insertInOrder(open, { ...stream, plan: planOf(kit, next.value, stream) }, (a, b) => planOrder(a.plan, b.plan))
+    insertInOrder(open, { ...stream, plan: planOf(next.value, stream) }, (a, b) => planOrder(a.plan, b.plan))
   }
 }
 
@@ -79,7 +79,9 @@ type SnareSet = { choices: readonly NoteChoice[]; cost: number }
 /** All plans with one set of snare notes, the best first; `plan` is the next of them. */
 type Stream = { snares: SnareSet; paths: Generator<TomPath>; kicks: KickSearch; plan: PlanInOrder }
 
-type PlanInOrder = FoundPlan & {
+type PlanInOrder = Pick<FoundPlan, 'key' | 'tomPitches'> & {
+  /** Of toms, kicks and the snares that are planned together. */
+  choices: readonly NoteChoice[]
   kickAndSnarePitches: readonly number[]
   /** Of kicks and snares, cents. */
   fromCentre: number
@@ -121,36 +123,34 @@ function besideSnares(kit: PlanKit, graph: TomGraph): (snarePitches: readonly nu
   const added = (snare: number) => {
     const there = known.get(snare)
     if (there) return there
-    const keys = graph.map(({ choices }) =>
-      Float64Array.from(choices, ({ pitch }) => planKey(besideTom(snare, pitch, kit), 0)),
+    const keys = graph.map(
+      ({ choices }) => new Float64Array(choices.map(({ pitch }) => planKey(besideTom(snare, pitch, kit), 0))),
     )
     known.set(snare, keys)
     return keys
   }
   return (snarePitches) => {
-    const sums = own.map((keys) => keys.slice())
-    for (const pitch of snarePitches) {
-      added(pitch).forEach((more, tom) => more.forEach((key, j) => addTo(sums[tom], j, key)))
-    }
-    return sums
+    const all = snarePitches.map(added)
+    return own.map((keys, tom) => {
+      const sums = keys.slice()
+      for (const more of all) {
+        const add = more[tom]
+        for (let j = 0; j < sums.length; j++) sums[j] = (sums[j] ?? 0) + (add?.[j] ?? 0)
+      }
+      return sums
+    })
   }
-}
-
-function addTo(sums: Float64Array | undefined, index: number, key: number) {
-  if (sums) sums[index] = (sums[index] ?? 0) + key
 }
 
 function besideTom(snarePitch: number, tomPitch: number, { apartSemitones }: PlanKit): number {
   return tooCloseCost(snarePitch - tomPitch, apartSemitones) + sharedNameCost(snarePitch, tomPitch)
 }
 
-function planOf(kit: PlanKit, path: TomPath, { snares, kicks }: Omit<Stream, 'plan'>): PlanInOrder {
+function planOf(path: TomPath, { snares, kicks }: Omit<Stream, 'plan'>): PlanInOrder {
   const lowest = path.pitches.length === 0 ? null : Math.min(...path.pitches)
   const others = [...kicks(lowest).choices, ...snares.choices]
-  const drums = [...kit.toms, ...kit.kicks, ...plannedSnares(kit).together]
-  const choices = [...path.choices, ...others]
   return {
-    notes: new Map(drums.flatMap(({ id }, i) => (choices[i] ? [[id, choices[i].note] as const] : []))),
+    choices: [...path.choices, ...others],
     key: path.key + planKey(snares.cost, 0),
     tomPitches: path.pitches,
     kickAndSnarePitches: others.map(({ pitch }) => pitch),
@@ -158,15 +158,18 @@ function planOf(kit: PlanKit, path: TomPath, { snares, kicks }: Omit<Stream, 'pl
   }
 }
 
-/** The plan with the best note that is left for each further snare. */
-function withSpareSnares(kit: PlanKit, { notes, key, tomPitches }: PlanInOrder): FoundPlan {
+/** The plan by drum, with the best note that is left for each further snare. */
+function foundPlan(kit: PlanKit, { choices, key, tomPitches }: PlanInOrder): FoundPlan {
+  const { together, spare } = plannedSnares(kit)
+  const drums = [...kit.toms, ...kit.kicks, ...together]
+  const notes = new Map(drums.flatMap(({ id }, i) => (choices[i] ? [[id, choices[i].note] as const] : [])))
   const kickPitches = kit.kicks.flatMap(({ id }) => notes.get(id) ?? []).map(pitchOf)
-  const spares = plannedSnares(kit).spare.map((snare) => {
+  for (const snare of spare) {
     const { choice } = cheapestChoice(noteChoices(kit, snare), ({ pitch }) => {
       const besideKicks = kickPitches.reduce((sum, kick) => sum + tooCloseCost(pitch - kick, kit.apartSemitones), 0)
       return tomPitches.reduce((sum, tom) => sum + besideTom(pitch, tom, kit), besideKicks)
     })
-    return [snare.id, choice.note] as const
-  })
-  return { notes: new Map([...notes, ...spares]), key, tomPitches }
+    notes.set(snare.id, choice.note)
+  }
+  return { notes, key, tomPitches }
 }

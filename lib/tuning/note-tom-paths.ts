@@ -65,14 +65,19 @@ function waysThrough(graph: TomGraph, keys: PathKeys) {
   const after = smallestKeysAfter(graph, keys)
   const sorted = graph.map(() => new Map<number, Way[]>())
   return (tom: number, placeBefore = 0, rank: number): Way | undefined => {
-    const [layer, ownKeys, keysAfter] = [graph[tom], keys.ofChoice[tom], after[tom]]
+    const layer = graph[tom]
+    const ownKeys = keys.ofChoice[tom]
+    const keysAfter = after[tom]
     if (!layer || !ownKeys || !keysAfter) return undefined
     const there = sorted[tom]?.get(placeBefore)
     if (there) return there[rank]
     if (rank === 0) return bestWay(layer, placeBefore, ownKeys, keysAfter)
-    const ways = layer.choices
-      .flatMap((_, index) => wayTo(layer, placeBefore, index, ownKeys, keysAfter) ?? [])
-      .sort((a, b) => a.key + a.after - b.key - b.after || a.choice.pitch - b.choice.pitch)
+    const ways: Way[] = []
+    for (let index = 0; index < layer.choices.length; index++) {
+      const way = wayTo(layer, placeBefore, index, ownKeys, keysAfter)
+      if (way) ways.push(way)
+    }
+    ways.sort((a, b) => a.key + a.after - b.key - b.after || a.choice.pitch - b.choice.pitch)
     sorted[tom]?.set(placeBefore, ways)
     return ways[rank]
   }
@@ -81,13 +86,19 @@ function waysThrough(graph: TomGraph, keys: PathKeys) {
 /** Of equal ones the lowest, as choices go from the lowest up. */
 function bestWay(layer: TomLayer, placeBefore: number, ownKeys: Float64Array, keysAfter: Float64Array) {
   const { choices, placesFrom, stepKeys, stepRow } = layer
-  const [first, row, placeRow] = [stepRow.length === 0, stepRow[placeBefore] ?? 0, placeBefore * choices.length]
-  let [best, bestIndex] = [Infinity, -1]
+  const first = stepRow.length === 0
+  const row = stepRow[placeBefore] ?? 0
+  const placeRow = placeBefore * choices.length
+  let best = Infinity
+  let bestIndex = -1
   for (let index = 0; index < choices.length; index++) {
     const place = first ? index : (placesFrom[placeRow + index] ?? -1)
-    if (place < 0) continue
+    // As in `smallestFrom`: past the first that is out of order all are.
+    if (place < 0) break
     const key = (ownKeys[index] ?? 0) + (first ? 0 : (stepKeys[row + index] ?? 0)) + (keysAfter[place] ?? Infinity)
-    if (key < best) [best, bestIndex] = [key, index]
+    if (key >= best) continue
+    best = key
+    bestIndex = index
   }
   return wayTo(layer, placeBefore, bestIndex, ownKeys, keysAfter)
 }
@@ -117,7 +128,7 @@ function smallestKeysAfter(graph: TomGraph, { ofChoice, ofEnd }: PathKeys): Floa
     after[tom] =
       next && nextOwn && nextAfter
         ? smallestFrom(layer.lowestAt.length, next, nextOwn, nextAfter)
-        : Float64Array.from(layer.lowestAt, ofEnd)
+        : new Float64Array(layer.lowestAt.map(ofEnd))
   }
   return after
 }
@@ -132,7 +143,8 @@ function smallestFrom(
   const width = choices.length
   const smallest = new Float64Array(places)
   for (let place = 0; place < places; place++) {
-    const [row, placeRow] = [stepRow[place] ?? 0, place * width]
+    const row = stepRow[place] ?? 0
+    const placeRow = place * width
     let best = Infinity
     for (let j = 0; j < width; j++) {
       const to = placesFrom[placeRow + j] ?? -1
