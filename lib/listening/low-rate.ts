@@ -9,7 +9,7 @@ const kernel = lowPass()
 /**
  * The sound below about 1.2 kHz at an eighth of its rate, from `from` (included) to `to` (not): a Kaiser-windowed sinc of 48
  * taps, wholly inside the stretch, so that nothing from before `from` leaks in and a damped sinusoid stays one
- * (times {@link lowRateGain}). What folds back lies 55 dB down or more.
+ * (times {@link lowRateGain}). What folds back under 1 kHz lies 55 dB down or more.
  */
 export function lowRate(samples: Float32Array, from: number, to: number): Float64Array {
   const count = Math.max(0, Math.floor((to - from - TAPS) / LOW_RATE_STEP) + 1)

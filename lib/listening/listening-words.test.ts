@@ -1,0 +1,23 @@
+import { expect, test } from 'vitest'
+import { tapRefusalWords } from './listening-words'
+import type { TapRefusalKind } from './tap-report'
+
+const kinds: Record<TapRefusalKind, true> = {
+  silent: true,
+  clipped: true,
+  'too-short': true,
+  'double-hit': true,
+  'not-a-tap': true,
+  'too-noisy': true,
+  unclear: true,
+}
+
+test('every refusal has words of its own, and none shouts', () => {
+  const words = (Object.keys(kinds) as TapRefusalKind[]).map(tapRefusalWords)
+  expect(new Set(words).size).toBe(words.length)
+  for (const said of words) expect(said).toMatch(/^[A-Z][^!]*\.$/)
+})
+
+test('two hits', () => {
+  expect(tapRefusalWords('double-hit')).toBe('Not sure, tap again: two hits came together.')
+})
