@@ -136,6 +136,7 @@ export function CalibrationChart({ calibration, readings, head, asked }: Calibra
 function Mark({ doubtful, left, bottom }: { doubtful: boolean; left: string; bottom: string }) {
   return (
     <span
+      data-part={doubtful ? 'doubtful pair' : 'pair'}
       className={classes(
         'absolute -translate-x-1/2 translate-y-1/2',
         doubtful
