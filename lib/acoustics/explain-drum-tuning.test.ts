@@ -52,6 +52,7 @@ const BY_HAND: Record<string, (given: Given) => number> = {
   'rod-pull': (g) => (2 * Math.PI * g['a']! * g['T']!) / g['N']!,
   torque: (g) => g['K']! * g['d']! * g['F']!,
   'film-stress': (g) => g['T']! / g['h']!,
+  'warm-up': (g) => (240 * g['h']!) / 254e-6 / (10 / g['Δt']!),
   range: (g) => Math.log(g['T']! / g['Tslack']!) / Math.log(g['Tchoked']! / g['Tslack']!),
   'tap-ratio': (g) => g['f11']! / g['f']!,
 }

@@ -10,6 +10,10 @@ import type { ExplainedFigure } from './explained-figure'
 import { filmArealDensityKgPerM2, filmThicknessM, PET_DENSITY_KG_PER_M3, PET_STRESS_AT_5_PERCENT_PA } from './film'
 import { ROD_DIAMETER_M, TORQUE_FACTOR_DRY } from './rod'
 import { shellAir } from './shell-air'
+import { mostSlackeningNPerM } from './warm-up'
+
+/** From load-in to a full house under light, K (from memory). */
+const WARM_UP_K = 10
 
 /** The figures of one head of `drumTuning`, as `explainDrumTuning` gives them. SI units. */
 export function explainHeadTuning(input: DrumTuningInput, tuning: DrumTuning, head: HeadTuning): ExplainedFigure[] {
@@ -76,6 +80,12 @@ export function explainHeadTuning(input: DrumTuningInput, tuning: DrumTuning, he
       ...{ formula: 'p = T/h', bounds: boundsOf(head.filmStressPa), mark: 'derived' },
       inputs: [tension, thickness, figureInput('p5', 'Stress at 5 % strain', PET_STRESS_AT_5_PERCENT_PA, 'Pa')],
       source: 'Stress at 5 % strain: DuPont Teijin Films data sheet H-37232-3.',
+    },
+    {
+      ...{ id: 'warm-up', formula: 'ΔT = 240·(h/254 µm)·(Δt/10 K)', bounds: null, mark: 'from memory' },
+      ...figureInput('ΔT', 'Most that warming may take off', mostSlackeningNPerM(film.plyMils, WARM_UP_K), 'N/m'),
+      inputs: [thickness, figureInput('Δt', 'Warming of the stage', WARM_UP_K, 'K')],
+      source: 'Rim held fast, so an upper bound. Tap again after warm-up, and when a new head has settled.',
     },
     {
       ...{ id: 'range', ...figureInput('y', 'Place in the playable range', head.rangePosition.fraction, '') },

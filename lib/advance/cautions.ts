@@ -1,3 +1,5 @@
+import { hearingMinutes } from '@/lib/acoustics/hearing'
+
 export interface Caution {
   readonly name: string
   readonly words: string
@@ -16,8 +18,7 @@ export const tuningCautions: readonly Caution[] = [
   },
   {
     name: 'Hearing',
-    words:
-      'Close taps and full strokes are loud. 94 dBA is a day’s dose in 60 minutes and 100 dBA in 15 (NIOSH 98-126). Wear ear plugs.',
+    words: `Close taps and full strokes are loud. 94 dBA is a day’s dose in ${hearingMinutes(94)} minutes and 100 dBA in ${hearingMinutes(100)} (NIOSH 98-126). Wear ear plugs.`,
   },
 ]
 
