@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { headRelationWords, intervalName } from './interval-name'
+import { headRelationWords, intervalName, withArticle } from './interval-name'
 
 describe('an interval in words', () => {
   it.each<[number, string]>([
@@ -17,6 +17,17 @@ describe('an interval in words', () => {
     [2400, 'two octaves'],
   ])('%s cents is a %s', (cents, name) => {
     expect(intervalName(cents)).toBe(name)
+  })
+})
+
+describe('an interval with its article', () => {
+  it.each([
+    ['fourth', 'a fourth'],
+    ['octave and fifth', 'an octave and fifth'],
+    ['two octaves', 'two octaves'],
+    ['same note +14 cents', 'the same note +14 cents'],
+  ])('%s', (name, words) => {
+    expect(withArticle(name)).toBe(words)
   })
 })
 

@@ -36,9 +36,8 @@ function wholeName(semitones: number): string {
   return semitones % 12 === 0 ? spanned : `${spanned} and ${name}`
 }
 
-/** The name with its article: "a fourth", "an octave", "two octaves". */
-export function intervalWithArticle(cents: number): string {
-  const name = intervalName(cents)
+/** An interval's name with its article: "a fourth", "an octave", "two octaves". */
+export function withArticle(name: string): string {
   if (/^(two|\d)/.test(name)) return name
   if (name.startsWith('same note')) return `the ${name}`
   return `${name.startsWith('octave') ? 'an' : 'a'} ${name}`
@@ -47,7 +46,7 @@ export function intervalWithArticle(cents: number): string {
 /** The relation between the heads in words, by how far the resonant stands above the batter in cents. */
 export function headRelationWords(cents: number): string {
   if (Math.abs(cents) < NAMED_WITHIN_CENTS) return 'both heads at the same pitch'
-  const unnamed = intervalName(cents).startsWith('same note')
-  const size = unnamed ? `${Math.round(Math.abs(cents))} cents` : intervalWithArticle(cents)
+  const name = intervalName(cents)
+  const size = name.startsWith('same note') ? `${Math.round(Math.abs(cents))} cents` : withArticle(name)
   return `resonant ${size} ${cents > 0 ? 'higher' : 'lower'}`
 }

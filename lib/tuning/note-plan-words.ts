@@ -1,4 +1,4 @@
-import { intervalWithArticle } from './interval-name'
+import { intervalName, withArticle } from './interval-name'
 import type { JudgedDrum, JudgedInterval } from './note-plan-model'
 
 type Place = Pick<JudgedDrum, 'zone' | 'centsOffMiddle' | 'centsOutOfRange'>
@@ -12,13 +12,13 @@ export function intervalReason(interval: JudgedInterval, nameOf: (drumId: string
   if (!ifAsked || asked.length === 0) return null
   const [upper, lower] = [nameOf(interval.upperId), nameOf(interval.lowerId)]
   const nearest = asked.reduce((so, each) => (Math.abs(got - each) < Math.abs(got - so) ? each : so))
-  const wanted = intervalWithArticle(nearest * 100)
+  const wanted = withArticle(intervalName(nearest * 100))
   if (offSemitones === 0) {
     return ifAsked.zone === 'middle'
       ? null
       : `${sentenceCase(wanted)} under ${upper} leaves ${lower} ${placeWords(ifAsked)}.`
   }
-  const instead = `${upper} to ${lower} is ${intervalWithArticle(got * 100)}, not ${wanted}`
+  const instead = `${upper} to ${lower} is ${withArticle(intervalName(got * 100))}, not ${wanted}`
   return ifAsked.zone === 'middle' ? `${instead}.` : `${instead}, which would leave ${lower} ${placeWords(ifAsked)}.`
 }
 

@@ -1,12 +1,15 @@
-import { intervalName } from '@/lib/tuning/interval-name'
+import { intervalName, withArticle } from '@/lib/tuning/interval-name'
 import type { JudgedPlan, PlanChange } from '@/lib/tuning/note-plan-model'
+import { intervalReason } from '@/lib/tuning/note-plan-words'
 import { splitWords } from './cost-words'
-import { intervalWords, standingsOf } from './standing'
+import { standingsOf } from './standing'
 import type { NameOf } from './standing'
-import { withArticle } from './with-article'
 
 /** More would not be read. */
 const sentencesAtMost = 2
+
+/** Standings that a step's reason says already. */
+const placesInRange = ['slack', 'low', 'high', 'choked']
 
 /** How an alternative differs from the best plan, in words. */
 export function changeWords(change: PlanChange, nameOf: NameOf): string {
@@ -23,15 +26,22 @@ export function changeWords(change: PlanChange, nameOf: NameOf): string {
 
 /** What speaks against a plan, drum by drum and step by step; that nothing does is said of the best one. */
 export function planWhy(plan: JudgedPlan, change: PlanChange | null, nameOf: NameOf): string[] {
-  const steps = plan.intervals
-    .filter(({ offSemitones }) => offSemitones > 0)
-    .map((step) => `${nameOf(step.upperId)} to ${nameOf(step.lowerId)}: ${intervalWords(step)}.`)
+  const reasons = plan.intervals.flatMap((step) => {
+    const words = intervalReason(step, nameOf)
+    return words ? [{ ...step, words }] : []
+  })
+  const [asAsked, otherwise] = [
+    reasons.filter(({ offSemitones }) => offSemitones === 0),
+    reasons.filter(({ offSemitones }) => offSemitones > 0),
+  ]
+  const saidWhere = new Set(asAsked.map(({ lowerId }) => lowerId))
   const drums = plan.drums.flatMap(({ drumId }) =>
     standingsOf(plan, drumId, nameOf)
-      .filter(({ tone }) => tone !== 'good')
+      .filter(({ tone, word }) => tone !== 'good' && !(saidWhere.has(drumId) && placesInRange.includes(word)))
       .map(({ words }) => `${nameOf(drumId)}: ${words}.`),
   )
-  const against = [...(change?.kind === 'intervals' ? [] : steps), ...drums]
+  const steps = [...(change?.kind === 'intervals' ? [] : otherwise), ...asAsked].map(({ words }) => words)
+  const against = [...steps, ...drums]
   const shown = against.slice(0, sentencesAtMost)
   return [
     ...(change ? [changeWords(change, nameOf)] : []),

@@ -65,6 +65,14 @@ describe('a plan in words', () => {
     expect(planWhy({ ...plan, drums: [drum('tom', 'middle'), drum('floor', 'low')] }, null, nameOf)).toEqual([
       'Floor 16: low in its range, 80 cents under the middle.',
     ])
+    const step: JudgedPlan['intervals'][number] = {
+      ...{ kind: 'toms', upperId: 'tom', lowerId: 'floor', asked: [5], askedExact: 5, askedName: 'fourth' },
+      ...{ got: 5, gotName: 'fourth', offSemitones: 0, cost: { interval: 0, order: 0 } },
+      ifAsked: { zone: 'low', centsOffMiddle: -80, centsOutOfRange: 0 },
+    }
+    expect(planWhy({ ...plan, intervals: [step], drums: [drum('floor', 'low')] }, null, nameOf)).toEqual([
+      'A fourth under Tom 12 leaves Floor 16 80 cents under its middle third.',
+    ])
   })
 })
 

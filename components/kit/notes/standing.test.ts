@@ -13,7 +13,7 @@ const plan = (drums: JudgedDrum[], clashes: PlanClash[] = [], intervals: JudgedI
 })
 const step = (over: Partial<JudgedInterval>): JudgedInterval => ({
   ...{ kind: 'toms', upperId: 'tom', lowerId: 'floor', asked: [5], askedExact: 5, askedName: 'fourth' },
-  ...{ got: 5, gotName: 'fourth', offSemitones: 0, cost: { interval: 0, order: 0 }, ...over },
+  ...{ got: 5, gotName: 'fourth', offSemitones: 0, ifAsked: null, cost: { interval: 0, order: 0 }, ...over },
 })
 const nameOf = (id: string) => ({ tom: 'Tom 12', floor: 'Floor 16', snare: 'Snare 14' })[id] ?? id
 const told = (judged: JudgedPlan | null, id: string) =>

@@ -1,5 +1,5 @@
+import { withArticle } from '@/lib/tuning/interval-name'
 import type { JudgedDrum, JudgedInterval, JudgedPlan, PlanClash } from '@/lib/tuning/note-plan-model'
-import { withArticle } from './with-article'
 
 /** How a note stands on its drum and among the others: in a word for the chart, and in words. */
 export interface Standing {

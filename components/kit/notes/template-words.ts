@@ -1,6 +1,5 @@
 import type { NoteTemplate } from '@/lib/tuning/note-template'
-import { intervalName } from '@/lib/tuning/interval-name'
-import { withArticle } from './with-article'
+import { intervalName, withArticle } from '@/lib/tuning/interval-name'
 
 /** A number without needless noughts: "2.5", "2". */
 const plain = (value: number) => String(Number(value.toFixed(2)))
