@@ -33,7 +33,7 @@ export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onL
     <section aria-label={`The note of ${drum.name}`} className="border-l-4 border-spike bg-sheet px-3 py-3">
       <div className="flex flex-wrap items-end gap-x-3 gap-y-2">
         <div className="max-sm:basis-full">
-          <h3 className="text-xl">{drum.name}</h3>
+          <h2 className="text-xl">{drum.name}</h2>
           <p className="figures text-sm">{note ? spokenNote(note, reader) : 'no note yet'}</p>
         </div>
         <TypedNote
@@ -50,8 +50,8 @@ export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onL
         />
         {down && up && (
           <div className="flex flex-wrap gap-2">
-            <Button onClick={() => onSet(down)}>Down to {nameAt(down.semitone)}</Button>
-            <Button onClick={() => onSet(up)}>Up to {nameAt(up.semitone)}</Button>
+            <Button onClick={() => onSet(down)}>Down to {noteText(down, reader.locale)}</Button>
+            <Button onClick={() => onSet(up)}>Up to {noteText(up, reader.locale)}</Button>
           </div>
         )}
         <Checkbox
@@ -75,7 +75,7 @@ export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onL
           The plan so costs {planCost}.{' '}
           {best ? (
             <>
-              It would cost least, {costWords(best.cost)}, with {drum.name} at {nameAt(best.note.semitone)}.
+              It would cost least, {costWords(best.cost)}, with {drum.name} at {noteText(best.note, reader.locale)}.
             </>
           ) : (
             'No other note of this drum costs less.'

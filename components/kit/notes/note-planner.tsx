@@ -120,7 +120,7 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
                   <span className="text-plum">
                     {drumsWord(toSet.length)} not as in the kit, whose notes are the rings.
                   </span>
-                  <Button kind="quiet" disabled={set.isPending} onClick={hands.drop}>
+                  <Button kind="quiet" disabled={set.isPending} onClick={hands.drop} className="max-sm:-ml-4">
                     Back to the notes in the kit
                   </Button>
                 </>
