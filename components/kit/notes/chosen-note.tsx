@@ -15,6 +15,8 @@ import type { Standing } from './standing'
 export interface ChosenNoteProps {
   drum: DrumEntry
   standings: readonly Standing[]
+  /** Why its steps to the neighbours are as they are, a sentence each. */
+  reasons: readonly string[]
   /** The whole plan's cost in words. */
   planCost: string
   /** The choice that costs the plan least, when it is another. */
@@ -25,7 +27,7 @@ export interface ChosenNoteProps {
 }
 
 /** The note that was last taken up: typed, moved by a step, locked, and what it costs. */
-export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onLock }: ChosenNoteProps) {
+export function ChosenNote({ drum, standings, reasons, planCost, best, reader, onSet, onLock }: ChosenNoteProps) {
   const { note, noteLocked } = drum.spec
   const nameAt = (semitone: number) => noteName(semitone, reader.locale)
   const [down, up] = note ? [movedBy(note, -1), movedBy(note, 1)] : [null, null]
@@ -70,6 +72,11 @@ export function ChosenNote({ drum, standings, planCost, best, reader, onSet, onL
           {drum.name}: {standings.map(({ words }) => words).join('; ')}.
         </p>
       )}
+      {reasons.map((sentence) => (
+        <p key={sentence} className="text-sm">
+          {sentence}
+        </p>
+      ))}
       {note && (
         <p className="text-sm text-soft">
           The plan so costs {planCost}.{' '}

@@ -25,6 +25,7 @@ import { draftNoteOf, inNoteOrder, isTom } from './note-draft'
 import { PlanBar } from './plan-bar'
 import { PlanChoices } from './plan-choices'
 import { PlanFoot } from './plan-foot'
+import { planWhy } from './plan-why'
 import { standingsOf } from './standing'
 import { useNoteHands } from './use-note-hands'
 import { useNoteSession } from './use-note-session'
@@ -111,8 +112,13 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
             costs={view.costSteps}
             hands={editing ? hands.onChart : null}
           />
+          {judged && (
+            <p className="mt-2 border-t border-line pt-2 text-sm">
+              {planWhy(judged, null, nameOf).join(' ')} It costs {view.costWords}.
+            </p>
+          )}
           {mayEdit && (
-            <p className="mt-2 flex min-h-control flex-wrap items-center gap-x-1 border-t border-line text-sm">
+            <p className="flex min-h-control flex-wrap items-center gap-x-1 text-sm">
               {toSet.length === 0 ? (
                 <span className="text-soft">The kit has these notes.</span>
               ) : (
@@ -134,6 +140,7 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
               <ChosenNote
                 drum={chosen}
                 standings={standingsOf(judged, chosen.id, nameOf)}
+                reasons={view.reasonsOf(chosen.id)}
                 planCost={view.costWords}
                 best={view.betterNote}
                 reader={reader}

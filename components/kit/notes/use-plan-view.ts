@@ -8,6 +8,7 @@ import { noteText } from '@/lib/contracts/kit-form'
 import type { PartyNoteTemplate } from '@/lib/contracts/note-template'
 import type { TuningStage } from '@/lib/tuning/drum-estimate'
 import type { JudgedPlan, MoveCost, PlanDrum } from '@/lib/tuning/note-plan-model'
+import { intervalReason } from '@/lib/tuning/note-plan-words'
 import { NOTE_TEMPLATES } from '@/lib/tuning/note-template'
 import type { NoteTemplate } from '@/lib/tuning/note-template'
 import type { KitReader } from '../kit-reader'
@@ -92,6 +93,10 @@ export function usePlanView({ inKit, own, state, reader, chosenId, temperatureC 
     ...{ drums, mine, ranged, judged, template, rules, stage, trying, draftOf },
     unhurried: { drums: laterDrums, judged: laterJudged },
     everybodys: NOTE_TEMPLATES,
+    reasonsOf: (drumId: string) =>
+      (judged?.intervals ?? [])
+        .filter(({ upperId, lowerId }) => upperId === drumId || lowerId === drumId)
+        .flatMap((interval) => intervalReason(interval, nameOf) ?? []),
     best: listed[0] ?? null,
     choices: listed,
     refusal: 'refusal' in plans ? plans.refusal : null,
