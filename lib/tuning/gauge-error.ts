@@ -1,6 +1,5 @@
 /** Why a gauge's pairs, or a question put to its calibration, are refused. */
-export const gaugeRefusals = ['quantity', 'too-few', 'narrow', 'contradict'] as const
-export type GaugeRefusal = (typeof gaugeRefusals)[number]
+export type GaugeRefusal = 'quantity' | 'too-few' | 'narrow' | 'contradict'
 
 /**
  * A calibration that cannot be made, or a figure that no gauge or head can have. The message is fit to show.

@@ -30,7 +30,7 @@ export type GaugeProcess = {
  * memory, the same); 1.5 %, the film's bending stiffness, which a gauge feels and the tap model leaves out (derived: √(D/T) is
  * 2 mm for 10 mil at 2000 N/m and 1.6 mm for 7+7 mil, against feet some 50 mm apart).
  */
-export const HEAD_SCATTER = 0.037
+const HEAD_SCATTER = 0.037
 
 /** One hand's repeats, as shares of the span: 0.35 to 1 on a dial of 100 (common practice). Centre and spread of the prior. */
 const NOISE_SHARES = [0.0025, 0.004, 0.0065, 0.01, 0.016, 0.026, 0.042]

@@ -9,8 +9,8 @@ import { requireFigure, requireGaugeHead } from './gauge-profile'
 import type { GaugeHead } from './gauge-profile'
 
 /** Under this no head holds a note, over it no drum film holds at all: a tap that says otherwise was typed in another unit. */
-export const LEAST_TENSION_N_PER_M = 60
-export const MOST_TENSION_N_PER_M = 15_000
+const LEAST_TENSION_N_PER_M = 60
+const MOST_TENSION_N_PER_M = 15_000
 
 /** A temperature nobody wrote down is the room's. */
 const temperatureOf = (temperatureC: number | null) =>
