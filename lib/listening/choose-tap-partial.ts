@@ -11,6 +11,13 @@ const HIGHEST_TAP_HZ = 750
 /** How far from the target is still near it, cents, unless told. */
 const NEAR_TARGET_CENTS = 500
 
+export type ExpectedPitch = { expectHz?: number; expectWithinCents?: number }
+
+/** Whether a pitch may be the one that is expected; any may when none is. */
+export function isNearTarget(hz: number, { expectHz, expectWithinCents = NEAR_TARGET_CENTS }: ExpectedPitch): boolean {
+  return expectHz === undefined || Math.abs(1200 * Math.log2(hz / expectHz)) <= expectWithinCents
+}
+
 /**
  * The partial that is the tap's pitch. With a target the lowest prominent one near it: close to a lug the next shape, half an octave
  * up, can ring louder than the tap's own. Without one the strongest.
@@ -19,17 +26,15 @@ const NEAR_TARGET_CENTS = 500
 export function chooseTapPartial(
   found: readonly FoundPartial[],
   rateHz: number,
-  { expectHz, expectWithinCents = NEAR_TARGET_CENTS }: { expectHz?: number; expectWithinCents?: number },
+  expect: ExpectedPitch,
 ): FoundPartial | 'unclear' | 'too-noisy' {
   const hz = (partial: DampedPartial) => (partial.angle * rateHz) / (2 * Math.PI)
-  const isNear = (partial: DampedPartial) =>
-    expectHz === undefined || Math.abs(1200 * Math.log2(hz(partial) / expectHz)) <= expectWithinCents
-  const near = found.filter((partial) => hz(partial) < HIGHEST_TAP_HZ && isNear(partial))
+  const near = found.filter((partial) => hz(partial) < HIGHEST_TAP_HZ && isNearTarget(hz(partial), expect))
   const [first, ...others] = near
   if (first === undefined) return found.length === 0 ? 'too-noisy' : 'unclear'
   const isApart = (a: DampedPartial, b: DampedPartial) => Math.abs(hz(a) - hz(b)) > WIDEST_PAIR_HZ
   const overDb = (a: FoundPartial, b: FoundPartial) => 20 * Math.log10(a.height / b.height)
-  if (expectHz === undefined) {
+  if (expect.expectHz === undefined) {
     const rival = others.find((other) => isApart(other, first))
     return rival !== undefined && overDb(first, rival) < EQUAL_DB ? 'unclear' : first
   }

@@ -1,8 +1,9 @@
-/** A sample this near the loudest counts as flat against the top. */
+/** Samples this near the loudest one may be flat against the top. */
 const FLAT_SHARE = 0.9995
-/** A sound that only touches its loudest value has fewer flat samples than this; at full scale every one counts. */
-const TOUCHING = 12
+/** At full scale they are. Below it only so many in a row that do not move, as no ringing makes them. */
 const FULL_SCALE = 0.999
+const LEAST_IN_A_ROW = 6
+const STANDING_SHARE = 1e-5
 /** Clipping that is over so soon after the strike can be waited out, s, if it held no more than this share of the beginning. */
 const WAITED_OUT_S = 0.06
 const BEGINNING_S = 0.05
@@ -21,16 +22,20 @@ export function clippedUntil(
   let peak = 0
   for (let i = strikeAt; i < end; i++) peak = Math.max(peak, Math.abs(samples[i] ?? 0))
   const beginning = Math.round(BEGINNING_S * sampleRateHz)
-  let flat = 0
+  const top = FLAT_SHARE * peak
+  const needed = peak >= FULL_SCALE ? 1 : LEAST_IN_A_ROW
   let early = 0
-  let last = strikeAt
-  for (let i = strikeAt; i < end; i++) {
-    if (Math.abs(samples[i] ?? 0) < FLAT_SHARE * peak) continue
-    flat++
-    last = i
-    if (i < strikeAt + beginning) early++
+  let last = strikeAt - 1
+  for (let i = strikeAt; i < end;) {
+    const level = Math.abs(samples[i] ?? 0)
+    let run = i + 1
+    while (run < end && Math.abs(Math.abs(samples[run] ?? 0) - level) <= STANDING_SHARE * peak) run++
+    if (level >= top && run - i >= needed) {
+      last = run - 1
+      early += Math.max(0, Math.min(run, strikeAt + beginning) - i)
+    }
+    i = run
   }
-  if (flat < (peak >= FULL_SCALE ? 2 : TOUCHING)) return strikeAt
   if (last - strikeAt > WAITED_OUT_S * sampleRateHz || early > MOST_SHARE * beginning) return null
   return last + 1
 }

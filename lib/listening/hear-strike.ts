@@ -1,4 +1,4 @@
-import { chooseTapPartial } from './choose-tap-partial'
+import { chooseTapPartial, isNearTarget } from './choose-tap-partial'
 import { clippedUntil } from './clipped-until'
 import { findPartials } from './find-partials'
 import { glidingPitch } from './gliding-pitch'
@@ -41,6 +41,8 @@ const FEWEST_PERIODS = 5.5
 const STEADY_T60_S = 6
 /** Of the pitch's band, power: over the first a glide is looked for, over the second the sound is no ringing head. */
 const GLIDE_UNEXPLAINED = 0.02
+/** A pitch that still falls by more than this after 50 ms is on its way throughout: where it dwells is its pitch, cents. */
+const WIDE_GLIDE_CENTS = 60
 const MOST_UNEXPLAINED = 0.25
 /** A pitch less sure than this is not named, cents. */
 const MOST_ERROR_CENTS = 25
@@ -57,15 +59,18 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const share = lowShare({ samples, sampleRateHz, strikeAt, end, quiet })
   if (share !== null && share < LEAST_LOW_SHARE) return 'not-a-tap'
 
+  const moving = gliding(strike, end)
+  if (moving !== null && (moving.glide?.cents ?? 0) > WIDE_GLIDE_CENTS) return moving
+
   const rateHz = sampleRateHz / LOW_RATE_STEP
   const firstFrom = Math.max(unclippedFrom, strikeAt + Math.round(FIRST_SKIP_S * sampleRateHz))
   const found = findPartials(spectrumFrom(samples, firstFrom, end), rateHz).partials
   const ringing = found.filter(({ decay }) => T60_PER_TAU / (decay * rateHz) < STEADY_T60_S)
   if (ringing.length === 0 && found.length > 0) return 'not-a-tap'
   // A pitch on its way looks like many partials side by side.
-  if (isHarmonic(ringing) || isDense(found)) return gliding(strike, end) ?? 'not-a-tap'
+  if (isHarmonic(ringing) || isDense(found)) return moving ?? 'not-a-tap'
   const chosen = chooseTapPartial(ringing, rateHz, expect)
-  if (typeof chosen === 'string') return gliding(strike, end) ?? chosen
+  if (typeof chosen === 'string') return moving ?? chosen
 
   // Once the decay is known: begin as early and end as soon as it allows.
   const tauS = 1 / (chosen.decay * rateHz)
@@ -76,11 +81,9 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const fits = fitPitchAmongNeighbours(spectrumFrom(samples, from, until), rateHz, found, chosen)
   if (fits === null) return 'unclear'
   const unexplained = fits.best.residual / fits.best.energy
-  if (unexplained > GLIDE_UNEXPLAINED) {
-    const glide = gliding(strike, end)
-    if (glide !== null) return glide
-  }
-  const pitch = pitchOfFit(fits.best, rateHz, (from - strikeAt) / sampleRateHz, (until - from) / sampleRateHz)
+  if (moving !== null && unexplained > GLIDE_UNEXPLAINED) return moving
+  const sinceStrikeS = (from - strikeAt) / sampleRateHz
+  const pitch = pitchOfFit(fits.best, rateHz, sinceStrikeS, (until - from) / sampleRateHz)
   const confidence = confidenceOf(pitch, unexplained)
   const refused = refusalOf(pitch, unexplained, share)
   if (refused !== null) return refused
@@ -88,7 +91,7 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   return {
     ...pitch,
     confidence,
-    glide: glideOf(fits, rateHz),
+    glide: glideOf(fits, rateHz, sinceStrikeS),
     snrDb: snrDb(pitch, fits.best.noiseVariance * LOW_RATE_STEP),
     heardForS: (until - strikeAt) / sampleRateHz,
   }
@@ -101,9 +104,9 @@ function spectrumFrom(samples: Float32Array, from: number, to: number): Spectrum
   return spectrumOf(low, size)
 }
 
-function gliding({ samples, sampleRateHz, strikeAt, quiet }: StrikeToHear, end: number): HeardStrike | null {
+function gliding({ samples, sampleRateHz, strikeAt, quiet, expect }: StrikeToHear, end: number): HeardStrike | null {
   const heard = glidingPitch(samples, sampleRateHz, strikeAt, end)
-  if (heard === null) return null
+  if (heard === null || !isNearTarget(heard.pitchHz, expect)) return null
   const { pitchHz, standardErrorHz, t60S, amplitude, glide } = heard
   return {
     pitchHz,
@@ -127,11 +130,12 @@ function refusalOf(pitch: FittedPitch, unexplained: number, share: number | null
   return null
 }
 
-function glideOf({ best }: PitchFits, rateHz: number): TapGlide | null {
+function glideOf({ best }: PitchFits, rateHz: number, sinceStrikeS: number): TapGlide | null {
   if (best.kind !== 'glide') return null
   const [decay = 0, angle = 0, gamma = 0] = best.parameters
   const settledHz = (angle * rateHz) / (2 * Math.PI)
-  const overHz = (gamma * decay * rateHz) / Math.PI
+  // At the strike; it has faded with the energy since.
+  const overHz = ((gamma * decay * rateHz) / Math.PI) * Math.exp(2 * decay * rateHz * sinceStrikeS)
   return { cents: 1200 * Math.log2(Math.max(0.5, 1 + overHz / settledHz)), settledHz }
 }
 

@@ -1,10 +1,10 @@
 import type { DampedPartial } from './damped-partial'
-import { addPartial } from './damped-partial'
+import { addPartial, peakHeight } from './damped-partial'
 import { fitOne, HIGHEST_HZ } from './find-partials'
 import type { Band, BandFit } from './fit-band'
 import { BandFitter } from './fit-band'
 import { findHiddenPartial } from './hidden-partial'
-import { couldPair, isPair } from './pair-of-partials'
+import { isPair, WIDEST_PAIR_HZ } from './pair-of-partials'
 import { parametersOf } from './partial-shape'
 import type { PitchFits } from './pitch-models'
 import { fitPitchModels } from './pitch-models'
@@ -14,6 +14,8 @@ import type { Spectrum } from './spectrum'
 const NEIGHBOUR_HZ = 130
 /** The joint band reaches this far past its outermost partial, Hz. */
 const MARGIN_HZ = 20
+/** How much more than a fit of many partials a glide may leave and still be believed. */
+const GLIDE_LEAVES = 1.5
 const MOST_ROUNDS = 4
 
 /**
@@ -38,8 +40,11 @@ export function fitPitchAmongNeighbours(
     all.filter((partial) => awayHz(partial) > NEIGHBOUR_HZ),
   )
   const [first = chosen, ...others] = near
-  // What lies in the pair's own place is left to the pitch's models: fitted one by one, a pair comes apart wrongly.
-  const inPlace = others.filter((one) => couldPair(first, one, rateHz))
+  // What lies in the pair's own place is left to the pitch's models: fitted one by one, a pair comes apart wrongly. A note that
+  // is there too stands out later.
+  const inPlace = others
+    .filter((one) => awayHz(one) <= WIDEST_PAIR_HZ)
+    .sort((a, b) => peakHeight(b, spectrum.count) - peakHeight(a, spectrum.count))
   let beside: readonly DampedPartial[] = others.filter((one) => !inPlace.includes(one))
   for (let round = 0; ; round++) {
     const fits = fitPitchModels(without(cleared, rateHz, beside), rateHz, first, inPlace[0] ?? null)
@@ -48,10 +53,27 @@ export function fitPitchAmongNeighbours(
     const more = round < MOST_ROUNDS ? findHiddenPartial(cleared, joint.band, rateHz, joint.fit) : null
     if (more === null) {
       const { residual, energy } = fits.best
-      return { ...fits, best: { ...joint.fit, residual, energy } }
+      return glideAlone(spectrum, rateHz, all, first, residual) ?? { ...fits, best: { ...joint.fit, residual, energy } }
     }
     beside = neighboursOf(more)
   }
+}
+
+/**
+ * The fits with nothing taken out of the pitch's own place, when a glide then leaves hardly more than the partials into which
+ * it otherwise comes apart.
+ */
+function glideAlone(
+  spectrum: Spectrum,
+  rateHz: number,
+  all: readonly DampedPartial[],
+  pitch: DampedPartial,
+  residual: number,
+): PitchFits | null {
+  const apart = (2 * Math.PI * WIDEST_PAIR_HZ) / rateHz
+  const others = all.filter(({ angle }) => Math.abs(angle - pitch.angle) > apart)
+  const fits = fitPitchModels(without(spectrum, rateHz, others), rateHz, pitch, null)
+  return fits?.best.kind === 'glide' && fits.best.residual < GLIDE_LEAVES * residual ? fits : null
 }
 
 /** The best model with the neighbours; plain where a pair does not stay one beside them. */

@@ -9,6 +9,8 @@ import type { Spectrum } from './spectrum'
 const BAND_HZ = 20
 /** Splits that are tried, Hz. */
 const SPLITS_HZ = [0.5, 1, 1.6, 2.4, 3.4, 4.6, 6, 8, 10, 12]
+/** Glides that are tried, rad of phase in all. */
+const GLIDE_STARTS = [-0.3, -0.1, 0.05, 0.1, 0.2, 0.35, 0.6, 1, 1.7, 3]
 /** Fewer independent numbers than this in the band say nothing about a pair or a glide. */
 const LEAST_FREEDOM = 16
 /** How much a richer model must gain, twice the log likelihood, to be tried and to be believed. */
@@ -80,10 +82,8 @@ function tryStarts(
 }
 
 function glideStarts({ parameters: [d = 0, w = 0] }: BandFit): Float64Array[] {
-  return [-0.3, 0.1, 0.3, 0.8, 2].flatMap((gamma) => {
-    // The one partial's angle is the glide's at about the middle of its energy, where half the glide is over.
-    return [Float64Array.of(d, w, gamma), Float64Array.of(d, w - d * gamma, gamma)]
-  })
+  // The one partial stands where its energy does, where half the glide is over.
+  return GLIDE_STARTS.map((gamma) => Float64Array.of(d, w - 0.5 * d * gamma, gamma))
 }
 
 /** Bin of the band, counted from its first, where the one partial leaves most. */
