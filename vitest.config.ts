@@ -18,6 +18,7 @@ export default defineConfig({
           environment: 'node',
           // PDFs and real clusters are slow on a loaded machine; a limit is for what hangs.
           testTimeout: 60_000,
+          hookTimeout: 60_000,
         },
       },
       {

@@ -2,7 +2,7 @@ const span = (from: number, to: number) =>
   Array.from({ length: to - from + 1 }, (_, i) => String.fromCodePoint(from + i))
 
 /** Signs of the trade and of punctuation that the product prints beside letters and digits. */
-const signs = '♯♭♮Δ≤≥→←↑↓Ω±×÷≠°µ·•–—−’‘“”…½¼¾²³∓√θβσπνρελ∞≈€'
+const signs = '♯♭♮Δ≤≥→←↑↓Ω±×÷≠°µ·•–—−’‘“”…½¼¾²³∓√θβσπνρελμχγωκφΣ′∞≈€'
 
 /**
  * Every character the product can print on a page or in a PDF: ASCII, Latin-1, Latin Extended-A and the signs above.

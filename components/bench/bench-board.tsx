@@ -3,7 +3,7 @@ import { classes } from '@/components/ui/classes'
 import { headStandingWords, headView, standingSignOff } from '@/lib/client/bench/head-view'
 import type { Bench, BenchDrum, BenchHead } from '@/lib/contracts/bench'
 import { outWords } from '@/lib/tuning/head-state-words'
-import { clockWords, headCautionWords, hzWords } from './bench-words'
+import { clockWords, gaugeWords, headCautionWords, hzWords } from './bench-words'
 import { HeadTrace } from './head-trace'
 import { ReadingLog } from './reading-log'
 
@@ -94,7 +94,7 @@ function HeadBoard({ bench, drum, head }: { bench: Bench; drum: BenchDrum; head:
             {head.note.name} {hzWords(head.note.hz)} Hz
           </Fact>
         )}
-        {head.gauge !== null && <Fact name="gauge">{head.gauge}</Fact>}
+        {head.gauge !== null && <Fact name="gauge">{gaugeWords(head.gauge)}</Fact>}
         {state.mean !== null && (
           <Fact name="mean">
             {view.basis === 'gauge' ? `${state.mean.toFixed(1)} on the gauge` : `${hzWords(state.mean)} Hz`}

@@ -12,6 +12,12 @@ export function readingWords({ value, unit }: { value: number; unit: 'Hz' | 'cen
   return unit === 'Hz' ? `${figure} Hz` : `${value > 0 ? '+' : ''}${figure} cents`
 }
 
+/** A gauge's starting reading in a line: "72 (70–74)", "75, as noted". */
+export function gaugeWords(gauge: NonNullable<BenchHead['gauge']>): string {
+  if (gauge.kind === 'noted') return `${gauge.reading}, as noted`
+  return gauge.bounds === null ? gauge.reading : `${gauge.reading} (${gauge.bounds})`
+}
+
 /** Where the sheet comes from: "Revision 7 of full rig, sent to this show". */
 export function sheetWords({ rig, sheet }: Pick<Bench, 'rig' | 'sheet'>): string {
   if (!sheet) return `No revision of ${rig} yet`

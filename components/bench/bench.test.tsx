@@ -7,7 +7,13 @@ import { hzWords, readingWords, sheetWords } from './bench-words'
 import { HeadPage } from './head-page'
 
 const head = (side: BenchHead['side'], more: Partial<BenchHead> = {}): BenchHead => ({
-  ...{ side, words: '10 mil one-ply coated', note: { hz: 146.832, name: 'D3', cents: 0 }, rodPullN: 300, gauge: 75 },
+  ...{
+    side,
+    words: '10 mil one-ply coated',
+    note: { hz: 146.832, name: 'D3', cents: 0 },
+    rodPullN: 300,
+    gauge: { kind: 'noted', reading: '75' },
+  },
   ...{ tap: { hz: 256, name: 'C4', lowHz: 246, highHz: 262 }, cautions: [], without: null },
   ...more,
 })
@@ -19,6 +25,7 @@ const tom: BenchDrum = {
     sizeWords: '12 in across, 8 deep',
     lugCount: 6,
     toleranceCents: 10,
+    warbleLimitHz: 1,
   },
   lugAnglesRad: [1, 3, 5, 7, 9, 11].map((share) => (share * Math.PI) / 6),
   ...{ muffling: '', relationWords: 'both heads at one pitch', instead: null, missing: false },

@@ -15,6 +15,18 @@ export function HeadTarget({ drum, head, readBy }: { drum: BenchDrum; head: Benc
           {drum.relationWords && <span className="text-soft">; {drum.relationWords}</span>}
         </p>
       )}
+      <p className="mt-1">
+        Even: every lug within{' '}
+        {readBy === 'gauge' ? (
+          '1 on the gauge'
+        ) : (
+          <>
+            {drum.toleranceCents} cents
+            {head.tap && <span className="text-soft"> (±{toleranceHz(head.tap.hz, drum.toleranceCents)} Hz)</span>}
+          </>
+        )}
+        , warble under {drum.warbleLimitHz} a second.
+      </p>
       <p className="mt-2 text-soft">
         {readBy === 'gauge'
           ? 'Gauge readings are relative to that gauge: they even the head, they do not name the note. Set it beside each lug, an inch from the hoop.'
@@ -22,6 +34,10 @@ export function HeadTarget({ drum, head, readBy }: { drum: BenchDrum; head: Benc
       </p>
     </section>
   )
+}
+
+function toleranceHz(tapHz: number, cents: number): string {
+  return (tapHz * (2 ** (cents / 1200) - 1)).toFixed(1)
 }
 
 function TapTarget({ head }: { head: BenchHead }) {
@@ -43,16 +59,29 @@ function TapTarget({ head }: { head: BenchHead }) {
   )
 }
 
-function GaugeTarget({ gauge }: { gauge: number | null }) {
+function GaugeTarget({ gauge }: { gauge: BenchHead['gauge'] }) {
   if (gauge === null)
     return <p className="text-lg">No gauge reading was noted for this head: bring every lug to one reading.</p>
+  const foretold = gauge.kind === 'foretold'
   return (
     <>
-      <p className="text-soft">The drum tech’s own gauge read</p>
+      <p className="text-soft">{foretold ? `${gauge.gauge} should read` : 'The drum tech’s own gauge read'}</p>
       <p className="figures text-6xl leading-none font-bold">
-        {gauge}
+        {gauge.reading}
         <span className="text-3xl"> on the gauge</span>
       </p>
+      {foretold && (
+        <p className="mt-1 text-soft">
+          {gauge.bounds === null ? (
+            gauge.outside
+          ) : (
+            <>
+              <span className="figures">{gauge.bounds}</span> is where it may truly lie. Another gauge, or another hand,
+              reads otherwise.
+            </>
+          )}
+        </p>
+      )}
     </>
   )
 }

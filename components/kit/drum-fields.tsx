@@ -68,6 +68,7 @@ export function DrumFields({ reader }: { reader: NoteReader }) {
             hint="batter tap ÷ note, heads as they stand"
           />
           <TextField path="spec.toleranceCents" label="Even within" unit="cents" hint="how far a lug may stand off" />
+          <TextField path="spec.warbleLimitHz" label="Warble under" unit="a second" hint="beats that are let pass" />
           <TextField path="spec.muffling" label="Muffling" optional />
         </div>
         <Checkbox

@@ -1,6 +1,6 @@
 import { MOST_WARBLE_HZ } from '@/lib/acoustics/drum-tuning'
 import type { DrumTuning } from '@/lib/acoustics/drum-tuning'
-import { hertz } from './figure-words'
+import { hertz } from '@/lib/acoustics/figure-words'
 
 /** What belongs to the drum and not to one head: tap over note, the upper partner, how long it may sound, the false warble. */
 export function DrumFigures({ tuning }: { tuning: DrumTuning }) {

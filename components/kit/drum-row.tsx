@@ -7,7 +7,7 @@ import { noteText } from '@/lib/contracts/kit-form'
 import { drumEstimate } from '@/lib/tuning/drum-estimate'
 import { headRelationWords } from '@/lib/tuning/interval-name'
 import { insteadWords } from './entry-particulars'
-import { hertz } from './figure-words'
+import { hertz } from '@/lib/acoustics/figure-words'
 import { HeadLine } from './head-line'
 import type { KitReader } from './kit-reader'
 
@@ -57,7 +57,9 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
           <HeadLine side="batter" head={spec.batter} estimate={estimate} />
           <HeadLine side="resonant" head={spec.resonant} estimate={estimate} />
         </dl>
-        {spec.resonant && <p className="mt-0.5 text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>}
+        {spec.resonant && !spec.ported && (
+          <p className="mt-0.5 text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>
+        )}
       </div>
       <div className="max-xl:row-start-2 max-xl:justify-self-end">{actions}</div>
     </div>

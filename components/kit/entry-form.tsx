@@ -153,6 +153,7 @@ const words: Record<string, string> = {
     headRelationCents: 'resonant over batter',
     measuredTapRatio: 'tap over note',
     toleranceCents: 'even within',
+    warbleLimitHz: 'warble under',
     insteadOf: 'instead of',
     type: 'kind',
   },

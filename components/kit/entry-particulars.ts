@@ -55,6 +55,7 @@ function specParticulars(entry: EntryInput, reader: KitReader): Particular[] {
           words: spec.measuredTapRatio === null ? 'not measured' : String(spec.measuredTapRatio),
         },
         { label: 'Tolerance', words: `${spec.toleranceCents} cents` },
+        { label: 'Warble limit', words: `${spec.warbleLimitHz} a second` },
         { label: 'Muffling', words: spec.muffling },
         { label: 'May come instead', words: spec.insteadOf ? insteadWords(spec.insteadOf) : 'nothing else' },
       ]

@@ -1,7 +1,7 @@
 import type { DrumTuning, HeadTuning } from '@/lib/acoustics/drum-tuning'
 import type { Estimated } from '@/lib/acoustics/estimated'
 import type { Head } from '@/lib/contracts/kit'
-import { hertz, kilonewtons } from './figure-words'
+import { hertz, kilonewtons } from '@/lib/acoustics/figure-words'
 import { cautionWords } from './plan-words'
 
 export interface HeadFiguresProps {

@@ -1,7 +1,7 @@
 import { headWords } from '@/lib/advance/kit-words'
 import type { Head } from '@/lib/contracts/kit'
 import type { DrumEstimate } from '@/lib/tuning/drum-estimate'
-import { hertz } from './figure-words'
+import { hertz } from '@/lib/acoustics/figure-words'
 
 export interface HeadLineProps {
   side: 'batter' | 'resonant'

@@ -2,7 +2,7 @@ import { useWatch } from 'react-hook-form'
 import { noteFrequencyHz } from '@/lib/acoustics/note'
 import type { NoteReader } from '@/lib/contracts/kit-form'
 import { noteText, noteValue } from '@/lib/contracts/kit-form'
-import { hertz } from './figure-words'
+import { hertz } from '@/lib/acoustics/figure-words'
 import { TextField } from './text-field'
 
 /** Examples in the party's own note names: a B is another note to a German reader. */

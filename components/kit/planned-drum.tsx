@@ -4,7 +4,7 @@ import { drumEstimate } from '@/lib/tuning/drum-estimate'
 import type { TuningStage } from '@/lib/tuning/drum-estimate'
 import { headRelationWords } from '@/lib/tuning/interval-name'
 import { DrumFigures } from './drum-figures'
-import { hertz } from './figure-words'
+import { hertz } from '@/lib/acoustics/figure-words'
 import { HeadFigures } from './head-figures'
 import type { KitReader } from './kit-reader'
 import type { Standing } from './notes/standing'
@@ -57,7 +57,7 @@ export function PlannedDrum({ drum, was, standings, reader, stage }: PlannedDrum
         {estimate && spec.resonant && (
           <div>
             <HeadFigures side="resonant" head={spec.resonant} tuning={estimate.tuning} />
-            <p className="text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>
+            {!spec.ported && <p className="text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>}
           </div>
         )}
       </div>

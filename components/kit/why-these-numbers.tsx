@@ -2,7 +2,7 @@ import { tuningCautions } from '@/lib/advance/cautions'
 import type { DrumTuningInput } from '@/lib/acoustics/drum-tuning'
 import { explainDrumTuning } from '@/lib/acoustics/explain-drum-tuning'
 import type { ExplainedFigure } from '@/lib/acoustics/explained-figure'
-import { figureWords } from './figure-words'
+import { figureWords } from '@/lib/acoustics/figure-words'
 
 /** Every figure of a drum with its formula, what went in, its bounds, how far it can be trusted and where it comes from. */
 export function WhyTheseNumbers({ name, input }: { name: string; input: DrumTuningInput }) {

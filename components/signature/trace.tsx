@@ -44,7 +44,21 @@ function points(line: readonly { x: number; y: number }[]): string {
  * outside it is marked by its shape and by a word.
  */
 export function Trace(props: TraceProps) {
-  const { label, lugs, outline, bandInner, bandOuter, centre, highlightLugs = [], nowLug, badge, order, small = false, mode, className } = props
+  const {
+    label,
+    lugs,
+    outline,
+    bandInner,
+    bandOuter,
+    centre,
+    highlightLugs = [],
+    nowLug,
+    badge,
+    order,
+    small = false,
+    mode,
+    className,
+  } = props
   const inner = round(bandInner * targetRadius)
   const outer = round(Math.min(bandOuter * targetRadius, headRadius))
   const steps =
@@ -52,7 +66,12 @@ export function Trace(props: TraceProps) {
   return (
     <div data-theme={mode} className={classes('mx-auto w-full max-w-md', className)}>
       <div className="relative aspect-square">
-        <svg role="img" aria-label={label} viewBox={small ? '-116 -116 232 232' : '-134 -134 268 268'} className="block w-full">
+        <svg
+          role="img"
+          aria-label={label}
+          viewBox={small ? '-116 -116 232 232' : '-134 -134 268 268'}
+          className="block w-full"
+        >
           <g fill="none" stroke="currentColor" className="text-ink">
             <circle r={hoopRadius} strokeWidth={1.6} />
             <circle r={hoopRadius - 4} strokeWidth={1.6} />

@@ -59,7 +59,11 @@ export type LineState = {
  * is asked now stands, whoever gave it; an answer to other words never does. A decision holds for its own answer only, and the
  * latest one about that answer counts. Events of other lines are ignored.
  */
-export function deriveLineStates(lines: readonly AnsweredLine[], said: readonly SaidAnswer[], decided: readonly Decision[]): LineState[] {
+export function deriveLineStates(
+  lines: readonly AnsweredLine[],
+  said: readonly SaidAnswer[],
+  decided: readonly Decision[],
+): LineState[] {
   const answers = groupByLine(said)
   const decisions = groupByLine(decided)
   return lines.map((line) => {
@@ -68,7 +72,9 @@ export function deriveLineStates(lines: readonly AnsweredLine[], said: readonly 
     const answer = history.findLast((entry) => entry.lineHash === line.hash)
     if (!answer) {
       const older = history.at(-1)
-      return older ? { ...common, state: 'changed since', answer: older } : { ...common, state: 'unanswered', askedAgain: null }
+      return older
+        ? { ...common, state: 'changed since', answer: older }
+        : { ...common, state: 'unanswered', askedAgain: null }
     }
     const decision = decisions.get(line.lineId)?.findLast((entry) => entry.answerEventId === answer.id)
     if (!decision) return { ...common, state: 'answered', answer }
@@ -78,7 +84,9 @@ export function deriveLineStates(lines: readonly AnsweredLine[], said: readonly 
   })
 }
 
-function groupByLine<Event extends { readonly lineId: string; readonly sequence: number }>(events: readonly Event[]): Map<string, Event[]> {
+function groupByLine<Event extends { readonly lineId: string; readonly sequence: number }>(
+  events: readonly Event[],
+): Map<string, Event[]> {
   const groups = new Map<string, Event[]>()
   for (const event of [...events].sort((a, b) => a.sequence - b.sequence)) {
     const group = groups.get(event.lineId)

@@ -4,7 +4,13 @@ import type { AnswerContent, InsteadWhat } from './answer'
 import { answerCount, answerFault, answerWords, asAskedAnswer, insteadKind, insteadWords } from './answer'
 
 const tom: InsteadWhat = { kind: 'drum', diameterIn: 13, depthIn: 9, lugs: 6, words: '' }
-const answer = (part: Partial<AnswerContent>): AnswerContent => ({ asAsked: 0, instead: [], notYet: [], cant: 0, ...part })
+const answer = (part: Partial<AnswerContent>): AnswerContent => ({
+  asAsked: 0,
+  instead: [],
+  notYet: [],
+  cant: 0,
+  ...part,
+})
 const plainDate = (date: string) => date
 
 /** Splits a count into four heaps: whatever the split, the answer is whole. */
@@ -32,11 +38,15 @@ describe('answerFault', () => {
 
   it('refuses every answer whose counts are not the count asked for, and says both numbers', () => {
     fc.assert(
-      fc.property(split, fc.integer({ min: -10, max: 10 }).filter((off) => off !== 0), ({ count, content }, off) => {
-        const fault = answerFault(content, { kind: 'hardware', count: count + off })
-        expect(fault).toContain(String(count))
-        expect(fault).toContain(String(count + off))
-      }),
+      fc.property(
+        split,
+        fc.integer({ min: -10, max: 10 }).filter((off) => off !== 0),
+        ({ count, content }, off) => {
+          const fault = answerFault(content, { kind: 'hardware', count: count + off })
+          expect(fault).toContain(String(count))
+          expect(fault).toContain(String(count + off))
+        },
+      ),
     )
   })
 
@@ -60,15 +70,31 @@ describe('answerFault', () => {
     ['a drum of five inches', answer({ instead: [{ n: 1, what: { ...tom, diameterIn: 5 } }] }), 'drum', 1],
     ['a depth of a third of an inch', answer({ instead: [{ n: 1, what: { ...tom, depthIn: 8.3 } }] }), 'drum', 1],
     ['a size that is no number', answer({ instead: [{ n: 1, what: { ...tom, depthIn: Number.NaN } }] }), 'drum', 1],
-    ['a cymbal of thirty inches', answer({ instead: [{ n: 1, what: { kind: 'cymbal', diameterIn: 30, words: '' } }] }), 'cymbal', 1],
-    ['nothing said of what comes', answer({ instead: [{ n: 1, what: { kind: 'other', words: '  ' } }] }), 'microphone', 1],
+    [
+      'a cymbal of thirty inches',
+      answer({ instead: [{ n: 1, what: { kind: 'cymbal', diameterIn: 30, words: '' } }] }),
+      'cymbal',
+      1,
+    ],
+    [
+      'nothing said of what comes',
+      answer({ instead: [{ n: 1, what: { kind: 'other', words: '  ' } }] }),
+      'microphone',
+      1,
+    ],
   ])('refuses %s', (_, content, kind, count) => {
     expect(answerFault(content, { kind, count })).toEqual(expect.any(String))
   })
 
   it('takes the edges of every size', () => {
-    for (const [diameterIn, depthIn] of [[6, 3], [28, 24], [12.25, 5.5]] as const) {
-      expect(answerFault(answer({ instead: [{ n: 1, what: { ...tom, diameterIn, depthIn } }] }), { kind: 'drum', count: 1 })).toBeNull()
+    for (const [diameterIn, depthIn] of [
+      [6, 3],
+      [28, 24],
+      [12.25, 5.5],
+    ] as const) {
+      expect(
+        answerFault(answer({ instead: [{ n: 1, what: { ...tom, diameterIn, depthIn } }] }), { kind: 'drum', count: 1 }),
+      ).toBeNull()
     }
   })
 })
@@ -76,7 +102,9 @@ describe('answerFault', () => {
 describe('words', () => {
   it('says one thing without a count and several with their counts', () => {
     expect(answerWords(asAskedAnswer(1), plainDate)).toBe('as asked')
-    expect(answerWords(answer({ asAsked: 6, notYet: [{ n: 2, by: '2031-10-05' }] }), plainDate)).toBe('6 as asked; 2 not yet, by 2031-10-05')
+    expect(answerWords(answer({ asAsked: 6, notYet: [{ n: 2, by: '2031-10-05' }] }), plainDate)).toBe(
+      '6 as asked; 2 not yet, by 2031-10-05',
+    )
     expect(answerWords(answer({ instead: [{ n: 1, what: { ...tom, words: ' birch ' } }] }), plainDate)).toBe(
       'instead: 13 in across, 9 deep, 6 lugs, birch',
     )
@@ -98,6 +126,12 @@ describe('words', () => {
   })
 
   it('asks for sizes of drums and cymbals, and for a sentence of all else', () => {
-    expect(['drum', 'cymbal', 'hardware', 'microphone', 'of a later release'].map(insteadKind)).toEqual(['drum', 'cymbal', 'other', 'other', 'other'])
+    expect(['drum', 'cymbal', 'hardware', 'microphone', 'of a later release'].map(insteadKind)).toEqual([
+      'drum',
+      'cymbal',
+      'other',
+      'other',
+      'other',
+    ])
   })
 })

@@ -5,7 +5,13 @@ import { inchWords } from './kit-words'
  * Sizes are nominal inches; `words` says what sizes cannot (shell, condition, where it differs).
  */
 export type InsteadWhat =
-  | { readonly kind: 'drum'; readonly diameterIn: number; readonly depthIn: number; readonly lugs: number; readonly words: string }
+  | {
+      readonly kind: 'drum'
+      readonly diameterIn: number
+      readonly depthIn: number
+      readonly lugs: number
+      readonly words: string
+    }
   | { readonly kind: 'cymbal'; readonly diameterIn: number; readonly words: string }
   | { readonly kind: 'other'; readonly words: string }
 
@@ -43,7 +49,12 @@ export function answerFault(
   line: { readonly kind: string; readonly count: number },
   today: string | null = null,
 ): string | null {
-  const counts = [content.asAsked, content.cant, ...content.instead.map((part) => part.n), ...content.notYet.map((part) => part.n)]
+  const counts = [
+    content.asAsked,
+    content.cant,
+    ...content.instead.map((part) => part.n),
+    ...content.notYet.map((part) => part.n),
+  ]
   if (counts.some((count) => !Number.isInteger(count) || count < 0)) return 'counts are whole numbers from 0'
   if ([...content.instead, ...content.notYet].some((part) => part.n === 0)) return 'each part speaks of at least 1'
   if (answerCount(content) !== line.count) {
@@ -63,11 +74,15 @@ export function answerFault(
 function insteadFault(what: InsteadWhat): string | null {
   switch (what.kind) {
     case 'drum':
-      if (!isSize(what.diameterIn, insteadDrumRange.diameterIn)) return 'a drum is 6 to 28 in across, in whole or quarter inches'
-      if (!isSize(what.depthIn, insteadDrumRange.depthIn)) return 'a drum is 3 to 24 in deep, in whole or quarter inches'
+      if (!isSize(what.diameterIn, insteadDrumRange.diameterIn))
+        return 'a drum is 6 to 28 in across, in whole or quarter inches'
+      if (!isSize(what.depthIn, insteadDrumRange.depthIn))
+        return 'a drum is 3 to 24 in deep, in whole or quarter inches'
       return (insteadLugCounts as readonly number[]).includes(what.lugs) ? null : 'a head has 4, 5, 6, 8, 10 or 12 lugs'
     case 'cymbal':
-      return isSize(what.diameterIn, insteadCymbalRange.diameterIn) ? null : 'a cymbal is 6 to 26 in across, in whole or quarter inches'
+      return isSize(what.diameterIn, insteadCymbalRange.diameterIn)
+        ? null
+        : 'a cymbal is 6 to 26 in across, in whole or quarter inches'
     case 'other':
       return what.words.trim() === '' ? 'say what comes instead' : null
   }
@@ -94,7 +109,10 @@ export function insteadWords(what: InsteadWhat): string {
   const words = what.words.trim()
   switch (what.kind) {
     case 'drum':
-      return withWords(`${inchWords(what.diameterIn)} in across, ${inchWords(what.depthIn)} deep, ${what.lugs} lugs`, words)
+      return withWords(
+        `${inchWords(what.diameterIn)} in across, ${inchWords(what.depthIn)} deep, ${what.lugs} lugs`,
+        words,
+      )
     case 'cymbal':
       return withWords(`${inchWords(what.diameterIn)} in`, words)
     case 'other':

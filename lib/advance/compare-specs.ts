@@ -1,4 +1,5 @@
 import { noteName } from '@/lib/acoustics/note-name'
+import { WARBLE_LIMIT_HZ } from '@/lib/tuning/warble-limit'
 import { piecesInOrder } from '@/plots/model/document'
 import { canonicalJson } from './canonical-json'
 import type { FrozenDrum, FrozenEntry, FrozenHead } from './frozen-kit'
@@ -69,7 +70,8 @@ function written(entry: FrozenEntry): FrozenEntry {
   const head = (of: FrozenHead) => ({ ...of, range: of.range ?? null })
   const resonant = spec.resonant && head(spec.resonant)
   const measuredTapRatio = spec.measuredTapRatio ?? null
-  return { ...entry, spec: { ...spec, batter: head(spec.batter), resonant, measuredTapRatio } }
+  const warbleLimitHz = spec.warbleLimitHz ?? WARBLE_LIMIT_HZ
+  return { ...entry, spec: { ...spec, batter: head(spec.batter), resonant, measuredTapRatio, warbleLimitHz } }
 }
 
 /** All changes as one list of sentences, the most important first. */
@@ -156,12 +158,17 @@ function tuningDifferences(before: FrozenDrum, after: FrozenDrum, specBefore: Ri
   say('resonant head over batter', `${before.spec.headRelationCents} cents`, `${after.spec.headRelationCents} cents`)
   say('measured tap over note', ratio(before), ratio(after))
   say('tolerance', `${before.spec.toleranceCents} cents`, `${after.spec.toleranceCents} cents`)
+  say('warble limit', warbleWords(before), warbleWords(after))
   say('batter gauge', gauge(before.spec.batter), gauge(after.spec.batter))
   say('resonant gauge', gauge(before.spec.resonant), gauge(after.spec.resonant))
   say('batter range', rangeWords(before.spec.batter), rangeWords(after.spec.batter))
   say('resonant range', rangeWords(before.spec.resonant), rangeWords(after.spec.resonant))
   say('muffling', before.spec.muffling || 'none', after.spec.muffling || 'none')
   return differences
+}
+
+function warbleWords({ spec }: FrozenDrum): string {
+  return `${spec.warbleLimitHz ?? WARBLE_LIMIT_HZ} a second`
 }
 
 function ratio({ spec }: FrozenDrum): string {

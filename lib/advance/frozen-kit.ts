@@ -38,6 +38,8 @@ export interface FrozenDrumSpec {
   /** Batter tap over the drum's note as measured on this drum; absent or null: the model's. */
   readonly measuredTapRatio?: number | null
   readonly toleranceCents: number
+  /** Warble that is let pass, beats a second; absent: the usual limit. */
+  readonly warbleLimitHz?: number
   readonly muffling: string
   readonly insteadOf: SizeRange | null
 }

@@ -26,6 +26,7 @@ describe('what a line asks', () => {
     ['the lock on the note', withSpec({ noteLocked: true })],
     ['the relation of the heads', withSpec({ headRelationCents: 300 })],
     ['the measured tap ratio', withSpec({ measuredTapRatio: 1.7 })],
+    ['the warble limit', withSpec({ warbleLimitHz: 0.5 })],
     ['the tolerance', withSpec({ toleranceCents: 4 })],
     ['the muffling', withSpec({ muffling: 'one gel' })],
     [

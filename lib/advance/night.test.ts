@@ -33,8 +33,23 @@ const tom: FrozenDrum = {
     insteadOf: null,
   },
 }
-const crash: FrozenEntry = { id: 'entry-crash', position: 1, name: 'Crash', supply: 'venue', count: 2, remark: '', kind: 'cymbal', spec: { type: 'crash', diameterIn: 18 } }
-const kick: FrozenDrum = { ...tom, id: 'entry-kick', name: 'Kick', supply: 'carried', spec: { ...tom.spec, role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8 } }
+const crash: FrozenEntry = {
+  id: 'entry-crash',
+  position: 1,
+  name: 'Crash',
+  supply: 'venue',
+  count: 2,
+  remark: '',
+  kind: 'cymbal',
+  spec: { type: 'crash', diameterIn: 18 },
+}
+const kick: FrozenDrum = {
+  ...tom,
+  id: 'entry-kick',
+  name: 'Kick',
+  supply: 'carried',
+  spec: { ...tom.spec, role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8 },
+}
 const kit: FrozenEntry[] = [tom, crash, kick]
 
 const lines: RevisionLine[] = [tom, crash].flatMap((entry, index) => {
@@ -57,10 +72,24 @@ function state(entryId: string, content: AnswerContent, kind: 'answered' | 'sett
   }
   const common = { lineId: answer.lineId, history: [answer], answer }
   if (kind === 'answered') return { ...common, state: kind }
-  const decision = { id: 'd', sequence: 1, lineId: answer.lineId, answerEventId: 'a', decision: 'accept' as const, remark: '', byName: 'Tove', at: answer.at }
+  const decision = {
+    id: 'd',
+    sequence: 1,
+    lineId: answer.lineId,
+    answerEventId: 'a',
+    decision: 'accept' as const,
+    remark: '',
+    byName: 'Tove',
+    at: answer.at,
+  }
   return { ...common, state: kind, decision }
 }
-const instead = (what: InsteadWhat, n = 1): AnswerContent => ({ asAsked: 0, instead: [{ n, what }], notYet: [], cant: 0 })
+const instead = (what: InsteadWhat, n = 1): AnswerContent => ({
+  asAsked: 0,
+  instead: [{ n, what }],
+  notYet: [],
+  cant: 0,
+})
 const thirteen: InsteadWhat = { kind: 'drum', diameterIn: 13, depthIn: 9, lugs: 8, words: 'birch' }
 const plain = (entry: FrozenEntry) => ({ ...entry, instead: null, missing: 0 })
 
@@ -84,9 +113,15 @@ describe('nightKit', () => {
 
   it('takes a cymbal’s size only when all of them come so', () => {
     const twenty: InsteadWhat = { kind: 'cymbal', diameterIn: 20, words: '' }
-    expect(nightKit({ kit, lines }, [state('entry-crash', instead(twenty, 2), 'settled')])[1]).toMatchObject({ spec: { diameterIn: 20 } })
+    expect(nightKit({ kit, lines }, [state('entry-crash', instead(twenty, 2), 'settled')])[1]).toMatchObject({
+      spec: { diameterIn: 20 },
+    })
     const half = { ...instead(twenty), cant: 1 }
-    expect(nightKit({ kit, lines }, [state('entry-crash', half, 'settled')])[1]).toMatchObject({ spec: { diameterIn: 18 }, instead: null, missing: 1 })
+    expect(nightKit({ kit, lines }, [state('entry-crash', half, 'settled')])[1]).toMatchObject({
+      spec: { diameterIn: 18 },
+      instead: null,
+      missing: 1,
+    })
   })
 
   it('ignores what was settled for other words', () => {
@@ -107,7 +142,11 @@ describe('nightKit', () => {
         const [night] = nightKit({ kit, lines }, [state('entry-tom', instead(what), 'settled')])
         if (night?.kind !== 'drum') throw new Error('the tom is a drum')
         expect({ ...night.spec, diameterIn: 12, depthIn: 8, lugs: 6 }).toEqual(tom.spec)
-        expect([night.spec.diameterIn, night.spec.depthIn, night.spec.lugs]).toEqual([what.diameterIn, what.depthIn, what.lugs])
+        expect([night.spec.diameterIn, night.spec.depthIn, night.spec.lugs]).toEqual([
+          what.diameterIn,
+          what.depthIn,
+          what.lugs,
+        ])
         expect(JSON.stringify({ kit, lines })).toBe(frozen)
       }),
     )

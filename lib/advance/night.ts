@@ -18,12 +18,16 @@ export type NightEntry = FrozenEntry & {
  * settled diameter. A size is taken only when every piece of the line comes so: half of a count leaves the entry as it was asked
  * and `missing` and the answer say the rest. Only settled answers to the very words of this revision count. Nothing is stored.
  */
-export function nightKit(revision: Pick<RevisionDocument, 'kit' | 'lines'>, states: readonly LineState[]): NightEntry[] {
+export function nightKit(
+  revision: Pick<RevisionDocument, 'kit' | 'lines'>,
+  states: readonly LineState[],
+): NightEntry[] {
   const byLine = new Map(states.map((state) => [state.lineId, state]))
   const settled = new Map<string, AnswerContent>()
   for (const line of revision.lines) {
     const state = byLine.get(line.lineId)
-    if (state?.state === 'settled' && state.answer.lineHash === line.hash) settled.set(line.entryId, state.answer.content)
+    if (state?.state === 'settled' && state.answer.lineHash === line.hash)
+      settled.set(line.entryId, state.answer.content)
   }
   return revision.kit.map((entry) => nightEntry(entry, settled.get(entry.id)))
 }

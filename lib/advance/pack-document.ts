@@ -1,3 +1,4 @@
+import { WARBLE_LIMIT_HZ } from '@/lib/tuning/warble-limit'
 import type { KitPiece } from '@/plots/model/kit-piece'
 import type { PlotDocument, StageSize } from '@/plots/model/document'
 import { readDocument } from '@/plots/model/read-document'
@@ -113,14 +114,19 @@ export function upgradePackDocument(stored: unknown): PackDocument {
     : { ...document, sheets }
 }
 
-type LaterOfSheet = 'note' | 'figures' | 'heads'
-type LaterOfHead = 'tensionNPerM' | 'rodPullBoundsN'
-type StoredHead = Omit<SheetHead, LaterOfHead> & Partial<Pick<SheetHead, LaterOfHead>>
-type StoredSheet = Omit<TuningSheet, LaterOfSheet> &
-  Partial<Pick<TuningSheet, 'note' | 'figures'>> & { readonly heads: readonly StoredHead[] }
+type LaterOfSheet = 'note' | 'figures' | 'warbleLimitHz' | 'workedFrom'
+type LaterOfHead = 'tensionNPerM' | 'rodPullBoundsN' | 'toleranceHz'
+type StoredHead = Omit<SheetHead, LaterOfHead | 'gauge'> &
+  Partial<Pick<SheetHead, LaterOfHead>> & { readonly gauge: SheetHead['gauge'] | number }
+type StoredSheet = Omit<TuningSheet, LaterOfSheet | 'heads'> &
+  Partial<Pick<TuningSheet, LaterOfSheet>> & { readonly heads: readonly StoredHead[] }
 
 /** A sheet from before a drum's figures were worked out of both heads together: its batter's note is the drum's. */
 function filledIn(stored: StoredSheet): TuningSheet {
-  const heads = stored.heads.map((head) => ({ tensionNPerM: null, rodPullBoundsN: null, ...head }))
-  return { figures: null, ...stored, note: stored.note ?? heads[0]?.note ?? null, heads }
+  const heads = stored.heads.map((head) => ({
+    ...{ tensionNPerM: null, rodPullBoundsN: null, toleranceHz: null, ...head },
+    gauge: typeof head.gauge === 'number' ? ({ kind: 'noted', reading: String(head.gauge) } as const) : head.gauge,
+  }))
+  const later = { figures: null, workedFrom: null, warbleLimitHz: WARBLE_LIMIT_HZ }
+  return { ...later, ...stored, note: stored.note ?? heads[0]?.note ?? null, heads }
 }

@@ -83,17 +83,26 @@ describe('a venue’s pack', () => {
 describe('a pack from before both heads were worked out together', () => {
   it('is read with what it has: its batter’s note is the drum’s, figures that it lacks are none', () => {
     const pack = compose(venue)
-    const older = pack.sheets.map(({ note: _note, figures: _figures, heads, ...sheet }) => ({
-      ...sheet,
-      heads: heads.map(({ tensionNPerM: _tension, rodPullBoundsN: _bounds, ...head }) => head),
-    }))
+    const older = pack.sheets.map(
+      ({ note: _note, figures: _figures, warbleLimitHz: _limit, workedFrom: _from, heads, ...sheet }) => ({
+        ...sheet,
+        heads: heads.map(({ tensionNPerM: _tension, rodPullBoundsN: _bounds, toleranceHz: _hz, ...head }) => ({
+          ...head,
+          gauge: 75,
+        })),
+      }),
+    )
     const read = upgradePackDocument(JSON.parse(JSON.stringify({ ...pack, sheets: older })))
     expect(read.sheets.map(({ note, figures }) => [note?.name, figures])).toEqual(
       pack.sheets.map(({ note }) => [note?.name, null]),
     )
     for (const head of read.sheets.flatMap(({ heads }) => heads)) {
-      expect(head).toMatchObject({ tensionNPerM: null, rodPullBoundsN: null })
+      expect(head).toMatchObject({ tensionNPerM: null, rodPullBoundsN: null, toleranceHz: null })
+      expect(head.gauge).toEqual({ kind: 'noted', reading: '75' })
     }
+    expect(read.sheets.map(({ workedFrom, warbleLimitHz }) => [workedFrom, warbleLimitHz])).toEqual(
+      pack.sheets.map(() => [null, 1]),
+    )
     expect(read.sheets[2]?.heads[0]?.tap).toEqual(pack.sheets[2]?.heads[0]?.tap)
   })
 })

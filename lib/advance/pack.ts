@@ -1,4 +1,6 @@
 import { STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
+import { tryCalibration } from '@/lib/tuning/gauge-of-head'
+import { WARBLE_LIMIT_HZ } from '@/lib/tuning/warble-limit'
 import { outputsOf, pieceName } from '@/plots/symbols/piece-kinds'
 import { packCautions } from './cautions'
 import { changeSentences, compareSpecs } from './compare-specs'
@@ -35,6 +37,7 @@ export function composePack(input: PackInput): PackDocument {
   const audience = recipient.kind
   const shows = recipient.kind === 'venue' ? [recipient.show] : recipient.shows
   const place = recipient.kind === 'venue' ? recipient.show.venue : recipient.hire.supplier
+  const calibration = document.gauge && tryCalibration(document.gauge).calibration
   return {
     schemaVersion: PACK_SCHEMA_VERSION,
     audience,
@@ -66,6 +69,7 @@ export function composePack(input: PackInput): PackDocument {
                 locale: recipient.locale,
                 units: document.party.units,
                 referenceHz: document.party.referenceHz,
+                calibration,
               }),
             )
         : [],
@@ -135,6 +139,7 @@ function untuned(entry: FrozenEntry): FrozenEntry {
       headRelationCents: 0,
       measuredTapRatio: null,
       toleranceCents: 0,
+      warbleLimitHz: WARBLE_LIMIT_HZ,
       muffling: '',
       batter: { ...spec.batter, gauge: null, range: null },
       resonant: spec.resonant && { ...spec.resonant, gauge: null, range: null },

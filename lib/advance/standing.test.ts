@@ -25,7 +25,16 @@ const answer = (lineId: string, more: Partial<SaidAnswer> = {}): SaidAnswer => (
   at: later,
   ...more,
 })
-const decision: Decision = { id: 'd', sequence: 1, lineId: 'tom', answerEventId: 'a-tom', decision: 'accept', remark: '', byName: 'Tove', at: later }
+const decision: Decision = {
+  id: 'd',
+  sequence: 1,
+  lineId: 'tom',
+  answerEventId: 'a-tom',
+  decision: 'accept',
+  remark: '',
+  byName: 'Tove',
+  at: later,
+}
 
 const open = (lineId: string): LineState => ({ lineId, history: [], state: 'unanswered', askedAgain: null })
 const again = (lineId: string): LineState => ({
@@ -40,8 +49,19 @@ const answered = (lineId: string, more: Partial<SaidAnswer> = {}): LineState => 
   state: 'answered',
   answer: answer(lineId, more),
 })
-const settled = (lineId: string): LineState => ({ lineId, history: [answer(lineId)], state: 'settled', answer: answer(lineId), decision })
-const changed = (lineId: string): LineState => ({ lineId, history: [answer(lineId, { at: before })], state: 'changed since', answer: answer(lineId, { at: before }) })
+const settled = (lineId: string): LineState => ({
+  lineId,
+  history: [answer(lineId)],
+  state: 'settled',
+  answer: answer(lineId),
+  decision,
+})
+const changed = (lineId: string): LineState => ({
+  lineId,
+  history: [answer(lineId, { at: before })],
+  state: 'changed since',
+  answer: answer(lineId, { at: before }),
+})
 
 function standing(more: Partial<StandingFacts>) {
   return recipientStanding({
@@ -123,7 +143,13 @@ describe('recipientStanding', () => {
 })
 
 describe('mailFate', () => {
-  const mail = (more: Partial<MailFacts>): MailFacts => ({ sentAt, cancelledAt: null, failedAt: null, told: [], ...more })
+  const mail = (more: Partial<MailFacts>): MailFacts => ({
+    sentAt,
+    cancelledAt: null,
+    failedAt: null,
+    told: [],
+    ...more,
+  })
 
   it.each<[string, Partial<MailFacts>, string]>([
     ['waits in the outbox', { sentAt: null }, 'waiting'],
@@ -162,7 +188,11 @@ describe('countLines', () => {
     ]
     const states = [settled('a'), answered('b'), open('c'), changed('d'), open('e')]
     expect(countLines(asked, sent, states)).toEqual({ settled: 1, waiting: 1, changed: 3 })
-    expect(countLines(asked.slice(0, 1), [{ lineId: 'a', hash: 'h1' }], states)).toEqual({ settled: 1, waiting: 0, changed: 0 })
+    expect(countLines(asked.slice(0, 1), [{ lineId: 'a', hash: 'h1' }], states)).toEqual({
+      settled: 1,
+      waiting: 0,
+      changed: 0,
+    })
   })
 })
 

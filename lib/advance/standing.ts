@@ -1,7 +1,8 @@
 import type { AnsweredLine, LineState } from './answer-state'
 
 /** Where a recipient stands with what was sent. Always derived, never stored. */
-export type Standing = 'not sent' | 'out' | 'not delivered' | 'overdue' | 'part answered' | 'answered' | 'settled' | 'changed since'
+export type Standing =
+  'not sent' | 'out' | 'not delivered' | 'overdue' | 'part answered' | 'answered' | 'settled' | 'changed since'
 
 /** What is known of one mail. Instants in ISO 8601. */
 export interface MailFacts {
@@ -55,7 +56,8 @@ export interface StandingFacts {
 export function recipientStanding(facts: StandingFacts): Standing {
   const { sent } = facts
   if (!sent || sent.fate === 'waiting' || sent.fate === 'stopped') return 'not sent'
-  const complete = facts.states.length > 0 && facts.states.every(({ state }) => state === 'answered' || state === 'settled')
+  const complete =
+    facts.states.length > 0 && facts.states.every(({ state }) => state === 'answered' || state === 'settled')
   if (sent.fate === 'not delivered' && !complete && !saidSince(facts.states, sent.at)) return 'not delivered'
   if (!sameLines(sent.lines, facts.askedNow)) return 'changed since'
   if (complete && facts.states.every(({ state }) => state === 'settled')) return 'settled'
@@ -65,7 +67,9 @@ export function recipientStanding(facts: StandingFacts): Standing {
 }
 
 function saidSince(states: readonly LineState[], instant: string): boolean {
-  return states.some(({ history }) => history.some(({ at, via }) => via === 'link' && Date.parse(at) >= Date.parse(instant)))
+  return states.some(({ history }) =>
+    history.some(({ at, via }) => via === 'link' && Date.parse(at) >= Date.parse(instant)),
+  )
 }
 
 /** Whether two askings say the same about the same lines, in any order. */
@@ -76,7 +80,9 @@ export function sameLines(one: readonly AnsweredLine[], other: readonly Answered
 
 /** When this recipient was last asked anything: the sending, or a line that was asked again. */
 function lastAsked({ sent, states }: StandingFacts): number {
-  const again = states.flatMap((line) => (line.state === 'unanswered' && line.askedAgain ? [Date.parse(line.askedAgain.at)] : []))
+  const again = states.flatMap((line) =>
+    line.state === 'unanswered' && line.askedAgain ? [Date.parse(line.askedAgain.at)] : [],
+  )
   return Math.max(sent ? Date.parse(sent.at) : 0, ...again)
 }
 
@@ -96,7 +102,11 @@ export interface LineCounts {
  * read before; what is settled as it reads now stays settled even while the newest sending does not hold it.
  * @param statesNow how the lines of `askedNow` stand
  */
-export function countLines(askedNow: readonly AnsweredLine[], sent: readonly AnsweredLine[], statesNow: readonly LineState[]): LineCounts {
+export function countLines(
+  askedNow: readonly AnsweredLine[],
+  sent: readonly AnsweredLine[],
+  statesNow: readonly LineState[],
+): LineCounts {
   const sentHash = new Map(sent.map((line) => [line.lineId, line.hash]))
   const state = new Map(statesNow.map((line) => [line.lineId, line.state]))
   const counts = { settled: 0, waiting: 0, changed: 0 }
@@ -109,7 +119,16 @@ export function countLines(askedNow: readonly AnsweredLine[], sent: readonly Ans
   return counts
 }
 
-const urgency: readonly Standing[] = ['not delivered', 'changed since', 'overdue', 'part answered', 'out', 'answered', 'settled', 'not sent']
+const urgency: readonly Standing[] = [
+  'not delivered',
+  'changed since',
+  'overdue',
+  'part answered',
+  'out',
+  'answered',
+  'settled',
+  'not sent',
+]
 
 /** The standing of several recipients as one: the most urgent. Nobody at all is not sent. */
 export function urgentStanding(standings: readonly Standing[]): Standing {
@@ -120,6 +139,10 @@ export function urgentStanding(standings: readonly Standing[]): Standing {
  * Whether a line of a rig is asked of this audience: a supplier brings what is rented, a house what is the venue's, and what is
  * rented too where nobody was hired.
  */
-export function isAskedOf(audience: 'venue' | 'supplier', supply: 'rented' | 'venue', someoneIsHired: boolean): boolean {
+export function isAskedOf(
+  audience: 'venue' | 'supplier',
+  supply: 'rented' | 'venue',
+  someoneIsHired: boolean,
+): boolean {
   return audience === 'supplier' ? supply === 'rented' : supply === 'venue' || !someoneIsHired
 }

@@ -3,22 +3,26 @@ export const tuningSteps: readonly { readonly name: string; readonly words: stri
   {
     name: 'Seat',
     words:
-      'Wipe the bearing edge, seat the new head and the hoop square, and run every rod down by finger until it just touches.',
+      'Wipe the bearing edge, seat head and hoop square, and run the rods down finger-tight, working across the drum.',
   },
   {
     name: 'Bring up',
     words:
-      'Give each rod half a turn in the lug order drawn here. Press the middle of a new head gently with a flat hand, then go round once more.',
+      'Quarter turns in the lug order drawn here, two keys on facing lugs, until the tap is near its pitch from below.',
   },
   {
-    name: 'Gauge pass',
+    name: 'Read',
     words:
-      'Go round with the gauge in the same order until every lug reads alike. A reading is relative to that gauge: it evens the head, it does not name the note.',
+      'Read every lug before you touch one: first with a gauge, then by tapping. Do not chase a single low lug, unless it has plainly slipped or is loose.',
   },
   {
-    name: 'Tap pass',
+    name: 'Even',
     words:
-      'Take the drum off its stand, lay the other head on a soft cloth and rest a fingertip on the middle. Tap a thumb’s width from each lug and bring every tap to the tap pitch, low lugs first.',
+      'Head over on the whole: bring the high facing pair down. Under: bring the low pair up. Then read every lug again.',
+  },
+  {
+    name: 'Finish',
+    words: 'One or two passes round in small turns. Arrive at every lug from below: go under, then come up into it.',
   },
   {
     name: 'Other head',
@@ -27,9 +31,14 @@ export const tuningSteps: readonly { readonly name: string; readonly words: stri
   { name: 'Match', words: 'Go back to the first head: the second one has moved it a little. Even it again.' },
   {
     name: 'Hang and check',
-    words: 'Hang the drum, play it with both heads open and listen for warble. Tap again once the stage is warm.',
+    words:
+      'Hang the drum, play it with both heads open and listen for warble. Tap again once the stage is warm and a new head has settled.',
   },
 ]
+
+/** How a tap is taken, so that it sounds one head and nothing else. Common practice; the reason is in the acoustics. */
+export const tapProtocol =
+  'Drum off its stand, the other head laid on a soft cloth, a fingertip on the centre. Tap an inch from the rod with a stick’s tip or a fingernail, alike at every lug, and wait for the pitch to stop falling.'
 
 /** Where to begin counting, in words; the drawing shows it too. */
 export const lugOneRule =

@@ -1,9 +1,11 @@
 import { describe, expect, it } from 'vitest'
 import { matchedRodPullN, matchedTapRatio, matchedTapScatter, matchedTensionNPerM } from '@/tests/helpers/matched-drum'
+import { calibrateGauge } from '@/lib/tuning/gauge-calibration'
+import { springDial, sampleGauge } from '@/lib/tuning/sample-gauge'
 import { sampleDrum } from './sample-revision'
 import { tuningSheet } from './tuning-sheet'
 
-const reader = { locale: 'en', units: 'imperial', referenceHz: 440 } as const
+const reader = { locale: 'en', units: 'imperial', referenceHz: 440, calibration: null } as const
 const size = { role: 'tom', diameterIn: 12, depthIn: 8, lugs: 6 } as const
 const drum = (spec: Partial<Parameters<typeof sampleDrum>[1]>) =>
   sampleDrum({ id: 'd', name: 'Tom 12', position: 0 }, { ...size, ...spec })
@@ -50,10 +52,41 @@ describe('a tuning sheet', () => {
     expect(sheet.figures?.sustain).toBeCloseTo(1, 6)
   })
 
+  // 10 cents of 256 Hz are 256·(2^(10/1200) − 1) = 1.483 Hz (closed form, derived).
+  it('gives the tolerance in Hz at the tap, and the usual warble limit unless the drum has its own', () => {
+    const sheet = tuningSheet(drum({ note: D3, toleranceCents: 10 }), reader)
+    const [head] = sheet.heads
+    expect(head?.toleranceHz).toBeCloseTo((1.483 / 256) * (head?.tap?.hz ?? 0), 3)
+    expect(sheet.warbleLimitHz).toBe(1)
+    expect(tuningSheet(drum({ note: D3, warbleLimitHz: 0.5 }), reader).warbleLimitHz).toBe(0.5)
+  })
+
+  it('foretells the gauge by the tour’s calibrated one, inside its interval, and else says what was noted', () => {
+    const calibration = calibrateGauge(sampleGauge)
+    const [head] = tuningSheet(drum({ note: D3 }), { ...reader, calibration }).heads
+    if (head?.gauge?.kind !== 'foretold') throw new Error('not foretold')
+    const { reading, bounds } = head.gauge
+    expect(head.gauge.gauge).toBe(sampleGauge.name)
+    const [low, high] = (bounds ?? '').split('–').map(Number)
+    expect(low).toBeLessThan(Number(reading))
+    expect(high).toBeGreaterThan(Number(reading))
+    // The dial that the pairs were made with, on this tension (derived, see springDial).
+    const wanted = springDial(head.tensionNPerM?.value ?? 0)
+    expect(wanted).toBeGreaterThan((low ?? 0) - 1)
+    expect(wanted).toBeLessThan((high ?? 0) + 1)
+    expect(tuningSheet(drum({}), { ...reader, calibration }).heads[0]?.gauge).toEqual({ kind: 'noted', reading: '75' })
+  })
+
+  it('keeps what its figures were worked out from, and nothing where there are none', () => {
+    expect(tuningSheet(drum({ note: D3 }), reader).workedFrom).toMatchObject({ lugs: 6, role: 'tom', depthM: 0.2032 })
+    expect(tuningSheet(drum({}), reader).workedFrom).toBeNull()
+  })
+
   it('has no figures for a head with a port, and says so', () => {
     const sheet = tuningSheet(drum({ note: D3, ported: true }), reader)
     expect(sheet.heads[1]).toMatchObject({ tap: null, tensionNPerM: null, rodPullN: null })
     expect(sheet.heads[1]?.without).toContain('port')
+    expect(sheet.relationWords).toBeNull()
     expect(sheet.figures).toMatchObject({ model: 'one-head', upperPartner: null, sustain: null, falseWarbleHz: null })
   })
 
@@ -77,7 +110,7 @@ describe('a tuning sheet', () => {
 
   it('has no figure without a note, and says whom to ask', () => {
     const [batter] = tuningSheet(drum({}), reader).heads
-    expect(batter).toMatchObject({ note: null, tap: null, rodPullN: null, gauge: 75 })
+    expect(batter).toMatchObject({ note: null, tap: null, rodPullN: null, gauge: { kind: 'noted', reading: '75' } })
     expect(batter?.without).toContain('ask the drum tech')
   })
 

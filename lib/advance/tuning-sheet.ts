@@ -1,12 +1,16 @@
-import type { DrumTuning } from '@/lib/acoustics/drum-tuning'
+import type { DrumTuning, DrumTuningInput } from '@/lib/acoustics/drum-tuning'
 import type { Estimated } from '@/lib/acoustics/estimated'
 import type { HeadCaution } from '@/lib/acoustics/head-cautions'
 import { nearestNote } from '@/lib/acoustics/note'
 import { noteName } from '@/lib/acoustics/note-name'
 import type { DrumEstimate } from '@/lib/tuning/drum-estimate'
 import { drumEstimate } from '@/lib/tuning/drum-estimate'
+import type { GaugeCalibration } from '@/lib/tuning/gauge-calibration'
+import { gaugeOfHead } from '@/lib/tuning/gauge-of-head'
+import { outsideWords, startingBounds, startingWords } from '@/lib/tuning/gauge-words'
 import { evenLugAngles, lugsFacing } from '@/lib/tuning/lug-angles'
 import { lugOrder } from '@/lib/tuning/lug-order'
+import { WARBLE_LIMIT_HZ } from '@/lib/tuning/warble-limit'
 import type { FrozenDrum, FrozenHead } from './frozen-kit'
 import type { Units } from './kit-words'
 import { drumRoleWord, drumSizeWords, headWords } from './kit-words'
@@ -51,6 +55,19 @@ export interface SheetLug {
   readonly turn: number
 }
 
+/** A gauge's starting reading: foretold by the tour's calibrated gauge, or as the drum tech noted it, relative to that gauge. */
+export type SheetGauge =
+  | {
+      readonly kind: 'foretold'
+      /** Which gauge it holds for. */
+      readonly gauge: string
+      readonly reading: string
+      /** Null outside the calibrated range, where `outside` says why. */
+      readonly bounds: string | null
+      readonly outside: string | null
+    }
+  | { readonly kind: 'noted'; readonly reading: string }
+
 export interface SheetHead {
   readonly side: 'batter' | 'resonant'
   readonly words: string
@@ -63,8 +80,10 @@ export interface SheetHead {
   /** Pull on each rod, N, an estimate, and its bounds. */
   readonly rodPullN: number | null
   readonly rodPullBoundsN: Omit<Estimated, 'value'> | null
-  /** The drum tech's own noted reading. */
-  readonly gauge: number | null
+  /** What a gauge should read to start from; null when none was noted and none is calibrated. */
+  readonly gauge: SheetGauge | null
+  /** How far a tap may stand from its pitch and still be even, Hz; null without a tap. */
+  readonly toleranceHz: number | null
   readonly lugs: readonly SheetLug[]
   /** The order to turn them in, lug numbers. */
   readonly order: readonly number[]
@@ -83,20 +102,29 @@ export interface TuningSheet {
   readonly roleWord: string
   readonly sizeWords: string
   readonly toleranceCents: number
+  /** Warble that is let pass, beats a second. */
+  readonly warbleLimitHz: number
   readonly muffling: string
   readonly relationWords: string | null
   /** The drum's one note. */
   readonly note: SheetNote | null
   /** Null without a note, when the drum cannot sound it, and in packs from before they were worked out. */
   readonly figures: SheetFigures | null
+  /** What the figures were worked out from, for whoever asks why; null where they are. */
+  readonly workedFrom: DrumTuningInput | null
   readonly heads: readonly SheetHead[]
 }
 
+export interface SheetReader {
+  readonly locale: string
+  readonly units: Units
+  readonly referenceHz: number
+  /** The tour's gauge, calibrated; null where there is none. */
+  readonly calibration: GaugeCalibration | null
+}
+
 /** A drum's sheet for whoever tunes it. Every figure is an estimate of the core, both heads worked out together. */
-export function tuningSheet(
-  drum: FrozenDrum,
-  reader: { readonly locale: string; readonly units: Units; readonly referenceHz: number },
-): TuningSheet {
+export function tuningSheet(drum: FrozenDrum, reader: SheetReader): TuningSheet {
   const { spec } = drum
   const estimate = drumEstimate(spec, { referenceHz: reader.referenceHz })
   const note = estimate && sheetNote(estimate.noteHz, reader)
@@ -110,10 +138,12 @@ export function tuningSheet(
     roleWord: drumRoleWord(spec.role),
     sizeWords: `${drumSizeWords(spec, reader.units)}, ${spec.lugs} lugs a head`,
     toleranceCents: spec.toleranceCents,
+    warbleLimitHz: spec.warbleLimitHz ?? WARBLE_LIMIT_HZ,
     muffling: spec.muffling,
-    relationWords: spec.resonant ? relationWords(spec.headRelationCents) : null,
+    relationWords: spec.resonant && !spec.ported ? relationWords(spec.headRelationCents) : null,
     note,
     figures: estimate?.tuning ? sheetFigures(estimate.tuning, reader) : null,
+    workedFrom: estimate?.tuning ? estimate.input : null,
     heads: [
       sheetHead(drum, 'batter', spec.batter, estimate, reader),
       ...(spec.resonant ? [sheetHead(drum, 'resonant', spec.resonant, estimate, reader)] : []),
@@ -121,7 +151,7 @@ export function tuningSheet(
   }
 }
 
-function sheetFigures(tuning: DrumTuning, reader: PitchReader): SheetFigures {
+function sheetFigures(tuning: DrumTuning, reader: SheetReader): SheetFigures {
   const { model, tapRatio, tapRatioMeasured, upperPartnerHz, sustain, falseWarbleHz } = tuning
   const upperPartner = upperPartnerHz && sheetPitch(upperPartnerHz, reader)
   return { model, tapRatio, tapRatioMeasured, upperPartner, sustain, falseWarbleHz }
@@ -132,17 +162,12 @@ function relationWords(cents: number): string {
   return `resonant tap ${Math.abs(cents)} cents ${cents > 0 ? 'over' : 'under'} the batter’s`
 }
 
-interface PitchReader {
-  readonly locale: string
-  readonly referenceHz: number
-}
-
 function sheetHead(
   drum: FrozenDrum,
   side: SheetHead['side'],
   head: FrozenHead,
   estimate: DrumEstimate | null,
-  reader: PitchReader,
+  reader: SheetReader,
 ): SheetHead {
   const { spec } = drum
   const order = lugOrder(spec.lugs)
@@ -151,24 +176,42 @@ function sheetHead(
     side,
     words: headWords(head),
     note: estimate && sheetNote(estimate.noteHz, reader),
-    gauge: head.gauge,
+    gauge: sheetGauge(spec, head, estimate?.tuning?.[side]?.tapHz.value ?? null, reader.calibration),
     order,
     lugs: lugsFacing(side, evenLugAngles(spec.lugs)).map(({ lug, x, y }) => ({ lug, x, y, turn: turns.get(lug) ?? 0 })),
   }
   const figures = estimate?.tuning?.[side]
   if (!figures) {
     const without = withoutWords(estimate)
-    return { ...common, tap: null, tensionNPerM: null, rodPullN: null, rodPullBoundsN: null, cautions: [], without }
+    const none = { tap: null, toleranceHz: null, tensionNPerM: null, rodPullN: null, rodPullBoundsN: null }
+    return { ...common, ...none, cautions: [], without }
   }
   const { value, low, high } = figures.rodPullN
   return {
     ...common,
     tap: sheetPitch(figures.tapHz, reader),
+    toleranceHz: figures.tapHz.value * (2 ** (spec.toleranceCents / 1200) - 1),
     tensionNPerM: figures.tensionNPerM,
     rodPullN: value,
     rodPullBoundsN: { low, high },
     cautions: figures.cautions,
     without: null,
+  }
+}
+
+function sheetGauge(
+  { diameterIn, depthIn }: FrozenDrum['spec'],
+  { plyMils, coatingGPerM2, gauge: noted }: FrozenHead,
+  tapHz: number | null,
+  calibration: GaugeCalibration | null,
+): SheetGauge | null {
+  const found = gaugeOfHead(calibration, { diameterIn, depthIn, plyMils, coatingGPerM2 }, { tapHz, noted })
+  if (found === null) return null
+  if (found.kind === 'noted') return { kind: 'noted', reading: String(found.reading) }
+  const { gauge, scale, start } = found
+  return {
+    ...{ kind: 'foretold', gauge, reading: startingWords(start, scale), bounds: startingBounds(start, scale) },
+    outside: start.outside && outsideWords[start.outside],
   }
 }
 
@@ -179,11 +222,11 @@ function withoutWords(estimate: DrumEstimate | null): string {
   return 'This head has a port: there is no figure for it. Tune it even, by ear.'
 }
 
-function sheetPitch({ value, low, high }: Estimated, reader: PitchReader): SheetPitch {
+function sheetPitch({ value, low, high }: Estimated, reader: SheetReader): SheetPitch {
   return { hz: value, lowHz: low, highHz: high, name: sheetNote(value, reader).name }
 }
 
-function sheetNote(hz: number, reader: PitchReader): SheetNote {
+function sheetNote(hz: number, reader: SheetReader): SheetNote {
   const nearest = nearestNote(hz, reader.referenceHz)
   return { hz, name: noteName(nearest.semitone, noteLocale(reader.locale)), cents: Math.round(nearest.cents) || 0 }
 }

@@ -67,7 +67,10 @@ export type AdvanceSaid = {
   content: AnswerContent
 }
 
-export type AdvanceLine = Pick<ReplyLine, 'lineId' | 'hash' | 'number' | 'kind' | 'count' | 'words' | 'details' | 'insteadOf' | 'size' | 'changes'> & {
+export type AdvanceLine = Pick<
+  ReplyLine,
+  'lineId' | 'hash' | 'number' | 'kind' | 'count' | 'words' | 'details' | 'insteadOf' | 'size' | 'changes'
+> & {
   state: 'not sent' | 'unanswered' | 'answered' | 'settled' | 'changed since'
   said: AdvanceSaid | null
   /** Who settled it, or asked again and why. */

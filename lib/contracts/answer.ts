@@ -23,7 +23,9 @@ const insteadSchema = z.discriminatedUnion('kind', [
 export const answerContentSchema: z.ZodType<AnswerContent> = z.object({
   asAsked: count,
   instead: z.array(z.object({ n: part, what: insteadSchema })).max(20, 'at most 20 kinds instead'),
-  notYet: z.array(z.object({ n: part, by: z.iso.date('give the date by which you know, as YYYY-MM-DD') })).max(20, 'at most 20 dates'),
+  notYet: z
+    .array(z.object({ n: part, by: z.iso.date('give the date by which you know, as YYYY-MM-DD') }))
+    .max(20, 'at most 20 dates'),
   cant: count,
 })
 
@@ -45,7 +47,11 @@ export const replyEventSchema = z.discriminatedUnion('kind', [
 export type ReplyEvent = z.infer<typeof replyEventSchema>
 
 export const takenHows = ['phone', 'mail', 'in person'] as const
-export const takenHowWords: Record<(typeof takenHows)[number], string> = { phone: 'by phone', mail: 'by mail', 'in person': 'in person' }
+export const takenHowWords: Record<(typeof takenHows)[number], string> = {
+  phone: 'by phone',
+  mail: 'by mail',
+  'in person': 'in person',
+}
 
 /** An answer that came some other way, taken down by a signed-in person. */
 export const takeDownSchema = z.object({
@@ -90,7 +96,9 @@ export const replyLineSchema = z.object({
   details: z.array(z.string()),
   insteadOf: z.string().nullable(),
   /** Sizes as asked, to begin an "instead" from. */
-  size: z.object({ diameterIn: z.number(), depthIn: z.number().nullable(), lugs: z.number().int().nullable() }).nullable(),
+  size: z
+    .object({ diameterIn: z.number(), depthIn: z.number().nullable(), lugs: z.number().int().nullable() })
+    .nullable(),
   state: z.enum(['unanswered', 'answered', 'settled', 'changed since']),
   /** What stands, or stood before the line changed. */
   answer: z.object({ content: answerContentSchema, remark: z.string(), byName: z.string() }).nullable(),

@@ -133,8 +133,19 @@ export const benchHeadSchema = z.object({
   /** The tap to aim at beside a lug, an estimate with its bounds. */
   tap: figureSchema.extend({ lowHz: z.number(), highHz: z.number() }).nullable(),
   rodPullN: z.number().nullable(),
-  /** The drum tech's own noted reading, relative to that gauge. */
-  gauge: z.number().nullable(),
+  /** What a gauge should read to start from: foretold by the tour's calibrated one, or as noted, relative to that gauge. */
+  gauge: z
+    .discriminatedUnion('kind', [
+      z.object({
+        kind: z.literal('foretold'),
+        gauge: z.string(),
+        reading: z.string(),
+        bounds: z.string().nullable(),
+        outside: z.string().nullable(),
+      }),
+      z.object({ kind: z.literal('noted'), reading: z.string() }),
+    ])
+    .nullable(),
   cautions: z.array(z.enum(['slack', 'choked', 'film-stress'])),
   /** Why there is no figure. */
   without: z.string().nullable(),
@@ -150,6 +161,8 @@ export const benchDrumSchema = z.object({
   /** Clockwise from the badge as seen facing the batter head, radians. */
   lugAnglesRad: z.array(z.number()),
   toleranceCents: z.number(),
+  /** Warble that is let pass, beats a second. */
+  warbleLimitHz: z.number(),
   muffling: z.string(),
   relationWords: z.string().nullable(),
   /** What was settled to come instead, and the size that had been asked. */

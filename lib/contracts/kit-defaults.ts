@@ -1,4 +1,5 @@
 import { inchFractions } from '@/lib/staging/size'
+import { WARBLE_LIMIT_HZ } from '@/lib/tuning/warble-limit'
 import type { DrumRole, DrumSpec, EntryInput, EntryKind, Head } from './kit'
 
 /** What a new entry starts from, so that adding one takes seconds: common sizes of each role (common practice). */
@@ -48,7 +49,7 @@ export function newDrum(role: DrumRole, size: Partial<Pick<DrumSpec, 'diameterIn
     ...{ kind: 'drum' as const, name: usualDrumName(role, usual.diameterIn), ...common, count: 1 as const },
     spec: {
       ...{ role, ...usual, shell: '', note: null, noteLocked: false, headRelationCents: 0, toleranceCents: 10 },
-      ...{ measuredTapRatio: null, muffling: '', insteadOf: null },
+      ...{ measuredTapRatio: null, warbleLimitHz: WARBLE_LIMIT_HZ, muffling: '', insteadOf: null },
     },
   } satisfies EntryInput
 }

@@ -29,6 +29,7 @@ describe('the form of a drum', () => {
         spec.note = 'Eb3 +12'
         spec.headRelationCents = '−200'
         spec.measuredTapRatio = '1,72'
+        spec.warbleLimitHz = '0,5'
         spec.batter.range = { slackNPerM: '650', chokedNPerM: '4200' }
       }),
     )
@@ -40,6 +41,7 @@ describe('the form of a drum', () => {
       note: { semitone: 51, cents: 12 },
       headRelationCents: -200,
       measuredTapRatio: 1.72,
+      warbleLimitHz: 0.5,
       insteadOf: null,
     })
   })
@@ -56,6 +58,7 @@ describe('the form of a drum', () => {
         form.spec.note = 'H9'
         form.spec.toleranceCents = ''
         form.spec.measuredTapRatio = '174'
+        form.spec.warbleLimitHz = '13'
         form.spec.batter.range = { slackNPerM: '900', chokedNPerM: '' }
         form.spec.resonant.range = { slackNPerM: '3000', chokedNPerM: '900' }
         form.spec.insteadOf = { diameterMinIn: '13', diameterMaxIn: '12', depthMinIn: '7', depthMaxIn: 'deep' }
@@ -70,6 +73,7 @@ describe('the form of a drum', () => {
       'spec.resonant.gauge': 'write a number',
       'spec.resonant.range.chokedNPerM': 'the choked edge lies over the slack edge',
       'spec.measuredTapRatio': 'at most 2.5',
+      'spec.warbleLimitHz': 'at most 12 a second',
       'spec.note': 'write a note such as D3, or a frequency such as 146.8 Hz',
       'spec.toleranceCents': 'write a number',
       'spec.insteadOf.depthMaxIn': 'write a size such as 12, 5½, 12" or 305 mm',
@@ -138,9 +142,9 @@ describe('the contract of an entry', () => {
       expect(entryInputSchema.parse(entry)).toEqual(entry)
   })
 
-  it('takes a drum that was written before heads had a range and drums a measured ratio', () => {
+  it('takes a drum that was written before heads had a range and drums a measured ratio and a warble limit', () => {
     const { spec, ...drum } = newDrum('tom')
-    const { measuredTapRatio: _ratio, batter, ...older } = spec
+    const { measuredTapRatio: _ratio, warbleLimitHz: _limit, batter, ...older } = spec
     const { range: _range, ...olderHead } = batter
     expect(entryInputSchema.parse({ ...drum, spec: { ...older, batter: olderHead } })).toEqual({ ...drum, spec })
   })

@@ -37,6 +37,7 @@ export type DrumForm = CommonForm & {
     headRelationCents: string
     measuredTapRatio: string
     toleranceCents: string
+    warbleLimitHz: string
     insteadOf: SizeRangeForm
   }
   hasResonant: boolean
@@ -80,6 +81,7 @@ export function drumFormSchema(reader: NoteReader): z.ZodType<EntryInput, DrumFo
         headRelationCents: read('spec.headRelationCents', numberValue(spec.headRelationCents)),
         measuredTapRatio: read('spec.measuredTapRatio', optionalNumber(spec.measuredTapRatio)),
         toleranceCents: read('spec.toleranceCents', numberValue(spec.toleranceCents)),
+        warbleLimitHz: read('spec.warbleLimitHz', numberValue(spec.warbleLimitHz)),
         insteadOf: takesOther
           ? {
               diameterMinIn: size('spec.insteadOf.diameterMinIn', range.diameterMinIn),
@@ -216,6 +218,7 @@ export function drumFormOf(entry: Extract<EntryInput, { kind: 'drum' }>, locale:
       headRelationCents: String(spec.headRelationCents),
       measuredTapRatio: spec.measuredTapRatio === null ? '' : String(spec.measuredTapRatio),
       toleranceCents: String(spec.toleranceCents),
+      warbleLimitHz: String(spec.warbleLimitHz),
       insteadOf: {
         diameterMinIn: inchFractions(range.diameterMinIn),
         diameterMaxIn: inchFractions(range.diameterMaxIn),

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { WARBLE_LIMIT_HZ, warbleLimits } from '@/lib/tuning/warble-limit'
 import { idSchema, nameSchema, remarkSchema, versionSchema } from './common'
 
 /**
@@ -93,6 +94,12 @@ export const drumSpecSchema = z.object({
   measuredTapRatio: z.number().min(1.2, 'at least 1.2').max(2.5, 'at most 2.5').nullable().default(null),
   /** How far a lug may stand from the target and still be even, cents. */
   toleranceCents: z.number().min(1, 'at least 1 cent').max(100, 'at most 100 cents'),
+  /** Warble that is let pass, beats a second. */
+  warbleLimitHz: z
+    .number('write beats a second')
+    .min(warbleLimits.min, `at least ${warbleLimits.min} a second`)
+    .max(warbleLimits.max, `at most ${warbleLimits.max} a second`)
+    .default(WARBLE_LIMIT_HZ),
   muffling: z.string().trim().max(200, 'at most 200 characters'),
   /** What may come instead without asking again. */
   insteadOf: z

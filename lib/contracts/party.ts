@@ -6,7 +6,10 @@ export const paperSizes = ['A4', 'Letter'] as const
 /** Languages in which the notes can be named. */
 export const locales = ['en', 'de', 'fr'] as const
 
-export const unitWords: Record<(typeof unitSystems)[number], string> = { metric: 'metres and millimetres', imperial: 'feet and inches' }
+export const unitWords: Record<(typeof unitSystems)[number], string> = {
+  metric: 'metres and millimetres',
+  imperial: 'feet and inches',
+}
 export const localeWords: Record<(typeof locales)[number], string> = {
   en: 'English (B, B♭, F♯)',
   de: 'German (H, B, Fis)',

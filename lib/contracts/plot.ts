@@ -144,4 +144,6 @@ export const missedCommandsSchema = z.object({
 })
 export type MissedCommands = z.infer<typeof missedCommandsSchema>
 
-export const missedQuerySchema = z.object({ after: z.coerce.number('write a sequence').int().min(0).max(2_147_483_647) })
+export const missedQuerySchema = z.object({
+  after: z.coerce.number('write a sequence').int().min(0).max(2_147_483_647),
+})

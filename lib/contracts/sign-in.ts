@@ -66,6 +66,7 @@ export function sitePath(value: unknown, origin = 'http://site.invalid'): string
   if (!isPath && !value.startsWith(`${origin}/`)) return undefined
   if (!URL.canParse(value, origin)) return undefined
   const url = new URL(value, origin)
-  if (url.origin !== origin || url.pathname.startsWith('//') || /^\/(api|sign-in)(\/|$)/.test(url.pathname)) return undefined
+  if (url.origin !== origin || url.pathname.startsWith('//') || /^\/(api|sign-in)(\/|$)/.test(url.pathname))
+    return undefined
   return `${url.pathname}${url.search}${url.hash}`
 }

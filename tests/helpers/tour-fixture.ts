@@ -20,6 +20,7 @@ export const tomSpec: DrumSpec = {
   noteLocked: false,
   headRelationCents: 0,
   measuredTapRatio: null,
+  warbleLimitHz: 1,
   toleranceCents: 10,
   muffling: '',
   insteadOf: { diameterMinIn: 12, diameterMaxIn: 13, depthMinIn: 7, depthMaxIn: 10 },

@@ -99,7 +99,7 @@ describe('opening a bench', () => {
     // D3 at A4 = 440 Hz: 440·2^(−19/12).
     expect(batter?.note).toMatchObject({ name: 'D3', cents: 0 })
     expect(batter?.note?.hz).toBeCloseTo(146.832, 3)
-    expect(batter).toMatchObject({ side: 'batter', gauge: 75, without: null })
+    expect(batter).toMatchObject({ side: 'batter', gauge: { kind: 'noted', reading: '75' }, without: null })
     expect(resonant?.side).toBe('resonant')
     const { hz = 0, lowHz = 0, highHz = 0 } = batter?.tap ?? {}
     // A tap lies above the ideal 1.593 of the note in open air and within its own bounds.

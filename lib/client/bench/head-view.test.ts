@@ -3,7 +3,7 @@ import type { BenchDrum, BenchHead, BenchReading } from '@/lib/contracts/bench'
 import { headStandingWords, headView, standingSignOff } from './head-view'
 
 const head: BenchHead = {
-  ...{ side: 'batter', words: '10 mil', note: null, rodPullN: null, gauge: 75, cautions: [], without: null },
+  ...{ side: 'batter', words: '10 mil', note: null, rodPullN: null, gauge: null, cautions: [], without: null },
   tap: { hz: 250, name: 'B3', lowHz: 240, highHz: 260 },
 }
 const drum: BenchDrum = {
@@ -14,6 +14,7 @@ const drum: BenchDrum = {
     sizeWords: '12 in across, 8 deep',
     lugCount: 6,
     toleranceCents: 10,
+    warbleLimitHz: 1,
   },
   lugAnglesRad: [0.5, 1.5, 2.5, 3.5, 4.5, 5.5].map((share) => (share * Math.PI) / 3),
   ...{ muffling: '', relationWords: null, instead: null, missing: false, heads: [head] },

@@ -5,16 +5,21 @@ import type { RevisionDocument } from '@/lib/advance/revision-document'
 import type { SheetHead } from '@/lib/advance/tuning-sheet'
 import { tuningSheet } from '@/lib/advance/tuning-sheet'
 import type { BenchDrum, BenchHead, BenchReading, BenchSignOff } from '@/lib/contracts/bench'
+import type { GaugeCalibration } from '@/lib/tuning/gauge-calibration'
 import { evenLugAngles } from '@/lib/tuning/lug-angles'
 import type { NightDrum } from './read-night-sheet'
 
 /** A drum of the night as the bench shows it. */
-export function benchDrum(drum: NightDrum, party: RevisionDocument['party']): BenchDrum {
-  const sheet = tuningSheet(drum, party)
+export function benchDrum(
+  drum: NightDrum,
+  party: RevisionDocument['party'],
+  calibration: GaugeCalibration | null,
+): BenchDrum {
+  const sheet = tuningSheet(drum, { ...party, calibration })
   return {
     ...{ entryId: sheet.entryId, name: sheet.name, role: sheet.role, sizeWords: sheet.sizeWords },
     ...{ lugCount: sheet.lugCount, lugAnglesRad: evenLugAngles(sheet.lugCount), toleranceCents: sheet.toleranceCents },
-    ...{ muffling: sheet.muffling, relationWords: sheet.relationWords },
+    ...{ warbleLimitHz: sheet.warbleLimitHz, muffling: sheet.muffling, relationWords: sheet.relationWords },
     instead: drum.instead && {
       words: drum.instead.words,
       // A drum's line is only ever answered about a drum.

@@ -9,10 +9,20 @@ import { AppError } from '@/lib/errors'
 export const benchLimit = { readings: 10_000, signOffs: 1000 }
 
 /** The bench must be locked. Throws conflict when it would hold too much. */
-export async function assertRoomOnBench(tx: Db, scope: Scope, showId: string, more: { readings: number } | { signOffs: number }): Promise<void> {
+export async function assertRoomOnBench(
+  tx: Db,
+  scope: Scope,
+  showId: string,
+  more: { readings: number } | { signOffs: number },
+): Promise<void> {
   const there = await countBench(tx, scope, showId)
   const full =
-    'readings' in more ? there.readings + more.readings > benchLimit.readings : there.signOffs + more.signOffs > benchLimit.signOffs
+    'readings' in more
+      ? there.readings + more.readings > benchLimit.readings
+      : there.signOffs + more.signOffs > benchLimit.signOffs
   if (!full) return
-  throw new AppError('conflict', 'This bench is full: it holds more than any night takes. Nothing more was kept; what is there stays.')
+  throw new AppError(
+    'conflict',
+    'This bench is full: it holds more than any night takes. Nothing more was kept; what is there stays.',
+  )
 }

@@ -5,6 +5,7 @@ import type { Bench } from '@/lib/contracts/bench'
 import type { Actor } from '@/lib/server/auth/actor'
 import type { LiveTopic } from '@/lib/server/live/notify-live'
 import { notThere } from '@/lib/server/refusals'
+import { tryCalibration } from '@/lib/tuning/gauge-of-head'
 import { assertAtBench } from './assert-at-bench'
 import { benchDrum, benchReading, benchSignOff } from './bench-answer'
 import { readNightSheet } from './read-night-sheet'
@@ -37,6 +38,7 @@ export async function readBench(actor: Actor, input: { showId: string }): Promis
             .map(({ physicalDrumId }) => physicalDrumId),
         ),
       )
+      const calibration = sheet?.gauge ? tryCalibration(sheet.gauge).calibration : null
       return {
         show: {
           id: show.id,
@@ -49,7 +51,7 @@ export async function readBench(actor: Actor, input: { showId: string }): Promis
         party,
         rig: show.rigName,
         sheet: sheet && { number: sheet.number, from: sheet.from, newestNumber: sheet.newestNumber },
-        drums: sheet?.drums.map((drum) => benchDrum(drum, sheet.party)) ?? [],
+        drums: sheet?.drums.map((drum) => benchDrum(drum, sheet.party, calibration)) ?? [],
         readings: readings.filter(({ physicalDrumId }) => counted.has(physicalDrumId)).map(benchReading),
         signOffs: signOffs.map(benchSignOff),
       }

@@ -20,6 +20,7 @@ export type NightSheet = {
   readonly from: 'sent' | 'issued'
   readonly newestNumber: number
   readonly party: RevisionDocument['party']
+  readonly gauge: RevisionDocument['gauge']
   readonly drums: readonly NightDrum[]
   /** Who brings the rented drums, when that is one supplier. */
   readonly supplierId: string | null
@@ -46,6 +47,7 @@ export async function readNightSheet(
     from: sent ? 'sent' : 'issued',
     newestNumber: newest.number,
     party: document.party,
+    gauge: document.gauge,
     drums: entriesInOrder(nightKit(document, states)).filter((entry): entry is NightDrum => entry.kind === 'drum'),
     supplierId: supplierIds.length === 1 ? (supplierIds[0] ?? null) : null,
   }

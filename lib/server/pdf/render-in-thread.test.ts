@@ -42,6 +42,8 @@ describe('a pack rendered in a thread of its own', () => {
     const printed = await Promise.all(names.map((name) => renderInThread(named(name))))
     const again = await renderInThread(named('five'))
     const files = await Promise.all([...printed, again].map(({ bytes }) => readPdf(bytes)))
-    expect(files.map((file) => file.links)).toEqual([...names, 'five'].map((name) => [`https://hoopwright.example/r/${name}`]))
+    expect(files.map((file) => file.links)).toEqual(
+      [...names, 'five'].map((name) => [`https://hoopwright.example/r/${name}`]),
+    )
   }, 60_000)
 })

@@ -1,54 +1,61 @@
 import { View } from '@react-pdf/renderer'
-import type { SheetHead } from '@/lib/advance/tuning-sheet'
+import { kilonewtons } from '@/lib/acoustics/figure-words'
+import { headSideWords, sheetGaugeWords, toleranceWords, warbleLimitWords } from '@/lib/advance/sheet-words'
+import type { SheetHead, TuningSheet } from '@/lib/advance/tuning-sheet'
 import { ink } from '../ink'
 import { mm } from '../paper-measure'
 import { Figures, Heading, Plain } from '../words'
 import { LugDrawing } from './lug-drawing'
 
 const drawingMm = 40
+/** Room above the tables, so that both heads' begin at one height. */
+const upperMm = 49
 /** A row's height and, over thirteen of them, the room of a table: fewer lugs have taller rows, easier to write in. */
-const rowMm = { least: 5.8, most: 8.5 }
+const rowMm = { least: 5, most: 8 }
 const blankColumns = ['gauge', 'tap Hz', 'gauge', 'tap Hz'] as const
 
 /** One head of a drum: its tap largest, then the gauge to start from, the drawn order, and room for readings. */
-export function HeadColumn({ head }: { head: SheetHead }) {
+export function HeadColumn({ sheet, head }: { sheet: TuningSheet; head: SheetHead }) {
+  const { tap, tensionNPerM, rodPullN, rodPullBoundsN } = head
+  const gauge = sheetGaugeWords(head.gauge)
   return (
     <View>
       <View style={{ borderBottom: `0.75pt solid ${ink.ink}`, paddingBottom: 1, marginBottom: 2 }}>
-        <Heading size={12}>{head.side === 'batter' ? 'Batter head' : 'Resonant head'}</Heading>
+        <Heading size={12}>{headSideWords[head.side]}</Heading>
         <Plain size={8}>{head.words}</Plain>
       </View>
-      <View style={{ flexDirection: 'row' }}>
+      <View style={{ flexDirection: 'row', minHeight: mm(upperMm) }}>
         <View style={{ flex: 1 }}>
-          {head.tap && (
+          {tap && (
             <>
-              <Plain size={8} colour="soft">
-                tap beside a lug, other head damped
-              </Plain>
-              <Figures bold size={21} style={{ lineHeight: 1.05 }}>{`${head.tap.hz.toFixed(1)} Hz`}</Figures>
-              <Figures
-                size={7.5}
-              >{`${head.tap.lowHz.toFixed(0)} to ${head.tap.highHz.toFixed(0)}, near ${head.tap.name}`}</Figures>
+              <Label>tap beside a lug, other head damped</Label>
+              <Figures bold size={21} style={{ lineHeight: 1.05 }}>{`${tap.hz.toFixed(1)} Hz`}</Figures>
+              <Figures size={7.5}>{`${tap.lowHz.toFixed(0)} to ${tap.highHz.toFixed(0)}, near ${tap.name}`}</Figures>
             </>
           )}
-          <View style={{ marginTop: mm(1.5) }}>
-            <Plain size={8} colour="soft">
-              gauge to start from
-            </Plain>
+          <Label>even within</Label>
+          <Plain size={8} bold>
+            {toleranceWords(sheet, head)}
+          </Plain>
+          <Plain size={8}>{warbleLimitWords(sheet, head.side)}</Plain>
+          <Label>gauge to start from</Label>
+          <View style={{ flexDirection: 'row', alignItems: 'baseline' }}>
             <Figures bold size={13} style={{ lineHeight: 1.1 }}>
-              {head.gauge === null ? '–' : String(head.gauge)}
+              {gauge.reading}
             </Figures>
-            <Plain size={7.5}>{head.gauge === null ? 'none noted' : 'as noted, relative to this gauge'}</Plain>
+            {gauge.bounds && (
+              <Figures size={7.5} style={{ marginLeft: mm(1.5) }}>
+                {gauge.bounds}
+              </Figures>
+            )}
           </View>
-          {head.tensionNPerM && (
-            <Plain
-              size={7.5}
-              style={{ marginTop: mm(1.5) }}
-            >{`film ${thousands(head.tensionNPerM.value)} kN/m, ${thousands(
-              head.tensionNPerM.low,
-            )} to ${thousands(head.tensionNPerM.high)}`}</Plain>
+          <Plain size={7.5}>{gauge.worth}</Plain>
+          {tensionNPerM && (
+            <Plain size={7.5} style={{ marginTop: mm(1) }}>
+              {`film ${kilonewtons(tensionNPerM.value)} kN/m, ${kilonewtons(tensionNPerM.low)} to ${kilonewtons(tensionNPerM.high)}`}
+            </Plain>
           )}
-          {head.rodPullN !== null && <Plain size={7.5}>{rodWords(head.rodPullN, head.rodPullBoundsN)}</Plain>}
+          {rodPullN !== null && <Plain size={7.5}>{rodWords(rodPullN, rodPullBoundsN)}</Plain>}
           {head.without && (
             <Plain size={8} style={{ marginTop: mm(1.5) }}>
               {head.without}
@@ -62,7 +69,14 @@ export function HeadColumn({ head }: { head: SheetHead }) {
   )
 }
 
-const thousands = (value: number) => (value / 1000).toFixed(2)
+function Label({ children }: { children: string }) {
+  return (
+    <Plain size={8} colour="soft" style={{ marginTop: mm(1) }}>
+      {children}
+    </Plain>
+  )
+}
+
 const tens = (value: number) => Math.round(value / 10) * 10
 
 function rodWords(pullN: number, bounds: SheetHead['rodPullBoundsN']): string {

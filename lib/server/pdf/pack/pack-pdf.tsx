@@ -7,6 +7,7 @@ import { LinePage } from './line-page'
 import { PageFrame } from './page-frame'
 import { PlotPages } from './plot-pages'
 import { SheetPage } from './sheet-page'
+import { WhyPage } from './why-page'
 
 export type PackLinks = {
   /** Where the lines are answered; null in a preview. */
@@ -20,6 +21,7 @@ export function PackPdf({ pack, links }: { pack: PackDocument; links: PackLinks 
   const title = `Revision ${pack.revision.number}, ${pack.rig}, for ${pack.recipient.name}`
   // A supplier's pack has its cautions under its lines, not on a page that they would leave bare.
   const endsWithLines = pack.lines.length > 0 && pack.sheets.length === 0
+  const workedOut = pack.sheets.filter(({ workedFrom }) => workedFrom !== null)
   return (
     <Document title={title} author={pack.party} creator="Hoopwright" producer="Hoopwright" language={pack.locale}>
       <CoverPage pack={pack} replyLink={links.reply} />
@@ -29,6 +31,7 @@ export function PackPdf({ pack, links }: { pack: PackDocument; links: PackLinks 
       {pack.sheets.map((sheet) => (
         <SheetPage key={sheet.entryId} pack={pack} sheet={sheet} benchLink={links.bench} />
       ))}
+      {workedOut.length > 0 && <WhyPage pack={pack} sheets={workedOut} />}
       {!endsWithLines && (
         <PageFrame pack={pack} title="Cautions">
           <Cautions pack={pack} />

@@ -1,21 +1,15 @@
 import { View } from '@react-pdf/renderer'
-import { MOST_WARBLE_HZ } from '@/lib/acoustics/drum-tuning'
 import { planningCaution, tuningCautions } from '@/lib/advance/cautions'
 import type { PackDocument } from '@/lib/advance/pack-document'
-import { lugOneRule, tuningSteps } from '@/lib/advance/tuning-method'
-import type { SheetFigures, SheetHead, TuningSheet } from '@/lib/advance/tuning-sheet'
+import { figureLine, openHeadWords, sheetCautionWords, sheetNoteWords } from '@/lib/advance/sheet-words'
+import { lugOneRule, tapProtocol, tuningSteps } from '@/lib/advance/tuning-method'
+import type { TuningSheet } from '@/lib/advance/tuning-sheet'
 import { ink } from '../ink'
 import { mm } from '../paper-measure'
 import { Figures, Heading, Plain } from '../words'
 import { HeadColumn } from './head-column'
 import { LinkCode } from './link-code'
 import { PageFrame } from './page-frame'
-
-const cautionWords: Record<SheetHead['cautions'][number], string> = {
-  slack: 'slack at this note: the head may die',
-  choked: 'tight at this note: the head may choke',
-  'film-stress': 'the film is pulled hard: keep faces clear and ease down if it creaks',
-}
 
 /** One drum's sheet: what to bring each head to, in which order, with blank columns for the readings. */
 export function SheetPage({
@@ -29,7 +23,7 @@ export function SheetPage({
 }) {
   const [batter] = sheet.heads
   const warnings = sheet.heads.flatMap((head) =>
-    head.cautions.map((caution) => `${head.side}: ${cautionWords[caution]}`),
+    head.cautions.map((caution) => `${head.side}: ${sheetCautionWords[caution]}`),
   )
   return (
     <PageFrame pack={pack} title={`Tuning sheet, ${sheet.name}`}>
@@ -40,7 +34,6 @@ export function SheetPage({
           <Plain>
             {[
               `${sheet.roleWord}, ${sheet.sizeWords}`,
-              `even within ±${sheet.toleranceCents} cents`,
               ...(sheet.relationWords ? [sheet.relationWords] : []),
               ...(sheet.muffling === '' ? [] : [`muffling: ${sheet.muffling}`]),
             ].join('; ')}
@@ -60,11 +53,14 @@ export function SheetPage({
             key={head.side}
             style={{ flex: 1, paddingRight: head.side === 'batter' && sheet.heads.length > 1 ? mm(6) : 0 }}
           >
-            <HeadColumn head={head} />
+            <HeadColumn sheet={sheet} head={head} />
           </View>
         ))}
         {sheet.heads.length === 1 && <View style={{ flex: 1 }} />}
       </View>
+      <Plain size={8} style={{ marginTop: mm(2) }}>
+        {['How to tap.', tapProtocol, sheet.figures && openHeadWords(sheet.figures)].filter(Boolean).join(' ')}
+      </Plain>
       <View
         style={{
           flexDirection: 'row',
@@ -94,7 +90,7 @@ export function SheetPage({
           <Plain key={name} size={7.5}>{`${name}: ${words}`}</Plain>
         ))}
         <Plain size={7.5} colour="soft">
-          {[...(sheet.figures ? [`${figureWords(sheet.figures)}.`] : []), planningCaution].join(' ')}
+          {[...(sheet.figures ? [`${figureLine(sheet.figures)}.`] : []), planningCaution].join(' ')}
         </Plain>
       </View>
       <View style={{ flexDirection: 'row', marginTop: mm(1) }}>
@@ -114,26 +110,10 @@ export function SheetPage({
 /** The drum's one note, largest on the page. */
 function DrumNote({ note }: { note: TuningSheet['note'] }) {
   if (!note) return <Heading size={13}>No note set</Heading>
-  const { hz, name, cents } = note
   return (
     <View style={{ flexDirection: 'row', alignItems: 'baseline', marginBottom: mm(0.8) }}>
-      <Figures bold size={24} style={{ lineHeight: 1.05, marginRight: mm(3) }}>{`${hz.toFixed(1)} Hz`}</Figures>
-      <Heading size={13}>{cents === 0 ? name : `${name} ${cents > 0 ? '+' : '−'}${Math.abs(cents)} cents`}</Heading>
+      <Figures bold size={24} style={{ lineHeight: 1.05, marginRight: mm(3) }}>{`${note.hz.toFixed(1)} Hz`}</Figures>
+      <Heading size={13}>{sheetNoteWords(note)}</Heading>
     </View>
   )
-}
-
-function openHeadWords(apartHz: number): string {
-  return apartHz > MOST_WARBLE_HZ
-    ? 'two pitches in every tap while the other head rings'
-    : `false warble ${apartHz.toFixed(1)} Hz while the other head rings`
-}
-
-function figureWords({ tapRatio, tapRatioMeasured, upperPartner, falseWarbleHz }: SheetFigures): string {
-  const ratio = (value: number) => value.toFixed(2)
-  return [
-    `Tap over note ${ratio(tapRatio.value)}, ${tapRatioMeasured ? 'measured' : `${ratio(tapRatio.low)} to ${ratio(tapRatio.high)}`}`,
-    ...(upperPartner ? [`upper partner ${upperPartner.lowHz.toFixed(0)} to ${upperPartner.highHz.toFixed(0)} Hz`] : []),
-    ...(falseWarbleHz === null ? [] : [openHeadWords(falseWarbleHz)]),
-  ].join('; ')
 }
