@@ -112,7 +112,7 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
             costs={view.costSteps}
             hands={editing ? hands.onChart : null}
           />
-          {judged && (
+          {judged && !chosen && (
             <p className="mt-2 border-t border-line pt-2 text-sm">
               {planWhy(judged, null, nameOf).join(' ')} It costs {view.costWords}.
             </p>
