@@ -1,5 +1,24 @@
+/** Two Butterworth sections make 24 dB an octave. */
+const SECTION_QS = [0.541196, 1.306563]
+
+/** The sound above a cut, 24 dB an octave, sample by sample (bilinear transform). */
+export class HighPass {
+  private readonly sections: Section[]
+
+  /** @param cutHz under half the sample rate */
+  constructor(sampleRateHz: number, cutHz: number) {
+    this.sections = SECTION_QS.map((q) => new Section(sampleRateHz, cutHz, q))
+  }
+
+  next(value: number): number {
+    let passed = value
+    for (const section of this.sections) passed = section.next(passed)
+    return passed
+  }
+}
+
 /**
- * The sound above `cutHz`, 24 dB an octave (two Butterworth sections, bilinear transform).
+ * The stretch from `from` (included) to `to` (not) above `cutHz`, as a {@link HighPass} that was at rest before it passes it.
  * @param cutHz under half the sample rate
  */
 export function highPass(
@@ -9,33 +28,37 @@ export function highPass(
   sampleRateHz: number,
   cutHz: number,
 ): Float32Array {
-  let sound: Float32Array = samples.slice(from, to)
-  for (const q of [0.541196, 1.306563]) sound = section(sound, sampleRateHz, cutHz, q)
-  return sound
+  const filter = new HighPass(sampleRateHz, cutHz)
+  return samples.slice(from, to).map((value) => filter.next(value))
 }
 
-function section(sound: Float32Array, sampleRateHz: number, cutHz: number, q: number): Float32Array {
-  const w = (2 * Math.PI * cutHz) / sampleRateHz
-  const alpha = Math.sin(w) / (2 * q)
-  const cos = Math.cos(w)
-  const a0 = 1 + alpha
-  const b0 = (1 + cos) / 2 / a0
-  const b1 = -(1 + cos) / a0
-  const a1 = (-2 * cos) / a0
-  const a2 = (1 - alpha) / a0
-  const out = new Float32Array(sound.length)
-  let x1 = 0
-  let x2 = 0
-  let y1 = 0
-  let y2 = 0
-  for (let i = 0; i < sound.length; i++) {
-    const x = sound[i] ?? 0
-    const y = b0 * x + b1 * x1 + b0 * x2 - a1 * y1 - a2 * y2
-    out[i] = y
-    x2 = x1
-    x1 = x
-    y2 = y1
-    y1 = y
+class Section {
+  private readonly b0: number
+  private readonly b1: number
+  private readonly a1: number
+  private readonly a2: number
+  private x1 = 0
+  private x2 = 0
+  private y1 = 0
+  private y2 = 0
+
+  constructor(sampleRateHz: number, cutHz: number, q: number) {
+    const w = (2 * Math.PI * cutHz) / sampleRateHz
+    const alpha = Math.sin(w) / (2 * q)
+    const cos = Math.cos(w)
+    const a0 = 1 + alpha
+    this.b0 = (1 + cos) / 2 / a0
+    this.b1 = -(1 + cos) / a0
+    this.a1 = (-2 * cos) / a0
+    this.a2 = (1 - alpha) / a0
   }
-  return out
+
+  next(x: number): number {
+    const y = this.b0 * x + this.b1 * this.x1 + this.b0 * this.x2 - this.a1 * this.y1 - this.a2 * this.y2
+    this.x2 = this.x1
+    this.x1 = x
+    this.y2 = this.y1
+    this.y1 = y
+    return y
+  }
 }

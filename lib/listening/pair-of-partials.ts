@@ -5,7 +5,7 @@ export const WIDEST_PAIR_HZ = 14
 /** The second of a pair falls at most so many times as fast as the first: both are one shape on one film. */
 const MOST_DECAY_RATIO = 3
 /** Two that nearly cancel are no pair: their amplitudes together over that of the one partial that they replace. */
-const MOST_TOGETHER = 2.5
+const MOST_TOGETHER = 4
 
 type Ringing = { decay: number; angle: number }
 

@@ -1,5 +1,6 @@
 import { analyseStrike } from './analyse-strike'
 import { checkSampleRate, checkSamples, checkTapOptions } from './check-sound'
+import { HighPass } from './high-pass'
 import { LONGEST_RING_S } from './hear-strike'
 import { STEP } from './strike-onset'
 import type { TapOptions, TapReport } from './tap-report'
@@ -11,6 +12,8 @@ export type HeardTap = {
   latencyS: number
 }
 
+/** Strikes are looked for above this, Hz: below it a room's noise swells as fast as a strike does. */
+const SHARP_HZ = 150
 /** Mean squares. The floor is never taken to be under −70 dB of full scale. */
 const LEAST_FLOOR = 1e-7
 /** What a strike must stand over: the floor, and everything from 16 to 4 ms before. */
@@ -48,8 +51,12 @@ export class TapListener {
   private pushed = 0
   private judged = 0
   private floor = LEAST_FLOOR
+  /** The same of the sharp part, in which strikes are looked for, and what was heard of it lately. */
+  private sharpFloor = LEAST_FLOOR
   private loudest = 0
   private readonly recent = new Float64Array(LOOK_BACK + GAP)
+  private readonly sharpPart: HighPass
+  private sharp = 0
   private capture: Capture | null = null
 
   /** @throws AcousticsError rate other than 44 100 or 48 000, an option out of its range */
@@ -59,6 +66,7 @@ export class TapListener {
   ) {
     checkSampleRate(sampleRateHz)
     checkTapOptions(options)
+    this.sharpPart = new HighPass(sampleRateHz, SHARP_HZ)
     this.kept = new Float32Array(STEP * Math.ceil(((LONGEST_RING_S + 0.3) * sampleRateHz) / STEP))
   }
 
@@ -69,6 +77,7 @@ export class TapListener {
     for (const value of frames) {
       this.kept[this.pushed % this.kept.length] = value
       this.pushed++
+      this.sharp += this.sharpPart.next(value) ** 2 / STEP
       if (this.pushed - this.judged === STEP) heard.push(...this.judge())
     }
     return heard
@@ -86,7 +95,9 @@ export class TapListener {
     this.judged += STEP
     let loudness = 0
     for (let i = from; i < this.judged; i++) loudness += this.at(i) ** 2 / STEP
-    const isStrike = this.isStrike(loudness)
+    const sharpness = this.sharp
+    this.sharp = 0
+    const isStrike = this.isStrike(sharpness)
     const heard: HeardTap[] = []
     const { capture } = this
     if (capture !== null) {
@@ -108,25 +119,28 @@ export class TapListener {
     if (this.capture === null && isStrike) {
       this.capture = { at: Math.max(0, from - STEP), quiet: this.floor, loudest: loudness, lastLoud: this.judged }
     }
-    this.follow(loudness)
+    this.follow(loudness, sharpness)
     return heard
   }
 
-  private isStrike(loudness: number): boolean {
-    if (loudness < OVER_FLOOR * this.floor || loudness < BESIDE_LOUDEST * this.loudest) return false
+  private isStrike(sharpness: number): boolean {
+    if (sharpness < OVER_FLOOR * this.sharpFloor || sharpness < BESIDE_LOUDEST * this.loudest) return false
     let before = 0
     for (let i = 0; i < LOOK_BACK; i++) before = Math.max(before, this.recent[i] ?? 0)
-    return loudness > RISE * before
+    return sharpness > RISE * before
   }
 
-  private follow(loudness: number): void {
+  private follow(loudness: number, sharpness: number): void {
     this.recent.copyWithin(0, 1)
-    this.recent[this.recent.length - 1] = loudness
-    this.loudest = Math.max(loudness, this.loudest * FORGET_A_SECOND ** (STEP / this.sampleRateHz))
+    this.recent[this.recent.length - 1] = sharpness
+    this.loudest = Math.max(sharpness, this.loudest * FORGET_A_SECOND ** (STEP / this.sampleRateHz))
+    this.floor = this.followed(this.floor, loudness)
+    this.sharpFloor = this.followed(this.sharpFloor, sharpness)
+  }
+
+  private followed(floor: number, level: number): number {
     const climb = CLIMB_A_SECOND ** (STEP / this.sampleRateHz)
-    const followed =
-      loudness < this.floor ? this.floor + FALL * (loudness - this.floor) : Math.min(loudness, this.floor * climb)
-    this.floor = Math.max(LEAST_FLOOR, followed)
+    return Math.max(LEAST_FLOOR, level < floor ? floor + FALL * (level - floor) : Math.min(level, floor * climb))
   }
 
   private close({ at, quiet }: Capture, end: number): HeardTap[] {
