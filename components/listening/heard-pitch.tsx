@@ -8,14 +8,14 @@ export function HeardPitch({ reading, locale }: { reading: TapReading; locale: N
   const doubt = tapDoubt(reading)
   return (
     <div className="border-l-4 border-reed bg-sheet px-3 py-2">
-      <p className="flex flex-wrap items-baseline gap-x-3 font-mono tabular-nums">
+      <p className="flex flex-wrap items-baseline gap-x-3 figures">
         <span>
           <strong className="text-5xl leading-none font-bold">{tapHertz(reading)}</strong> Hz
         </span>
         <span className="text-soft">{tapHertzError(reading)}</span>
         <span>{tapNote(reading, locale)}</span>
       </p>
-      <p className="pt-1 font-mono text-sm text-soft tabular-nums">
+      <p className="figures pt-1 text-sm text-soft">
         {centsFromTarget !== null && (
           <>
             {Math.abs(Math.round(centsFromTarget))} cents {centsFromTarget < 0 ? 'under' : 'over'} the target ·{' '}

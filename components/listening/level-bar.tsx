@@ -14,7 +14,7 @@ export function LevelBar({ peak }: { peak: number }) {
       aria-valuemin={LOWEST_DB}
       aria-valuemax={0}
       aria-valuenow={Math.round(db)}
-      aria-valuetext={`${Math.round(db)} dB of full scale${loud ? ', too loud' : ''}`}
+      aria-valuetext={`−${Math.abs(Math.round(db))} dB of full scale${loud ? ', too loud' : ''}`}
       className="flex min-w-40 grow items-center gap-2"
     >
       <span className="h-3 grow border border-line bg-wash">
@@ -23,7 +23,7 @@ export function LevelBar({ peak }: { peak: number }) {
           style={{ width: `${(1 - db / LOWEST_DB) * 100}%` }}
         />
       </span>
-      <span className="w-20 text-sm text-soft">{loud ? 'too loud' : `${Math.round(db)} dB`}</span>
+      <span className="figures w-20 text-sm text-soft">{loud ? 'too loud' : `−${Math.abs(Math.round(db))} dB`}</span>
     </div>
   )
 }

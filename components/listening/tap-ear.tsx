@@ -62,16 +62,13 @@ export function TapEar({ what, expectHz, expectWithinCents, referenceHz, locale 
 
   const listening = standing.at === 'listening'
   return (
-    <section aria-label={what === undefined ? 'Listening' : `Listening for ${what}`} className="space-y-3">
+    <section aria-label={what === undefined ? 'Listening' : `Listening for ${what}`} className="thumb space-y-3">
       <div className="flex flex-wrap items-center gap-3">
         {listening ? (
-          <Button className="min-h-12" onClick={() => stop.current?.abort()}>
-            Stop listening
-          </Button>
+          <Button onClick={() => stop.current?.abort()}>Stop listening</Button>
         ) : (
           <Button
             kind="primary"
-            className="min-h-12"
             busy={standing.at === 'opening' && 'Opening the microphone'}
             onClick={() => void listen()}
           >
