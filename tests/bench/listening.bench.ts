@@ -16,9 +16,9 @@ const SEED = 20_261_201
 
 export const rows: Bench = async (say) => {
   say('taps in noise, ours and four detectors')
-  const pitch = pitchRows(pitchCases(SEED, 12, 3))
+  const pitch = pitchRows(pitchCases(SEED, 12, 4))
   say('warble')
-  const warble = warbleRows(SEED + 1, 6)
+  const warble = warbleRows(SEED + 1, 4)
   say('non-taps and good taps in a room')
   const refusals = refusalRows(SEED + 2, 120)
   say('time')
