@@ -65,7 +65,7 @@ export function NotePlanner(props: NotePlannerProps) {
 function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
   const { partyId, rigId, reader, mayEdit, inKit } = props
   const own = useNoteTemplates(partyId, props.templates).data
-  const { session, state } = useNoteSession(rigId, firstChoices(inKit))
+  const { session, state } = useNoteSession({ rigId, choices: firstChoices(inKit), keeps: mayEdit })
   const [chosenId, setChosenId] = useState<string | null>(null)
   const [typedC, setTypedC] = useState('')
   const set = useSetNotes(rigId)

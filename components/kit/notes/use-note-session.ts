@@ -12,9 +12,18 @@ function deviceStorage(): Storage | null {
   }
 }
 
-/** The plan of this page and the way to change it. The page begins with the kit's notes and then takes up what the device kept. */
-export function useNoteSession(rigId: string, choices: PlanChoices) {
-  const [session] = useState(() => createNoteSession({ rigId, shelf: deviceStorage(), choices, now: () => new Date() }))
+/**
+ * The plan of this page and the way to change it. The page begins with the kit's notes and then takes up what the device kept; who
+ * only reads keeps nothing.
+ */
+export function useNoteSession(input: { rigId: string; choices: PlanChoices; keeps: boolean }) {
+  const [session] = useState(() =>
+    createNoteSession({
+      ...input,
+      shelf: input.keeps ? deviceStorage() : null,
+      now: () => new Date(),
+    }),
+  )
   const state = useSyncExternalStore(session.subscribe, session.state, session.fresh)
   return { session, state }
 }
