@@ -1,12 +1,15 @@
 import { useFormContext, useWatch } from 'react-hook-form'
 import { Checkbox } from '@/components/ui/checkbox'
 import { drumRoles, drumRoleWords, lugCounts } from '@/lib/contracts/kit'
+import { noteFrequencyHz } from '@/lib/acoustics/note'
 import type { DrumForm, NoteReader } from '@/lib/contracts/kit-form'
+import { noteValue } from '@/lib/contracts/kit-form'
 import { HEAD_RELATIONS } from '@/lib/tuning/head-relation'
 import { headRelationWords } from '@/lib/tuning/interval-name'
 import { CommonFields } from './common-fields'
 import { FormPart } from './form-part'
 import { HeadFields } from './head-fields'
+import { MeasureTapRatio } from './measure-tap-ratio'
 import { NoteField } from './note-field'
 import { SizeField } from './size-field'
 import { TextField } from './text-field'
@@ -22,12 +25,18 @@ function relationHint(cents: number): string {
 
 /** Everything a drum is described by. */
 export function DrumFields({ reader }: { reader: NoteReader }) {
-  const { register } = useFormContext<DrumForm>()
-  const [role, hasResonant, takesOther, relation] = useWatch<
+  const { register, setValue, setFocus } = useFormContext<DrumForm>()
+  const [role, hasResonant, takesOther, relation, note] = useWatch<
     DrumForm,
-    ['spec.role', 'hasResonant', 'takesOther', 'spec.headRelationCents']
-  >({ name: ['spec.role', 'hasResonant', 'takesOther', 'spec.headRelationCents'] })
+    ['spec.role', 'hasResonant', 'takesOther', 'spec.headRelationCents', 'spec.note']
+  >({ name: ['spec.role', 'hasResonant', 'takesOther', 'spec.headRelationCents', 'spec.note'] })
   const cents = Number(relation.trim().replace(',', '.').replace('−', '-'))
+  const typed = noteValue(note, reader)
+  const noteHz = 'value' in typed && typed.value ? noteFrequencyHz(typed.value, reader.referenceHz) : null
+  const takeRatio = (ratio: string) => {
+    setValue('spec.measuredTapRatio', ratio, { shouldDirty: true, shouldTouch: true, shouldValidate: true })
+    setFocus('spec.measuredTapRatio')
+  }
   return (
     <>
       <FormPart title="Drum">
@@ -71,6 +80,7 @@ export function DrumFields({ reader }: { reader: NoteReader }) {
           <TextField path="spec.warbleLimitHz" label="Warble under" unit="a second" hint="beats that are let pass" />
           <TextField path="spec.muffling" label="Muffling" optional />
         </div>
+        <MeasureTapRatio {...{ noteHz, hasResonant, reader }} onUse={takeRatio} />
         <Checkbox
           {...register('spec.noteLocked')}
           label="Lock the note"

@@ -12,6 +12,7 @@ import {
   requireTensionNPerM,
 } from './require-quantity'
 import { ROOM_TEMPERATURE_C } from './air'
+import { TAP_RATIO_LIMITS } from './tap-ratio-limits'
 import { loadedPair } from './two-head-drum'
 import type { LoadedPair } from './two-head-drum'
 
@@ -63,7 +64,7 @@ export function drumModel(drum: Drum, filmFactor = 1): DrumModel {
   requireDepthM(drum.depthM)
   const relation = requireQuantity('relationCents', drum.relationCents, { min: -1200, max: 1200, unit: 'cents' })
   if (measuredTapRatio !== undefined)
-    requireQuantity('measuredTapRatio', measuredTapRatio, { min: 1.2, max: 2.5, unit: '' })
+    requireQuantity('measuredTapRatio', measuredTapRatio, { ...TAP_RATIO_LIMITS, unit: '' })
   const closed = resonant !== null && !drum.ported
   const loads = (m: number) =>
     thickened(drum, closed ? loadedPair(m, { ...drum, resonant }) : openPair(m, drum), filmFactor)

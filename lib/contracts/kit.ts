@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { TAP_RATIO_LIMITS } from '@/lib/acoustics/tap-ratio-limits'
 import { WARBLE_LIMIT_HZ, warbleLimits } from '@/lib/tuning/warble-limit'
 import { idSchema, nameSchema, remarkSchema, versionSchema } from './common'
 
@@ -91,7 +92,12 @@ export const drumSpecSchema = z.object({
   /** How far the resonant head's tap stands above the batter's, each with the other head damped, cents. */
   headRelationCents: headRelationSchema,
   /** The batter's tap over the drum's note, measured on this drum; null: the model's. Replaces it where it is there. */
-  measuredTapRatio: z.number().min(1.2, 'at least 1.2').max(2.5, 'at most 2.5').nullable().default(null),
+  measuredTapRatio: z
+    .number()
+    .min(TAP_RATIO_LIMITS.min, `at least ${TAP_RATIO_LIMITS.min}`)
+    .max(TAP_RATIO_LIMITS.max, `at most ${TAP_RATIO_LIMITS.max}`)
+    .nullable()
+    .default(null),
   /** How far a lug may stand from the target and still be even, cents. */
   toleranceCents: z.number().min(1, 'at least 1 cent').max(100, 'at most 100 cents'),
   /** Warble that is let pass, beats a second. */

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { tapRefusalWords } from './listening-words'
+import { noteRefusalWords, tapRefusalWords } from './listening-words'
 import type { TapRefusalKind } from './tap-report'
 
 const kinds: Record<TapRefusalKind, true> = {
@@ -20,4 +20,10 @@ test('every refusal has words of its own, and none shouts', () => {
 
 test('two hits', () => {
   expect(tapRefusalWords('double-hit')).toBe('Not sure, tap again: two hits came together.')
+})
+
+test('a note without one pitch asks for the centre, never for a lug', () => {
+  expect(noteRefusalWords('unclear')).toMatch(/the centre with both heads free/)
+  expect(noteRefusalWords('unclear')).not.toMatch(/lug/)
+  expect(noteRefusalWords('clipped')).toBe(tapRefusalWords('clipped'))
 })

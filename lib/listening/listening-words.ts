@@ -14,3 +14,10 @@ const REFUSALS: Record<TapRefusalKind, string> = {
 export function tapRefusalWords(kind: TapRefusalKind): string {
   return REFUSALS[kind]
 }
+
+/** The same to the person who struck the drum's note. */
+export function noteRefusalWords(kind: TapRefusalKind): string {
+  return kind === 'unclear'
+    ? 'Not sure, strike again: no one pitch stands out. Strike the centre with both heads free.'
+    : REFUSALS[kind]
+}

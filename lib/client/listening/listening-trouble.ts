@@ -10,7 +10,7 @@ const WORDS: Record<ListeningTrouble, string> = {
     'The microphone is not allowed here. Allow it in the browser’s settings for this page, then listen again. Readings can be typed meanwhile.',
   'no-microphone': 'No microphone found. Plug one in and listen again, or type the reading.',
   busy: 'Another program holds the microphone. Close it and listen again.',
-  asleep: 'The browser keeps sound asleep. Press “Listen for a tap” again.',
+  asleep: 'The browser keeps sound asleep. Press the button once more to listen.',
   lost: 'The microphone went away. What was heard is kept; plug it in and listen again.',
   unsupported: 'This browser cannot listen. Type the reading, or open the page in a newer browser.',
   broken: 'The microphone’s sound cannot be read. Listen again, or type the reading.',
