@@ -13,6 +13,7 @@ import { useSavingForm } from '@/lib/client/use-saving-form'
 import type { Gauge, GaugePairInput, GaugePairRow, KnownHead } from '@/lib/contracts/gauge'
 import { gaugePairInputSchema } from '@/lib/contracts/gauge'
 import { filmOptions } from './film-options'
+import { ListenedTap } from './listened-tap'
 
 /** What of a head a pair keeps. */
 export type PairStart = Omit<GaugePairInput, 'reading' | 'tapHz'>
@@ -82,6 +83,7 @@ export function PairForm({ partyId, gauge, heads, start, onSaved, onClose }: Pai
         <NumberField form={form} name="tapHz" label="Tap" unit="Hz" hint="near a lug, other head damped" />
         <NumberField form={form} name="temperatureC" label="Temperature" unit="°C" optional />
       </div>
+      <ListenedTap onMedian={(hz) => form.setValue('tapHz', hz, { shouldDirty: true, shouldValidate: true })} />
       <Field label="Head" hint="Out of your kits; or write any other below.">
         {(control) => (
           <Select
