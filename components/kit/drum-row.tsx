@@ -54,8 +54,8 @@ export function DrumRow({ drum, reader, actions }: { drum: DrumEntry; reader: Ki
       </div>
       <div className="max-xl:col-span-2 max-xl:row-start-3">
         <dl className="flex flex-col gap-1">
-          <HeadLine side="batter" head={spec.batter} estimate={estimate} />
-          <HeadLine side="resonant" head={spec.resonant} estimate={estimate} />
+          <HeadLine side="batter" drum={drum} estimate={estimate} />
+          <HeadLine side="resonant" drum={drum} estimate={estimate} />
         </dl>
         {spec.resonant && !spec.ported && (
           <p className="mt-0.5 text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>

@@ -1,19 +1,24 @@
 import { headWords } from '@/lib/advance/kit-words'
-import type { Head } from '@/lib/contracts/kit'
+import type { DrumEntry, HeadSide } from '@/lib/contracts/kit'
 import type { DrumEstimate } from '@/lib/tuning/drum-estimate'
 import { hertz } from '@/lib/acoustics/figure-words'
+import type { HeadGauge } from '@/lib/tuning/gauge-of-head'
+import { startingBounds, startingWords } from '@/lib/tuning/gauge-words'
+import { useHeadGauge } from './tours-gauge'
 
 export interface HeadLineProps {
-  side: 'batter' | 'resonant'
-  head: Head | null
+  side: HeadSide
+  drum: DrumEntry
   /** The drum's; null without a note. */
   estimate: DrumEstimate | null
 }
 
-/** One head of a drum in a list: what it is, its tap pitch with its interval, and the gauge as noted. */
-export function HeadLine({ side, head, estimate }: HeadLineProps) {
+/** One head of a drum in a list: what it is, its tap pitch and its gauge reading, either with its bounds. */
+export function HeadLine({ side, drum, estimate }: HeadLineProps) {
+  const head = drum.spec[side]
+  const gauge = useHeadGauge(drum, side, estimate)
   return (
-    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_minmax(0,1fr)_11rem_4.5rem]">
+    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_minmax(0,1fr)_11rem_9rem]">
       <dt className="text-sm text-soft">{side}</dt>
       <dd>{head ? headWords(head) : 'no head'}</dd>
       {head && (
@@ -21,9 +26,9 @@ export function HeadLine({ side, head, estimate }: HeadLineProps) {
           <dd className="max-sm:col-start-2">
             <TapWords side={side} estimate={estimate} />
           </dd>
-          <dd className="max-sm:col-start-2 sm:text-right">
+          <dd className="max-sm:col-start-2">
             <span className="text-sm text-soft">gauge </span>
-            <span className="figures">{head.gauge ?? '–'}</span>
+            <GaugeWords gauge={gauge} noted={head.gauge} />
           </dd>
         </>
       )}
@@ -47,5 +52,23 @@ function TapWords({ side, estimate }: Pick<HeadLineProps, 'side' | 'estimate'>) 
         {Math.round(low)}–{Math.round(high)}
       </span>
     </span>
+  )
+}
+
+/** The reading foretold, and the one that was noted where there is one. */
+function GaugeWords({ gauge, noted }: { gauge: HeadGauge | null; noted: number | null }) {
+  if (gauge?.kind !== 'foretold') return <span className="figures">{noted ?? '–'}</span>
+  const { start, scale } = gauge
+  const bounds = startingBounds(start, scale)
+  return (
+    <>
+      <span className="figures font-bold">{startingWords(start, scale)}</span>
+      {bounds && <span className="figures text-sm text-soft"> {bounds}</span>}
+      {noted !== null && (
+        <span className="block text-sm text-soft">
+          noted <span className="figures">{noted}</span>
+        </span>
+      )}
+    </>
   )
 }

@@ -53,10 +53,10 @@ export function PlannedDrum({ drum, was, standings, reader, stage }: PlannedDrum
             </ul>
           )}
         </div>
-        {estimate && <HeadFigures side="batter" head={spec.batter} tuning={estimate.tuning} />}
+        {estimate && <HeadFigures side="batter" drum={drum} estimate={estimate} />}
         {estimate && spec.resonant && (
           <div>
-            <HeadFigures side="resonant" head={spec.resonant} tuning={estimate.tuning} />
+            <HeadFigures side="resonant" drum={drum} estimate={estimate} />
             {!spec.ported && <p className="text-sm text-soft">{headRelationWords(spec.headRelationCents)}</p>}
           </div>
         )}

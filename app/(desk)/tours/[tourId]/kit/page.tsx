@@ -2,13 +2,16 @@ import type { Metadata, Route } from 'next'
 import { notFound } from 'next/navigation'
 import { KitList } from '@/components/kit/kit-list'
 import { NotePlanner } from '@/components/kit/notes/note-planner'
+import { ToursGauge } from '@/components/kit/tours-gauge'
 import { EmptyState } from '@/components/ui/empty-state'
 import { NavLinks } from '@/components/ui/nav-links'
 import { noteLocale } from '@/lib/advance/note-locale'
+import { RefreshOnLive } from '@/lib/client/live-provider'
 import { idSchema } from '@/lib/contracts/common'
 import { rolesMay } from '@/lib/contracts/permissions'
 import { pageActor } from '@/lib/server/auth/page-actor'
 import { pageAnswer } from '@/lib/server/auth/page-answer'
+import { readToursGauge } from '@/lib/server/gauges/read-gauges'
 import { readKitPage } from '@/lib/server/kit/read-kit'
 import { readNoteTemplates } from '@/lib/server/note-templates/note-templates'
 
@@ -45,7 +48,10 @@ export default async function KitPage({ params, searchParams }: Props) {
   const href = (to: 'kit' | 'notes') =>
     `/tours/${tour.id}/kit?rig=${rig.id}${to === 'notes' ? '&view=notes' : ''}` as Route
   const reader = { ...rig.reader, locale: noteLocale(rig.reader.locale) }
-  const templates = view === 'notes' ? (await readNoteTemplates(actor)).templates : []
+  const [gauge, templates] = await Promise.all([
+    pageAnswer(readToursGauge(actor)),
+    view === 'notes' ? readNoteTemplates(actor).then((read) => read.templates) : [],
+  ])
   const shared = { rigId: rig.id, initial: rig.entries, reader, mayEdit }
   return (
     <main id="main" className="mx-auto max-w-7xl px-4 pt-6 pb-24 sm:px-6">
@@ -61,11 +67,14 @@ export default async function KitPage({ params, searchParams }: Props) {
           ]}
         />
       </div>
-      {view === 'kit' ? (
-        <KitList key={rig.id} {...shared} sources={rig.sources} />
-      ) : (
-        <NotePlanner key={rig.id} {...shared} {...{ templates, partyId: actor.partyId, kitHref: href('kit') }} />
-      )}
+      <RefreshOnLive topics={[`gauge:${actor.partyId}`]} />
+      <ToursGauge gauge={gauge}>
+        {view === 'kit' ? (
+          <KitList key={rig.id} {...shared} sources={rig.sources} />
+        ) : (
+          <NotePlanner key={rig.id} {...shared} {...{ templates, partyId: actor.partyId, kitHref: href('kit') }} />
+        )}
+      </ToursGauge>
     </main>
   )
 }
