@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import type { NextMove } from './next-move'
+import type { NextMove } from './next-move-step'
 import { nextMoveWords } from './next-move-words'
 
 const blank: NextMove = {

@@ -1,5 +1,5 @@
 import { listed } from './head-state-words'
-import type { LugTurn, NextMove, TurnSize } from './next-move'
+import type { LugTurn, NextMove, TurnSize } from './next-move-step'
 
 const SIZE_WORDS: Readonly<Record<TurnSize, string>> = {
   hair: 'a hair (a sixteenth of a turn)',
@@ -82,6 +82,8 @@ function notSure({ reason, lugs }: NextMove, which: string): string {
   switch (reason) {
     case 'contradictory':
       return `${again}. ${lugs.length === 1 ? 'Its readings' : 'Their readings'} do not agree.`
+    case 'no-turn-helps':
+      return `Not sure: no turn is likely to bring ${which} closer. Look for a bent hoop or an uneven edge, or leave it so.`
     case 'no-reading':
       return `${again}. Without a reading there the head cannot be called even.`
     default:

@@ -3,9 +3,10 @@ import { describe, expect, it } from 'vitest'
 import { AcousticsError } from '@/lib/acoustics/acoustics-error'
 import { lugOrder } from './lug-order'
 import { nextMove } from './next-move'
-import type { NextMove, NextMoveInput } from './next-move'
+import type { NextMoveInput } from './next-move'
 import type { HeadEvent } from './next-move-log'
 import { facingLugs } from './next-move-plan'
+import type { NextMove } from './next-move-step'
 import { nextMoveWords } from './next-move-words'
 
 const usual = {
@@ -40,7 +41,8 @@ const anyState = fc
     const lug = fc.integer({ min: 1, max: lugs })
     const reading = fc.record({ lug, value }).map((of) => gauge(of.lug, of.value))
     const turn = fc
-      .array(fc.record({ lug, turns: fc.constantFrom(-0.25, -0.125, -0.0625, 0.0625, 0.125, 0.25) }), {
+      .uniqueArray(fc.record({ lug, turns: fc.constantFrom(-0.25, -0.125, -0.0625, 0.0625, 0.125, 0.25) }), {
+        selector: (turn) => turn.lug,
         minLength: 1,
         maxLength: 3,
       })
@@ -227,6 +229,18 @@ describe('what it makes of readings', () => {
     const move = nextMove({ ...usual, basis: 'tap', tolerance: 15, lugs: 6, log })
     expect(move.kind).toBe('turn')
     for (const hz of move.expected ?? []) expect(hz > 200 && hz < 260).toBe(true)
+  })
+
+  it('says that no turn helps where taps show a pattern that turns do not move (three high, three low)', () => {
+    const taps = [240, 232, 240, 232, 240, 232].map((value, i): HeadEvent => ({
+      kind: 'reading',
+      lug: i + 1,
+      method: 'tap-heard',
+      unit: 'Hz',
+      value,
+    }))
+    const move = nextMove({ ...usual, basis: 'tap', tolerance: 10, lugs: 6, log: [...taps, ...taps] })
+    expect(move).toMatchObject({ kind: 'not-sure', reason: 'no-turn-helps', turns: [] })
   })
 
   it('is the same head wherever lug 1 is: turning the labels by a half turns the advice', () => {

@@ -1,6 +1,6 @@
 import { compared, figure } from './bench-row'
 import type { Bench, BenchRow } from './bench-row'
-import { play, quantile, seconds } from './evenness/tournament'
+import { adviceMs, play, quantile, seconds } from './evenness/tournament'
 import type { Field, Players } from './evenness/tournament'
 import type { Score } from './evenness/game'
 
@@ -23,14 +23,14 @@ const COUNTS = [4, 5, 6, 7, 8, 9, 10, 11, 12]
 
 const FIELDS: (Omit<Field, 'lugs' | 'firstSeed'> & { name: string; full: boolean })[] = [
   { name: 'as modelled', kind: 'plain', drums: 400, against: 'mean', gainLearned: true, full: true },
-  { name: 'nothing learned', kind: 'plain', drums: 100, against: 'mean', gainLearned: false, full: false },
-  { name: 'quiet gauge', kind: 'plain', drums: 100, against: 'mean', gainLearned: true, noise: 0.2, full: false },
-  { name: 'rough gauge', kind: 'plain', drums: 100, against: 'mean', gainLearned: true, noise: 0.5, full: false },
-  { name: 'to a reading', kind: 'plain', drums: 100, against: 'target', gainLearned: true, full: false },
-  { name: 'friction', kind: 'friction', drums: 100, against: 'mean', gainLearned: true, full: false },
-  { name: 'sticking rod', kind: 'sticking rod', drums: 100, against: 'mean', gainLearned: true, full: false },
-  { name: 'side leak', kind: 'side leak', drums: 100, against: 'mean', gainLearned: true, full: false },
-  { name: 'bent hoop', kind: 'bent hoop', drums: 100, against: 'mean', gainLearned: true, full: false },
+  { name: 'nothing learned', kind: 'plain', drums: 60, against: 'mean', gainLearned: false, full: false },
+  { name: 'quiet gauge', kind: 'plain', drums: 60, against: 'mean', gainLearned: true, noise: 0.2, full: false },
+  { name: 'rough gauge', kind: 'plain', drums: 60, against: 'mean', gainLearned: true, noise: 0.5, full: false },
+  { name: 'to a reading', kind: 'plain', drums: 60, against: 'target', gainLearned: true, full: false },
+  { name: 'friction', kind: 'friction', drums: 60, against: 'mean', gainLearned: true, full: false },
+  { name: 'sticking rod', kind: 'sticking rod', drums: 60, against: 'mean', gainLearned: true, full: false },
+  { name: 'side leak', kind: 'side leak', drums: 60, against: 'mean', gainLearned: true, full: false },
+  { name: 'bent hoop', kind: 'bent hoop', drums: 60, against: 'mean', gainLearned: true, full: false },
 ]
 
 function figures(at: string, lugs: number, players: Players, full: boolean): BenchRow[] {
@@ -85,6 +85,7 @@ function figures(at: string, lugs: number, players: Players, full: boolean): Ben
       ),
       unit: '',
     }),
+    figure({ case: at, metric: 'advice, a call', value: adviceMs(lugs, FIRST_SEED), unit: 'ms', goal: 5 }),
     figure({ case: at, metric: 'first call of even true, advice', value: trueCalls(advice), unit: '%' }),
     ...habits.map(({ name, scores }) =>
       figure({ case: at, metric: `first call of even true, ${name}`, value: trueCalls(scores), unit: '%' }),

@@ -1,8 +1,8 @@
 import { HOOP_PRIORS } from '@/lib/tuning/hoop-learning'
 import type { KnownResponse } from '@/lib/tuning/next-move-response'
-import { followAdvice } from './advised'
+import { advise, followAdvice, gaugeReading } from './advised'
 import { bestPossible } from './best-possible'
-import { newGame } from './game'
+import { newGame, TOLERANCE } from './game'
 import type { Against, Score } from './game'
 import { blindPasses, worstLugFirst } from './habits'
 import type { Gains } from './habits'
@@ -65,6 +65,18 @@ export function play({ lugs, drums, firstSeed, kind, against, noise = GAUGE_NOIS
     blindDamped: habit(blindPasses({ leave: 0.8, share: 0.75 })),
     best,
   }
+}
+
+/** Median milliseconds of one call of the advice right after the first pass, where it plans the most. */
+export function adviceMs(lugs: number, firstSeed: number): number {
+  const times = Array.from({ length: 40 }, (_, i) => {
+    const drum = trueDrum(firstSeed + i, lugs, 'plain')
+    const log = Array.from({ length: lugs }, (__, lug) => gaugeReading(lug + 1, drum.read(lug + 1)))
+    const from = performance.now()
+    advise(log, { lugs, against: 'mean', tolerance: TOLERANCE, learned: null })
+    return performance.now() - from
+  })
+  return quantile(times, 0.5)
 }
 
 export function seconds(scores: readonly { seconds: number }[]): number[] {
