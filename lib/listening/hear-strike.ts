@@ -46,7 +46,8 @@ const WIDE_GLIDE_CENTS = 60
 const MOST_UNEXPLAINED = 0.25
 /** A pitch less sure than this is not named, cents. */
 const MOST_ERROR_CENTS = 25
-const LEAST_CONFIDENCE = 0.35
+/** Good taps read 0.68 and more down to 12 dB of pink noise; syllables, footsteps and rings cut off read less than this. */
+const LEAST_CONFIDENCE = 0.6
 
 /** The pitch of one strike, or why none is named. */
 export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
