@@ -1,5 +1,5 @@
 import { listed } from './head-state-words'
-import type { LugTurn, NextMove, TurnSize } from './next-move-step'
+import type { NextMove, TurnSize } from './next-move-step'
 
 const SIZE_WORDS: Readonly<Record<TurnSize, string>> = {
   hair: 'a hair (a sixteenth of a turn)',
@@ -100,9 +100,4 @@ function done({ reason, lugs }: NextMove, which: string): string {
 
 function lugWords(lugs: readonly number[]): string {
   return lugs.length === 1 ? `lug ${lugs[0]}` : `lugs ${listed(lugs.map(String))}`
-}
-
-/** One lug's turn in words: "lug 2 up a quarter turn". */
-export function lugTurnWords({ lug, size, turns }: LugTurn): string {
-  return `lug ${lug} ${turns > 0 ? 'up' : 'down'} ${SIZE_WORDS[size]}`
 }

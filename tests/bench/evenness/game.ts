@@ -5,11 +5,11 @@ import type { TrueDrum } from './true-drum'
 export const SECONDS_A_READING = 3
 export const SECONDS_A_MOVE = 5
 /** Seconds lost when a head called even is not: off its stand again, set up again; the readings that follow count besides. */
-export const SECONDS_A_FALSE_CALL = 30
+const SECONDS_A_FALSE_CALL = 30
 /** Every false call makes every player ask for this much closer readings. */
 const CLOSER = 0.8
 /** A head that is not even by then counts with these seconds. */
-export const SECONDS_AT_MOST = 900
+const SECONDS_AT_MOST = 900
 /** Readings within one unit count as even: common practice. */
 export const TOLERANCE = 1
 

@@ -33,7 +33,7 @@ export type Players = {
 }
 
 /** Relative deviation of the gain that the advice is told from the true one. */
-export const LEARNED_GAIN_SPREAD = 0.15
+const LEARNED_GAIN_SPREAD = 0.15
 const TOLD_STREAM = 103
 
 /** Everybody plays the same drums: the same start, hand and noise by seed. Drums that no turns can make even are left out. */

@@ -17,7 +17,7 @@ export type TrueDrum = {
 }
 
 /** Common practice: relative error of a key turn by hand, and one deviation of a gauge reading, units. */
-export const HAND_ERROR = 0.2
+const HAND_ERROR = 0.2
 export const GAUGE_NOISE = 0.35
 /** Reading wanted, units: common practice for a medium-high 12 in tom. */
 export const WANTED_READING = 75
