@@ -25,7 +25,7 @@ export function HeadTarget({ drum, head, readBy }: { drum: BenchDrum; head: Benc
             {head.tap && <span className="text-soft"> (±{toleranceHz(head.tap.hz, drum.toleranceCents)} Hz)</span>}
           </>
         )}
-        , warble under {drum.warbleLimitHz} a second.
+        {drum.role === 'snare' && head.side === 'resonant' ? '.' : `, warble under ${drum.warbleLimitHz} a second.`}
       </p>
       <p className="mt-2 text-soft">
         {readBy === 'gauge'

@@ -86,7 +86,9 @@ function Head({ sheet, head }: { sheet: TuningSheet; head: SheetHead }) {
             <>
               <p className="mt-1 text-sm text-soft">tap beside a lug</p>
               <p className="figures text-2xl leading-tight font-bold">{tap.hz.toFixed(1)} Hz</p>
-              <p className="figures text-sm text-soft">{`${tap.lowHz.toFixed(0)} to ${tap.highHz.toFixed(0)}, near ${tap.name}`}</p>
+              <p className="text-sm text-soft">
+                <span className="figures">{`${tap.lowHz.toFixed(0)}–${tap.highHz.toFixed(0)}`}</span> near {tap.name}
+              </p>
             </>
           )}
         </div>

@@ -19,8 +19,8 @@ describe('the words of a sheet', () => {
 
   it('give no warble advice on a snare side', () => {
     const snare = { role: 'snare', warbleLimitHz: 1 } as const
-    expect(warbleLimitWords(snare, 'batter')).toBe('warble under 1 a second')
-    expect(warbleLimitWords(snare, 'resonant')).toBe('snare beds: uneven on purpose, judge it by ear')
+    expect(warbleLimitWords(snare, 'batter')).toBe('under 1 a second')
+    expect(warbleLimitWords(snare, 'resonant')).toBe('not judged: snare beds are uneven on purpose')
   })
 
   it('say what a gauge reading is worth', () => {

@@ -27,8 +27,8 @@ export function toleranceWords(
 /** What warble is let pass on this head. */
 export function warbleLimitWords(sheet: Pick<TuningSheet, 'role' | 'warbleLimitHz'>, side: SheetHead['side']): string {
   return warbles(sheet, side)
-    ? `warble under ${sheet.warbleLimitHz} a second`
-    : 'snare beds: uneven on purpose, judge it by ear'
+    ? `under ${sheet.warbleLimitHz} a second`
+    : 'not judged: snare beds are uneven on purpose'
 }
 
 /** The gauge's starting reading and what it is worth. */

@@ -37,7 +37,7 @@ export function HeadColumn({ sheet, head }: { sheet: TuningSheet; head: SheetHea
           <Plain size={8} bold>
             {toleranceWords(sheet, head)}
           </Plain>
-          <Plain size={8}>{warbleLimitWords(sheet, head.side)}</Plain>
+          <Plain size={8}>{`warble ${warbleLimitWords(sheet, head.side)}`}</Plain>
           <Label>gauge to start from</Label>
           <View style={{ flexDirection: 'row', alignItems: 'baseline' }}>
             <Figures bold size={13} style={{ lineHeight: 1.1 }}>
