@@ -18,12 +18,12 @@ export function HeadLine({ side, drum, estimate }: HeadLineProps) {
   const head = drum.spec[side]
   const gauge = useHeadGauge(drum, side, estimate)
   return (
-    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_minmax(0,1fr)_11rem_9rem]">
+    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_10.5rem_minmax(0,1fr)]">
       <dt className="text-sm text-soft">{side}</dt>
-      <dd>{head ? headWords(head) : 'no head'}</dd>
+      <dd className="sm:col-span-2">{head ? headWords(head) : 'no head'}</dd>
       {head && (
         <>
-          <dd className="max-sm:col-start-2">
+          <dd className="col-start-2">
             <TapWords side={side} estimate={estimate} />
           </dd>
           <dd className="max-sm:col-start-2">
@@ -63,10 +63,10 @@ function GaugeWords({ gauge, noted }: { gauge: HeadGauge | null; noted: number |
   return (
     <>
       <span className="figures font-bold">{startingWords(start, scale)}</span>
-      {bounds && <span className="figures text-sm text-soft"> {bounds}</span>}
+      {bounds && <span className="figures text-sm whitespace-nowrap text-soft"> {bounds}</span>}
       {noted !== null && (
-        <span className="block text-sm text-soft">
-          noted <span className="figures">{noted}</span>
+        <span className="text-sm text-soft">
+          , noted <span className="figures">{noted}</span>
         </span>
       )}
     </>
