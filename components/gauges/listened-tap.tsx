@@ -4,23 +4,30 @@ import { useRef, useState } from 'react'
 import { TapEar } from '@/components/listening/tap-ear'
 import { TapsHeard } from '@/components/listening/taps-heard'
 import { Button } from '@/components/ui/button'
+import { LiveRegion } from '@/components/ui/live-region'
 import type { TapReading } from '@/lib/listening/tap-report'
 import type { TapsTogether } from '@/lib/listening/taps-together'
-import { tapsTogether } from '@/lib/listening/taps-together'
+import { tapsAgree, tapsTogether } from '@/lib/listening/taps-together'
 
 /** So many of the last taps make the pitch: a head that was moved since is soon out of it. */
 const LAST_TAPS = 5
 
-/** Hears taps of one head for a pair; each moves the median, which is handed on as it would be typed. */
-export function ListenedTap({ onMedian }: { onMedian: (hz: number) => void }) {
+export interface ListenedTapProps {
+  /** As it would be typed; null: the taps are not of one pitch, and what they filled in goes. */
+  onMedian: (hz: number | null) => void
+}
+
+/** Hears taps of one head for a pair; each moves the median, which is handed on. */
+export function ListenedTap({ onMedian }: ListenedTapProps) {
   // What is heard comes to the ear's listener as it was when listening began.
   const taps = useRef<readonly TapReading[]>([])
   const [together, setTogether] = useState<TapsTogether | null>(null)
+  const agree = together !== null && tapsAgree(together)
   const hold = (heard: readonly TapReading[]) => {
     taps.current = heard.slice(-LAST_TAPS)
     const now = tapsTogether(taps.current)
     setTogether(now)
-    if (now) onMedian(Number(now.medianHz.toFixed(1)))
+    if (now) onMedian(tapsAgree(now) ? Number(now.medianHz.toFixed(1)) : null)
   }
   return (
     <div className="flex flex-col gap-2">
@@ -32,13 +39,20 @@ export function ListenedTap({ onMedian }: { onMedian: (hz: number) => void }) {
       />
       {together && (
         <p className="flex flex-wrap items-center gap-x-2">
-          <span className="text-sm">Tap filled in:</span>
+          <span className="text-sm">{agree ? 'Tap filled in:' : 'Tap not filled in:'}</span>
           <TapsHeard {...together} />
-          <Button kind="quiet" onClick={() => hold([])}>
+          <Button kind="quiet" className="max-sm:-ml-4" onClick={() => hold([])}>
             Forget these taps
           </Button>
         </p>
       )}
+      {together && !agree && <p className="border-l-4 border-brass bg-paper px-3 py-2">{apartWords}</p>}
+      <LiveRegion>
+        {together && (agree ? `Filled in: ${together.medianHz.toFixed(1)} hertz, from ${together.count}.` : apartWords)}
+      </LiveRegion>
     </div>
   )
 }
+
+const apartWords =
+  'Not sure: these taps are not of one pitch. Forget them and tap again, beside the lug where the gauge was read.'

@@ -83,7 +83,13 @@ export function PairForm({ partyId, gauge, heads, start, onSaved, onClose }: Pai
         <NumberField form={form} name="tapHz" label="Tap" unit="Hz" hint="near a lug, other head damped" />
         <NumberField form={form} name="temperatureC" label="Temperature" unit="°C" optional />
       </div>
-      <ListenedTap onMedian={(hz) => form.setValue('tapHz', hz, { shouldDirty: true, shouldValidate: true })} />
+      <ListenedTap
+        onMedian={(hz) =>
+          hz === null
+            ? form.resetField('tapHz')
+            : form.setValue('tapHz', hz, { shouldDirty: true, shouldValidate: true })
+        }
+      />
       <Field label="Head" hint="Out of your kits; or write any other below.">
         {(control) => (
           <Select

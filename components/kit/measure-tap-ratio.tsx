@@ -81,16 +81,20 @@ function Measuring({ noteHz, hasResonant, reader, onUse }: MeasureTapRatioProps)
         {...(expectHz === null ? {} : { expectHz })}
         onHeard={(reading) => setHeard((before) => ({ ...before, [hearing]: [...before[hearing], reading] }))}
       />
-      <dl className="grid grid-cols-[auto_minmax(0,1fr)] items-center gap-x-4 border-t border-line pt-2">
+      <dl className="grid gap-x-4 border-t border-line pt-2 sm:grid-cols-[auto_minmax(0,1fr)] sm:items-center">
         {(['note', 'tap'] as const).map((pitch) => {
           const taps = together[pitch]
           return (
             <div key={pitch} className="contents">
-              <dt className="text-sm">{names[pitch]}</dt>
+              <dt className="text-sm max-sm:font-bold">{names[pitch]}</dt>
               <dd className="flex min-h-control flex-wrap items-center gap-x-2">
                 {taps ? <TapsHeard {...taps} /> : <span className="text-sm text-soft">not heard yet</span>}
                 {taps && (
-                  <Button kind="quiet" onClick={() => setHeard((before) => ({ ...before, [pitch]: [] }))}>
+                  <Button
+                    kind="quiet"
+                    className="max-sm:-ml-4"
+                    onClick={() => setHeard((before) => ({ ...before, [pitch]: [] }))}
+                  >
                     Forget {pitch === 'note' ? 'this note' : 'these taps'}
                   </Button>
                 )}

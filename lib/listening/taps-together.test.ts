@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { tapRandom } from './tap-random'
-import { tapsTogether } from './taps-together'
+import { tapsAgree, tapsTogether } from './taps-together'
 
 const taps = (errorHz: number, ...pitches: number[]) =>
   pitches.map((pitchHz) => ({ pitchHz, standardErrorHz: errorHz }))
@@ -43,6 +43,17 @@ describe('several taps together', () => {
       // Three standard errors of a share near 0.95 in 4000 rounds are 0.0103.
       expect(held.length / rounds.length).toBeGreaterThan(0.95 - 0.0103)
     }
+  })
+
+  it('agree up to a quarter tone, a factor of 2^(50/1200) (derived)', () => {
+    const agree = (...hz: number[]) => {
+      const together = tapsTogether(taps(0.1, ...hz))
+      return together && tapsAgree(together)
+    }
+    expect(agree(250)).toBe(true)
+    expect(agree(250, 256, 250 * 2 ** (49 / 1200))).toBe(true)
+    expect(agree(250, 252, 250 * 2 ** (51 / 1200))).toBe(false)
+    expect(agree(146.4, 255.1, 146.4)).toBe(false)
   })
 
   it('do not hang on the order, and scale with the pitch', () => {

@@ -35,6 +35,14 @@ export function tapsTogether(taps: readonly Pick<TapReading, 'pitchHz' | 'standa
   return { count, medianHz, lowestHz, highestHz, halfHz: count === 1 ? NORMAL_95 * own : halfOf(sorted, own) }
 }
 
+/** Further apart than this, taps of one head are not of one pitch, cents: a quarter tone, more than an uneven head's lugs. */
+const ONE_PITCH_CENTS = 50
+
+/** Whether they are of one pitch; if not, some were another partial or the head was moved between, and their median means nothing. */
+export function tapsAgree({ lowestHz, highestHz }: TapsTogether): boolean {
+  return 1200 * Math.log2(highestHz / lowestHz) <= ONE_PITCH_CENTS
+}
+
 function halfOf(pitchesHz: readonly number[], ownErrorHz: number): number {
   const middle = mean(pitchesHz)
   const freedom = pitchesHz.length - 1
