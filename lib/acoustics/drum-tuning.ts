@@ -107,8 +107,13 @@ export function drumTuning(input: DrumTuningInput): DrumTuning {
     const stress = (of: Solved) => filmStressPa(tension(of), film.plyMils) / of.film
     const tensionShares = [2 * scatter, ...(measured ? [2 * MEASURED_RATIO_SCATTER] : [])]
     const tensionNPerM = estimated(tension(nominal), ...tensionShares, byFilm(tension))
-    const pull = (newtonsPerM: number) => rodPullN(newtonsPerM, input.diameterM, input.lugs)
-    const pulls = { value: pull(tensionNPerM.value), low: pull(tensionNPerM.low), high: pull(tensionNPerM.high) }
+    // In proportion, and not by asking again: the upper bound of a tension that is allowed may lie past what is.
+    const perTension = rodPullN(tensionNPerM.value, input.diameterM, input.lugs) / tensionNPerM.value
+    const pulls = {
+      value: perTension * tensionNPerM.value,
+      low: perTension * tensionNPerM.low,
+      high: perTension * tensionNPerM.high,
+    }
     const range = film.range ?? defaultTensionRange(input.role, side)
     const position = rangePosition(tensionNPerM.value, range)
     const stressPa = estimated(stress(nominal), ...tensionShares, byFilm(stress))

@@ -24,10 +24,10 @@ export function rodPullN(tensionNPerM: number, diameterM: number, lugs: number):
 /**
  * Key torque in N·m for a rod pull: M = K·d·F, nominal with a dry thread. The range runs from a lubricated thread 30 %
  * under to a dry thread 30 % over: torque is a poor way to even a head.
- * @throws AcousticsError pull outside 0 to 20 000 N
+ * @throws AcousticsError pull outside 0 to 40 000 N, a large drum's at its most
  */
 export function keyTorqueNm(pullN: number): TorqueRange {
-  requireQuantity('pullN', pullN, { min: 0, max: 20_000, unit: 'N' })
+  requireQuantity('pullN', pullN, { min: 0, max: 40_000, unit: 'N' })
   const nominalNm = TORQUE_FACTOR_DRY * ROD_DIAMETER_M * pullN
   return {
     lowNm: TORQUE_FACTOR_LUBRICATED * ROD_DIAMETER_M * pullN * (1 - TORQUE_SCATTER),
