@@ -1,7 +1,7 @@
 import { besselJZero } from './bessel-j'
 import { principalDirections, requireHeadPair } from './head-pair'
 import type { HeadPair } from './head-pair'
-import { requireDiameterM, requireQuantity, requireTensionNPerM } from './require-quantity'
+import { requireDiameterM, requirePitchHz, requireQuantity, requireTensionNPerM } from './require-quantity'
 
 /**
  * Pitch in Hz of a tap beside a lug, shape (1,1), with a fingertip on the centre and the other head damped:
@@ -9,16 +9,21 @@ import { requireDiameterM, requireQuantity, requireTensionNPerM } from './requir
  * @throws AcousticsError
  */
 export function lugTapHz(tensionNPerM: number, massKgPerM2: number, radiusM: number): number {
-  const mass = requireQuantity('massKgPerM2', massKgPerM2, { min: 0.005, max: 5, unit: 'kg/m²' })
+  const mass = requireMass(massKgPerM2)
   return (
     (besselJZero(1, 1) / (Math.PI * requireDiameterM(2 * radiusM))) *
     Math.sqrt(requireTensionNPerM(tensionNPerM) / mass)
   )
 }
 
-/** Tension in N/m whose tap beside a lug has this pitch: the inverse of `lugTapHz`, in closed form. */
+/** Tension in N/m whose tap beside a lug has this pitch: the inverse of `lugTapHz`, in closed form. @throws AcousticsError */
 export function lugTapTensionNPerM(tapHz: number, massKgPerM2: number, radiusM: number): number {
-  return massKgPerM2 * ((tapHz * 2 * Math.PI * radiusM) / besselJZero(1, 1)) ** 2
+  const mass = requireMass(massKgPerM2)
+  return mass * ((requirePitchHz('tapHz', tapHz) * Math.PI * requireDiameterM(2 * radiusM)) / besselJZero(1, 1)) ** 2
+}
+
+function requireMass(massKgPerM2: number): number {
+  return requireQuantity('massKgPerM2', massKgPerM2, { min: 0.005, max: 5, unit: 'kg/m²' })
 }
 
 /**

@@ -36,6 +36,19 @@ export function defaultTensionRange(role: DrumRole, side: HeadSide = 'batter'): 
   return role === 'snare' && side === 'resonant' ? SNARE_SIDE : BATTER[role]
 }
 
+/** Refuses edges that are no tensions, or upside down. @throws AcousticsError naming `range` or the edge */
+export function requireTensionRange({ slackNPerM, chokedNPerM }: TensionRange): TensionRange {
+  requireTensionNPerM(slackNPerM, 'slackNPerM')
+  requireTensionNPerM(chokedNPerM, 'chokedNPerM')
+  if (slackNPerM >= chokedNPerM) {
+    throw new AcousticsError(
+      'range',
+      `The slack edge (${slackNPerM} N/m) must lie below the choked edge (${chokedNPerM} N/m).`,
+    )
+  }
+  return { slackNPerM, chokedNPerM }
+}
+
 /**
  * Where a film tension lies in its playable range. Counted in cents (pitch goes as √T, so by the logarithm of T);
  * the middle third is the safe aim (common practice).
@@ -43,15 +56,7 @@ export function defaultTensionRange(role: DrumRole, side: HeadSide = 'batter'): 
  */
 export function rangePosition(tensionNPerM: number, range: TensionRange): RangePosition {
   requireTensionNPerM(tensionNPerM)
-  const { slackNPerM, chokedNPerM } = range
-  requireTensionNPerM(slackNPerM)
-  requireTensionNPerM(chokedNPerM)
-  if (slackNPerM >= chokedNPerM) {
-    throw new AcousticsError(
-      'range',
-      `The slack edge (${slackNPerM} N/m) must lie below the choked edge (${chokedNPerM} N/m).`,
-    )
-  }
+  const { slackNPerM, chokedNPerM } = requireTensionRange(range)
   const fraction = Math.log(tensionNPerM / slackNPerM) / Math.log(chokedNPerM / slackNPerM)
   return { fraction, zone: zoneOf(fraction) }
 }
@@ -63,7 +68,8 @@ function zoneOf(fraction: number): RangeZone {
   return fraction <= 1 ? 'high' : 'choked'
 }
 
-/** Tension in N/m at the middle of a range, counted in cents: the geometric mean of its edges. */
-export function middleTensionNPerM({ slackNPerM, chokedNPerM }: TensionRange): number {
+/** Tension in N/m at the middle of a range, counted in cents: the geometric mean of its edges. @throws AcousticsError the range refused */
+export function middleTensionNPerM(range: TensionRange): number {
+  const { slackNPerM, chokedNPerM } = requireTensionRange(range)
   return Math.sqrt(slackNPerM * chokedNPerM)
 }

@@ -87,9 +87,11 @@ function filmEvenness({
 }): { meanNPerM: number; unevenness: Amount; warble: Amount } | null {
   requirePitchHz('tapHz', tapHz)
   const tensions = points.map((point) => ({ ...point, value: tensionAt(point.value) }))
-  const known = tensions.flatMap((point) => (point.value === null ? [] : [{ ...point, value: point.value }]))
+  const known = tensions.flatMap(({ value, ...point }) =>
+    value !== null && value > 0 && Number.isFinite(value) ? [{ ...point, value }] : [],
+  )
   const fit = known.length < points.length ? null : fitTwoFold(known, phases)
-  if (fit === null || !(fit.mean > 0)) return null
+  if (fit === null) return null
   const meanReading = points.reduce((sum, { value }) => sum + value, 0) / points.length
   const [above, below] = [tensionAt(meanReading + noise), tensionAt(meanReading - noise)]
   if (above === null || below === null) return null

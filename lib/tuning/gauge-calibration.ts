@@ -3,7 +3,7 @@ import type { GaugeCurve } from './gauge-curve'
 import { GaugeError } from './gauge-error'
 import type { GaugeProcess, ProcessPair } from './gauge-process'
 import { chanceUnder, fitGaugeProcess, moments, quantile } from './gauge-process'
-import { requireGaugeScale, requireReading } from './gauge-profile'
+import { requireFigure, requireGaugeScale, requireReading } from './gauge-profile'
 import type { GaugeHead, GaugePair, GaugeProfile, GaugeScale } from './gauge-profile'
 import { tensionOfTapNPerM } from './gauge-tension'
 
@@ -121,8 +121,9 @@ export function calibrateGauge(profile: GaugeProfile): GaugeCalibration {
   }
 }
 
-/** Whether a tension lies under or over what the gauge was calibrated on; null within. Rounding is not outside. */
+/** Whether a tension lies under or over what the gauge was calibrated on; null within. Rounding is not outside. @throws GaugeError no tension */
 export function outsideRange(calibration: GaugeCalibration, tensionNPerM: number): 'under' | 'over' | null {
+  requireFigure('tensionNPerM', tensionNPerM, 0, 50_000, 'N/m')
   const { lowNPerM, highNPerM } = calibration.range
   const rounding = 1e-9
   if (tensionNPerM < lowNPerM * (1 - rounding)) return 'under'

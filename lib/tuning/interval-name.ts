@@ -1,3 +1,5 @@
+import { requireQuantity } from '@/lib/acoustics/require-quantity'
+
 const NAMES = [
   'same note',
   'semitone',
@@ -18,10 +20,10 @@ const NAMED_WITHIN_CENTS = 5
 
 /**
  * The size of an interval in words, up or down alike: "fourth", "minor third +14 cents", "octave and fifth", "two octaves".
- * Cents may be any finite number.
+ * @throws AcousticsError cents no finite number, or beyond any pitch
  */
 export function intervalName(cents: number): string {
-  const size = Math.abs(cents)
+  const size = Math.abs(requireQuantity('cents', cents, { min: -1e9, max: 1e9, unit: 'cents' }))
   const semitones = Math.round(size / 100)
   const rest = Math.round(size - semitones * 100)
   const name = wholeName(semitones)
@@ -43,7 +45,7 @@ export function withArticle(name: string): string {
   return `${name.startsWith('octave') ? 'an' : 'a'} ${name}`
 }
 
-/** The relation between the heads in words, by how far the resonant stands above the batter in cents. */
+/** The relation between the heads in words, by how far the resonant stands above the batter in cents. @throws AcousticsError as `intervalName` */
 export function headRelationWords(cents: number): string {
   if (Math.abs(cents) < NAMED_WITHIN_CENTS) return 'both heads at the same pitch'
   const name = intervalName(cents)

@@ -18,11 +18,13 @@ const MOST_HALF_SHARE = 0.02
 
 /** The errors of the two pitches are independent, so their shares add as squares. */
 export function measuredTapRatio(tap: MeasuredPitch | null, note: MeasuredPitch | null): MeasuredTapRatio {
-  if (!tap || !note || Math.min(tap.count, note.count) < FEWEST_OF_EACH) return { outcome: 'unsure', why: 'too-few' }
-  const ratio = tap.medianHz / note.medianHz
+  if (!tap || !note || !(Math.min(tap.count, note.count) >= FEWEST_OF_EACH))
+    return { outcome: 'unsure', why: 'too-few' }
+  // Two pitches under nothing would make a ratio that looks right.
+  const ratio = note.medianHz > 0 ? tap.medianHz / note.medianHz : Number.NaN
   if (!(ratio >= TAP_RATIO_LIMITS.min && ratio <= TAP_RATIO_LIMITS.max)) return { outcome: 'unsure', why: 'impossible' }
   const share = Math.hypot(tap.halfHz / tap.medianHz, note.halfHz / note.medianHz)
-  return share <= MOST_HALF_SHARE
+  return Math.min(tap.halfHz, note.halfHz) >= 0 && share <= MOST_HALF_SHARE
     ? { outcome: 'measured', ratio, half: ratio * share }
     : { outcome: 'unsure', why: 'differ' }
 }

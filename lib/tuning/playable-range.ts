@@ -1,7 +1,7 @@
 import { drumModel } from '@/lib/acoustics/drum-model'
 import { nearestNote, noteFrequencyHz, STANDARD_REFERENCE_HZ } from '@/lib/acoustics/note'
 import type { Note } from '@/lib/acoustics/note'
-import { defaultTensionRange } from '@/lib/acoustics/tension-range'
+import { defaultTensionRange, requireTensionRange } from '@/lib/acoustics/tension-range'
 import { modelDrumOf } from './drum-estimate'
 import type { PitchedDrum, TradeDrum, TuningStage } from './drum-estimate'
 
@@ -36,10 +36,10 @@ export function drumPitch(drum: PitchedDrum, stage: TuningStage = {}): DrumPitch
  * The notes a drum can sound with its batter head inside the head's own range, or the role's default (from memory): even in cents of
  * the head, the middle third the safe aim (common practice), as in `rangePosition`. The resonant head follows by the relation and
  * may leave its own range before: each head's own cautions say so.
- * @throws AcousticsError whatever the drum is refused for
+ * @throws AcousticsError whatever the drum is refused for, or its range upside down
  */
 export function playableRange(drum: PitchedDrum & Pick<TradeDrum, 'role'>, stage: TuningStage = {}): PlayableRange {
-  const { slackNPerM, chokedNPerM } = drum.batter.range ?? defaultTensionRange(drum.role)
+  const { slackNPerM, chokedNPerM } = requireTensionRange(drum.batter.range ?? defaultTensionRange(drum.role))
   const { pitchAt } = drumPitch(drum, stage)
   const at = (fraction: number) => pitchAt(slackNPerM * (chokedNPerM / slackNPerM) ** fraction)
   return { low: at(0), middleLow: at(1 / 3), middleHigh: at(2 / 3), high: at(1) }
