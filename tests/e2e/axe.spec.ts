@@ -85,6 +85,11 @@ test.beforeAll(async ({ browser }) => {
   }
 })
 
+/** Every desk page, and of the kit its other view too, which is a page of its own but for its address. */
+function deskPaths(): string[] {
+  return [...addresses.values()].flatMap((path) => (path.endsWith('/kit') ? [path, `${path}?view=notes`] : [path]))
+}
+
 test('links lead to every desk page', () => {
   // A tour's own address only leads on to its run.
   const pages = pagesIn('(desk)').filter((pattern) => pattern !== '/tours/:')
@@ -95,7 +100,7 @@ for (const { role, theme, besides } of desks) {
   test(`axe finds nothing serious on any desk page of the ${role}`, async ({ browser }) => {
     const page = await deskOf(browser, role)
     const found: string[] = []
-    for (const path of addresses.values()) {
+    for (const path of deskPaths()) {
       found.push(...(await violationsAt(page, path, theme, { none: false, besides })))
     }
     expect(found).toEqual([])
