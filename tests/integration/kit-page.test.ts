@@ -51,6 +51,50 @@ describe('the kit page', () => {
     expect(shown).toContain('Film and rods.')
   })
 
+  it('shows the gauge as noted and how to have it foretold, while no gauge goes on tour', async () => {
+    for (const view of ['kit', 'notes']) {
+      const shown = await words(party.viewer.call, `${page}?view=${view}`)
+      expect(shown).toContain('Gauge readings are as noted. To have them foretold, choose a gauge that goes on tour')
+      expect(shown).not.toContain('noted 75')
+    }
+  })
+
+  it('foretells every head’s gauge by the tour’s gauge, beside the noted one, and gives a bound only outside its pairs', async () => {
+    const own = await makeParty()
+    const { tourId } = await makeTour(own)
+    const shown = (view: 'kit' | 'notes') => words(own.viewer.call, `/tours/${tourId}/kit?view=${view}`)
+    /** A gauge at the tour's side: five tunings of this very head, half a semitone apart round a tap, three divisions each. */
+    const calibrated = async (name: string, middleHz: number, middle: number) => {
+      const gauge = { name, scale: { min: 0, max: 100, step: 1 }, remark: '' }
+      const { id } = (await own.drumTech.call('POST', '/api/gauges', { gauge })).body as { id: string }
+      await own.drumTech.call('PUT', '/api/gauges/tours-gauge', { gaugeId: id })
+      expect(await shown('kit')).toMatch(new RegExp(`no curve yet from ${name} \\. .+ gauge 75 `))
+      for (const step of [-2, -1, 0, 1, 2]) {
+        const head = { diameterIn: 12, depthIn: 8, plyMils: [10], film: 'coated', coatingGPerM2: 0 }
+        const read = { reading: middle + 3 * step, tapHz: Number((middleHz * 2 ** (step / 24)).toFixed(2)) }
+        const pair = { ...head, ...read, temperatureC: 20, remark: '' }
+        expect((await own.drumTech.call('POST', `/api/gauges/${id}/pairs`, { pair })).status).toBe(201)
+      }
+    }
+    // The note's own tap read 60 in the middle of a straight line, so 60 is what it should read (derived).
+    await calibrated('Brass gauge', tapHz, 60)
+    const list = await shown('kit')
+    expect(list).toContain('Gauge readings are foretold by Brass gauge : 9 of 10 readings fall within the bounds.')
+    const heads = [...list.matchAll(/gauge 60 ([\d.]+)–([\d.]+) , noted 75/g)]
+    expect(heads).toHaveLength(2)
+    for (const [, low, high] of heads) {
+      expect(Number(low)).toBeLessThan(60)
+      expect(Number(high)).toBeGreaterThan(60)
+    }
+    expect([...(await shown('notes')).matchAll(/gauge 60 [\d.]+–[\d.]+ gauge, noted 75/g)]).toHaveLength(2)
+
+    // Calibrated an octave higher it knows one thing of this head: less than its lowest pair, which read 64.
+    await calibrated('Steel gauge', 2 * tapHz, 70)
+    const bound = /gauge under (6[345](?:\.5)?) , noted 75/g
+    expect([...(await shown('kit')).matchAll(bound)]).toHaveLength(2)
+    expect((await shown('notes')).split('Looser than any head this gauge was calibrated on')).toHaveLength(3)
+  })
+
   it('lets readers read and only a drum tech edit', async () => {
     for (const member of [party.owner, party.tourManager, party.viewer]) {
       expect(await words(member.call, page)).not.toContain('Add a drum')
