@@ -38,15 +38,22 @@ export function ListenedTap({ onMedian }: ListenedTapProps) {
         onHeard={(reading) => hold([...taps.current, reading])}
       />
       {together && (
-        <p className="flex flex-wrap items-center gap-x-2">
-          <span className="text-sm">{agree ? 'Tap filled in:' : 'Tap not filled in:'}</span>
-          <TapsHeard {...together} />
-          <Button kind="quiet" className="max-sm:-ml-4" onClick={() => hold([])}>
+        <div className="flex flex-wrap items-center gap-x-2">
+          {agree ? (
+            <p>
+              <span className="text-sm">Tap filled in:</span> <TapsHeard {...together} />
+            </p>
+          ) : (
+            <p className="border-l-4 border-brass bg-paper px-3 py-2">
+              {apartWords} They lie from <span className="figures">{together.lowestHz.toFixed(1)}</span> to{' '}
+              <span className="figures">{together.highestHz.toFixed(1)}</span> Hz.
+            </p>
+          )}
+          <Button kind="quiet" className="-ml-4 sm:ml-0" onClick={() => hold([])}>
             Forget these taps
           </Button>
-        </p>
+        </div>
       )}
-      {together && !agree && <p className="border-l-4 border-brass bg-paper px-3 py-2">{apartWords}</p>}
       <LiveRegion>
         {together && (agree ? `Filled in: ${together.medianHz.toFixed(1)} hertz, from ${together.count}.` : apartWords)}
       </LiveRegion>
@@ -55,4 +62,4 @@ export function ListenedTap({ onMedian }: ListenedTapProps) {
 }
 
 const apartWords =
-  'Not sure: these taps are not of one pitch. Forget them and tap again, beside the lug where the gauge was read.'
+  'Not sure, nothing is filled in: these taps are not of one pitch. Forget them and tap again, beside the lug where the gauge was read.'

@@ -18,7 +18,7 @@ export function HeadLine({ side, drum, estimate }: HeadLineProps) {
   const head = drum.spec[side]
   const gauge = useHeadGauge(drum, side, estimate)
   return (
-    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_10.5rem_minmax(0,1fr)]">
+    <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 sm:grid-cols-[4.5rem_11.5rem_minmax(0,1fr)]">
       <dt className="text-sm text-soft">{side}</dt>
       <dd className="sm:col-span-2">{head ? headWords(head) : 'no head'}</dd>
       {head && (
@@ -47,7 +47,7 @@ function TapWords({ side, estimate }: Pick<HeadLineProps, 'side' | 'estimate'>) 
     <span>
       <span className="text-sm text-soft">tap </span>
       <span className="figures font-bold">{hertz(value)} Hz</span>
-      <span className="figures text-sm text-soft">
+      <span className="figures text-sm whitespace-nowrap text-soft">
         {' '}
         {Math.round(low)}–{Math.round(high)}
       </span>
