@@ -1,5 +1,6 @@
 import FFT from 'fft.js'
 import type { TapRandom } from './tap-random'
+import { within } from './tap-within'
 
 export type NoiseColour = 'white' | 'pink'
 
@@ -40,8 +41,9 @@ function pink(count: number, sampleRateHz: number, random: TapRandom): Float64Ar
 /** Strength of the mains and its harmonics, from memory of what unbalanced leads pick up. */
 const HUM_HARMONICS = [1, 0.4, 0.5, 0.15, 0.25]
 
-/** Mains hum of root mean square 1: `mainsHz` (50 or 60) and four harmonics at chance phases. */
+/** Mains hum of root mean square 1: `mainsHz` (50 or 60) and four harmonics at chance phases. @throws RangeError mains outside 45 to 65 Hz */
 export function mainsHum(mainsHz: number, count: number, sampleRateHz: number, random: TapRandom): Float64Array {
+  within('mainsHz', mainsHz, 45, 65)
   const power = HUM_HARMONICS.reduce((sum, height) => sum + height ** 2 / 2, 0)
   const waves = HUM_HARMONICS.map((height, i) => ({
     height: height / Math.sqrt(power),

@@ -18,7 +18,7 @@ const MOST_HALF_SHARE = 0.02
 
 /** The errors of the two pitches are independent, so their shares add as squares. */
 export function measuredTapRatio(tap: MeasuredPitch | null, note: MeasuredPitch | null): MeasuredTapRatio {
-  if (!tap || !note || !(Math.min(tap.count, note.count) >= FEWEST_OF_EACH))
+  if (!tap || !note || ![tap, note].every(({ count }) => Number.isInteger(count) && count >= FEWEST_OF_EACH))
     return { outcome: 'unsure', why: 'too-few' }
   // Two pitches under nothing would make a ratio that looks right.
   const ratio = note.medianHz > 0 ? tap.medianHz / note.medianHz : Number.NaN

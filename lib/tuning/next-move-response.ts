@@ -1,3 +1,5 @@
+import { AcousticsError } from '@/lib/acoustics/acoustics-error'
+import { requireQuantity } from '@/lib/acoustics/require-quantity'
 import type { ReadingBasis } from './head-state'
 import { HAND_ERROR, HOOP_PRIORS } from './hoop-learning'
 import type { HoopLearning, LogNormal } from './hoop-learning'
@@ -16,6 +18,7 @@ const TAP_GAIN = HOOP_PRIORS.tap.gain
 /**
  * The gain to start from, reading units a whole round of turns, and its relative spread: learned, or the prior; a gauge of known
  * slope takes the taps' prior.
+ * @throws AcousticsError naming `learned`
  */
 export function startingGain(
   basis: ReadingBasis,
@@ -31,6 +34,8 @@ export function startingGain(
 }
 
 function logNormal({ value, low, high }: KnownResponse['gain']): LogNormal {
+  for (const figure of [value, low, high]) requireQuantity('learned', figure, { min: 1e-9, max: 1e9, unit: '' })
+  if (low > high) throw new AcousticsError('learned', `What was learned lies from ${low} to ${high}: upside down.`)
   return { median: value, spread: Math.max(0.01, Math.log(high / low) / (2 * NINE_IN_TEN)) }
 }
 
@@ -45,6 +50,7 @@ const CHANCES = { leak: 0.05, restless: 0.06 }
  * The ways a head may answer: hoops round the known one, and for each the model as it is, with a side leak, and as a head that
  * hardly follows it (turns half lost, lugs moving by themselves).
  * @param unit what counts as a small step of the readings: one deviation of a good reading
+ * @throws AcousticsError naming `learned`
  */
 export function waysToAnswer(
   lugs: number,
