@@ -17,8 +17,8 @@ export function WhyTheseNumbers({ name, input }: { name: string; input: DrumTuni
         <p className="max-w-prose text-sm">
           These are estimates. A drum has one note: both heads and the air between them swing together. The tap beside a
           lug is another shape of one head, and air weighs less on it: it lies near 1.7 or 1.8 times the note, not at
-          the 1.593 of a bare membrane. The bounds are the scatter of real heads against the model, and of film against
-          its nominal thickness. A ratio measured on this drum replaces the model: write it in the kit.
+          the 1.593 of a head without air. The bounds are the scatter of real heads against the model, and of film
+          against its nominal thickness. A ratio measured on this drum replaces the model: write it in the kit.
         </p>
         <Figures title="The drum" figures={drum} />
         {heads.map(({ side, figures }) => (

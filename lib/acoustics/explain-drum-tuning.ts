@@ -176,7 +176,7 @@ function ratioFigure({ tapRatio, tapRatioMeasured, batter, noteHz }: DrumTuning)
       : {
           mark: 'derived',
           source:
-            'A bare membrane has 1.593. Air weighs more on the note than on the tap, so on a real drum it lies near 1.7 to 1.8. Measure it once and keep it: it then replaces the model.',
+            'Without air it would be 1.593. Air weighs more on the note than on the tap, so on a real drum it lies near 1.7 to 1.8. Measure it once and keep it: it then replaces the model.',
         }),
   }
 }

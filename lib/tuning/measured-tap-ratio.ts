@@ -12,7 +12,7 @@ export type MeasuredTapRatio =
   | { readonly outcome: 'unsure'; readonly why: 'too-few' | 'differ' | 'impossible' }
 
 /** Under three taps a median leaves nothing out. */
-export const FEWEST_OF_EACH = 3
+const FEWEST_OF_EACH = 3
 /** The model itself lies within about 2 % of real drums (Rossing 1982, published): less sure than that, a measurement is no gain. */
 const MOST_HALF_SHARE = 0.02
 

@@ -80,7 +80,7 @@ export function tooCloseCost(semitones: number, apartSemitones: number): number 
 }
 
 /** Whether two pitches bear one note name, in whatever octave: within half a semitone. */
-export function sameName(pitch: number, other: number): boolean {
+function sameName(pitch: number, other: number): boolean {
   const apart = Math.abs(pitch - other) % 12
   return Math.min(apart, 12 - apart) < 0.5
 }

@@ -1,13 +1,5 @@
+import type { HeadPair } from '@/lib/acoustics/head-pair'
 import { generalisedEigenvalues } from './symmetric-matrix'
-
-export type GalerkinDrum = {
-  radiusM: number
-  depthM: number
-  tensionNPerM: readonly [number, number]
-  massKgPerM2: readonly [number, number]
-  /** Mass the air hands across, both heads counted along one axis. */
-  crossMassKgPerM2: number
-}
 
 /** Published zeros of J0, Abramowitz & Stegun table 9.5; McMahon's expansion beyond (A&S 9.5.12), good to 1e-7 from the fourth on. */
 const FIRST_ZEROS = [2.404825557696, 5.520078110286, 8.653727912911]
@@ -22,7 +14,7 @@ function zero(n: number): number {
  * J0(j_0n·r/a), the air's spring a rank-one stiffness on the swept volume, a dense eigenvalue problem. The normalised shape sweeps
  * 2·√π·a/j_0n, so no Bessel function is evaluated.
  */
-export function galerkinDrumHz(drum: GalerkinDrum, terms: number): number[] {
+export function galerkinDrumHz(drum: HeadPair, terms: number): number[] {
   const { radiusM, depthM, tensionNPerM, massKgPerM2, crossMassKgPerM2 } = drum
   const zeros = Array.from({ length: terms }, (_, i) => zero(i + 1))
   const spring = (1.4 * 101_325) / (Math.PI * radiusM ** 2 * depthM)
@@ -43,7 +35,7 @@ export function galerkinDrumHz(drum: GalerkinDrum, terms: number): number[] {
 }
 
 /** The n-th frequency in the limit of many terms: the error falls as 1/terms³, so two sizes give the rest (Richardson). */
-export function galerkinLimitHz(drum: GalerkinDrum, index: number, terms: number): number {
+export function galerkinLimitHz(drum: HeadPair, index: number, terms: number): number {
   const [coarse = Number.NaN, fine = Number.NaN] = [terms, 2 * terms].map((count) => galerkinDrumHz(drum, count)[index])
   return fine + (fine - coarse) / 7
 }
