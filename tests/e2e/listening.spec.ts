@@ -5,7 +5,7 @@ import { expect, test, type Browser, type LaunchOptions, type PlaywrightWorkerAr
 import { struckHead } from '@/lib/listening/tap-head'
 import type { TappedDrum } from '@/lib/listening/tap-head'
 import { makeTap } from '@/lib/listening/tap-synth'
-import { makeParty } from '../helpers/party-fixture'
+import { makeParty, type PartyFixture } from '../helpers/party-fixture'
 import { writeTapWav } from '../helpers/tap-wav'
 import { makeTour } from '../helpers/tour-fixture'
 import { wavFile } from '../helpers/wav-file'
@@ -20,39 +20,30 @@ const tom: TappedDrum = {
   ...{ decayT60S: 0.8, splitHz: 0, axisRad: 0 },
 }
 const folder = mkdtempSync(join(tmpdir(), 'microphone-'))
+/** What the microphone hears, round and round; read again each time that a page opens it. */
+const wav = join(folder, 'microphone.wav')
+let party: PartyFixture
+test.beforeAll(async () => {
+  party = await makeParty()
+})
 test.afterAll(() => rmSync(folder, { recursive: true }))
 
-/** A browser whose microphone plays a file, round and round, and is allowed without being asked for. */
-function hearing(
-  playwright: PlaywrightWorkerArgs['playwright'],
-  options: LaunchOptions,
-  wav: string,
-): Promise<Browser> {
-  return withMicrophone(playwright, options, [
-    '--use-fake-ui-for-media-stream',
-    `--use-file-for-fake-audio-capture=${wav}`,
-  ])
-}
-
+/** A browser whose microphone is that file, allowed without being asked for, or refused. */
 function withMicrophone(
   playwright: PlaywrightWorkerArgs['playwright'],
-  options: LaunchOptions,
-  args: readonly string[],
+  { args = [], ...options }: LaunchOptions,
+  allowed: '--use-fake-ui-for-media-stream' | '--deny-permission-prompts',
 ): Promise<Browser> {
-  return playwright.chromium.launch({
-    ...options,
-    args: [...(options.args ?? []), '--use-fake-device-for-media-stream', ...args],
-  })
+  const microphone = ['--use-fake-device-for-media-stream', `--use-file-for-fake-audio-capture=${wav}`, allowed]
+  return playwright.chromium.launch({ ...options, args: [...args, ...microphone] })
 }
 
 test('a tap is heard for a pair of a gauge and fills its field', async ({ playwright, launchOptions }) => {
-  const wav = join(folder, 'taps.wav')
   const [tap] = writeTapWav(wav, { drum: tom, lugs: 3, everyS: 0.9, seed: 7 })
   if (!tap) throw new Error('no tap was written')
-  const party = await makeParty()
   const gauge = { name: 'Brass gauge', scale: { min: 0, max: 100, step: 1 }, remark: '' }
   const { id } = (await party.drumTech.call('POST', '/api/gauges', { gauge })).body as { id: string }
-  const browser = await hearing(playwright, launchOptions, wav)
+  const browser = await withMicrophone(playwright, launchOptions, '--use-fake-ui-for-media-stream')
   const page = await pageOf(browser, party.drumTech)
   await page.goto(`/party/gauges/${id}`)
   await page.getByRole('button', { name: 'Add the first pair' }).click()
@@ -75,11 +66,9 @@ test('tap over note is measured by ear on the drum’s form, and what makes no s
   playwright,
   launchOptions,
 }) => {
-  const wav = join(folder, 'note-and-taps.wav')
   writeFileSync(wav, strokes(['note', 'tap', 'note', 'note']))
-  const party = await makeParty()
   const tour = await makeTour(party)
-  const browser = await hearing(playwright, launchOptions, wav)
+  const browser = await withMicrophone(playwright, launchOptions, '--use-fake-ui-for-media-stream')
   const page = await pageOf(browser, party.drumTech)
   await page.goto(`/tours/${tour.tourId}/kit?rig=${tour.rigId}`)
   await page.getByRole('button', { name: 'Edit Tom 12' }).click()
@@ -105,9 +94,8 @@ test('tap over note is measured by ear on the drum’s form, and what makes no s
 })
 
 test('a microphone that is refused says what to do, and typing stays', async ({ playwright, launchOptions }) => {
-  const party = await makeParty()
   const tour = await makeTour(party)
-  const browser = await withMicrophone(playwright, launchOptions, ['--deny-permission-prompts'])
+  const browser = await withMicrophone(playwright, launchOptions, '--deny-permission-prompts')
   const page = await pageOf(browser, party.drumTech)
   await page.goto(`/tours/${tour.tourId}/kit?rig=${tour.rigId}`)
   await page.getByRole('button', { name: 'Edit Tom 12' }).click()
