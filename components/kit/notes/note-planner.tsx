@@ -25,7 +25,7 @@ import { draftNoteOf, inNoteOrder, isTom } from './note-draft'
 import { PlanBar } from './plan-bar'
 import { PlanChoices } from './plan-choices'
 import { PlanFoot } from './plan-foot'
-import { planWhy } from './plan-why'
+import { planNow } from './plan-why'
 import { standingsOf } from './standing'
 import { useNoteHands } from './use-note-hands'
 import { useNoteSession } from './use-note-session'
@@ -102,7 +102,8 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
         </Notice>
       )}
       <div className="mt-4 grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,1fr)_21rem]">
-        <div className="min-w-0">
+        {/* In sight while the plans beside it are gone through. */}
+        <div className="min-w-0 lg:sticky lg:top-4 lg:self-start">
           <NoteChart
             {...{ drums, judged, reader, chosenId }}
             ranged={view.ranged}
@@ -113,9 +114,7 @@ function PlannerOf(props: NotePlannerProps & { inKit: readonly DrumEntry[] }) {
             hands={editing ? hands.onChart : null}
           />
           {judged && !chosen && (
-            <p className="mt-2 border-t border-line pt-2 text-sm">
-              {planWhy(judged, null, nameOf).join(' ')} It costs {view.costWords}.
-            </p>
+            <p className="mt-2 border-t border-line pt-2 text-sm">{planNow(judged, nameOf).join(' ')}</p>
           )}
           {mayEdit && (
             <p className="flex min-h-control flex-wrap items-center gap-x-1 text-sm">

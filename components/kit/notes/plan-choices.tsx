@@ -41,7 +41,7 @@ export function PlanChoices({ title, choices, drums, reader, lookedAt, hands }: 
   return (
     <section aria-label="Plans, best first">
       <h2 className="text-xl">Plans, best first</h2>
-      <p className="text-sm text-soft">{title}</p>
+      <p className="text-sm text-soft">{title}; notes in the order of the chart</p>
       <ol className="mt-2 border-t border-line">
         {choices.slice(0, all ? undefined : shownAtFirst).map((choice) => {
           const looking = choice.id === lookedAt

@@ -24,8 +24,18 @@ export function changeWords(change: PlanChange, nameOf: NameOf): string {
   return sentence(words.join('; '))
 }
 
-/** What speaks against a plan, drum by drum and step by step; that nothing does is said of the best one. */
+/** What speaks against one of the ranked plans, and its whole cost where not all of it is said; that nothing does is said of the best one. */
 export function planWhy(plan: JudgedPlan, change: PlanChange | null, nameOf: NameOf): string[] {
+  const { said, unsaid } = against(plan, change, nameOf)
+  return unsaid ? [...said, `In all it costs ${splitWords(plan.cost, plan.split)}.`] : said
+}
+
+/** What speaks against the plan as it is, and what it costs. */
+export function planNow(plan: JudgedPlan, nameOf: NameOf): string[] {
+  return [...against(plan, null, nameOf).said, `It costs ${splitWords(plan.cost, plan.split)}.`]
+}
+
+function against(plan: JudgedPlan, change: PlanChange | null, nameOf: NameOf): { said: string[]; unsaid: boolean } {
   const reasons = plan.intervals.flatMap((step) => {
     const words = intervalReason(step, nameOf)
     return words ? [{ ...step, words }] : []
@@ -41,16 +51,13 @@ export function planWhy(plan: JudgedPlan, change: PlanChange | null, nameOf: Nam
       .map(({ words }) => `${nameOf(drumId)}: ${words}.`),
   )
   const steps = [...(change?.kind === 'intervals' ? [] : otherwise), ...asAsked].map(({ words }) => words)
-  const against = [...steps, ...drums]
-  const shown = against.slice(0, sentencesAtMost)
-  return [
+  const all = [...steps, ...drums]
+  const said = [
     ...(change ? [changeWords(change, nameOf)] : []),
-    ...shown,
-    ...(against.length > shown.length ? [sentence(`in all it costs ${splitWords(plan.cost, plan.split)}`)] : []),
-    ...(change === null && against.length === 0
-      ? ['Every drum in the middle of its range, every interval as asked.']
-      : []),
+    ...all.slice(0, sentencesAtMost),
+    ...(change === null && all.length === 0 ? ['Every drum in the middle of its range, every interval as asked.'] : []),
   ]
+  return { said, unsaid: all.length > sentencesAtMost }
 }
 
 function sentence(words: string): string {

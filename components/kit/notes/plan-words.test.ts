@@ -41,6 +41,7 @@ describe('a plan in words', () => {
     expect(splitWords(2.44, { ...nothing, intervals: 2, offMiddle: 0.44 })).toBe(
       '2.4: 2 for intervals, 0.4 off the middle',
     )
+    expect(splitWords(2, { ...nothing, sharedNames: 2 })).toBe('2 for wires stirred')
     expect(splitWords(0, nothing)).toBe('nothing')
   })
 
