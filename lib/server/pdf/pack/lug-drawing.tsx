@@ -7,6 +7,8 @@ import { families } from '../register-fonts'
 const hoopShare = 0.7
 const numberShare = 0.87
 const textSize = 9
+/** At the top edge, over the numbers: those of twelve lugs leave no room beside them. */
+const badgeWord = { size: 6.5, baseline: 5.5 }
 
 /**
  * A head as its tuner faces it: badge at the top, lug numbers outside the hoop, and lines across it from each lug to the next
@@ -73,10 +75,10 @@ export function LugDrawing({ head, sizeMm }: { head: SheetHead; sizeMm: number }
       />
       <Text
         x={middle}
-        y={middle - hoop * 1.2}
+        y={badgeWord.baseline}
         textAnchor="middle"
         fill={ink.ink}
-        {...{ fontFamily: families.text, fontSize: 7.5, fontWeight: 400 }}
+        {...{ fontFamily: families.text, fontSize: badgeWord.size, fontWeight: 400 }}
       >
         badge
       </Text>

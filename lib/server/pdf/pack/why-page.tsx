@@ -27,8 +27,15 @@ export function WhyPage({ pack, sheets }: { pack: PackDocument; sheets: readonly
         of film against its nominal thickness. A measured pitch is worth more than any of them.
       </Plain>
       <View style={{ marginTop: mm(2), borderTop: `0.75pt solid ${ink.ink}` }}>
-        {formulas(drums.map(({ explanation }) => explanation)).map((figure) => (
-          <Formula key={`${figure.id} ${figure.formula}`} figure={figure} />
+        {formulas(drums).map(({ key, figure, names }) => (
+          <Formula
+            key={key}
+            figure={figure}
+            drums={whichDrums(
+              drums.map(({ name }) => name),
+              names,
+            )}
+          />
         ))}
       </View>
       {drums.map(({ entryId, name, explanation }) => (
@@ -47,14 +54,43 @@ export function WhyPage({ pack, sheets }: { pack: PackDocument; sheets: readonly
   )
 }
 
-/** Each formula once, in the order in which the drums use them, those of two heads first. */
-function formulas(explanations: readonly DrumExplanation[]): ExplainedFigure[] {
-  const fullestFirst = [...explanations].sort((a, b) => b.heads.length - a.heads.length)
-  const all = fullestFirst.flatMap(({ drum, heads }) => [...drum, ...heads.flatMap(({ figures }) => figures)])
-  return [...new Map(all.map((figure) => [`${figure.id} ${figure.formula} ${figure.mark}`, figure])).values()]
+interface ExplainedDrum {
+  readonly name: string
+  readonly explanation: DrumExplanation
 }
 
-function Formula({ figure: { label, formula, mark, source, inputs } }: { figure: ExplainedFigure }) {
+interface UsedFormula {
+  readonly key: string
+  readonly figure: ExplainedFigure
+  /** The drums whose figures come from it. */
+  readonly names: readonly string[]
+}
+
+/** Each formula once, in the order in which the drums use them, those of two heads first. */
+function formulas(drums: readonly ExplainedDrum[]): UsedFormula[] {
+  const fullestFirst = [...drums].sort((a, b) => b.explanation.heads.length - a.explanation.heads.length)
+  const used = new Map<string, UsedFormula>()
+  for (const { name, explanation } of fullestFirst) {
+    const figures = [...explanation.drum, ...explanation.heads.flatMap((head) => head.figures)]
+    for (const figure of figures) {
+      const key = `${figure.id} ${figure.formula} ${figure.mark}`
+      const names = used.get(key)?.names ?? []
+      used.set(key, { key, figure, names: names.includes(name) ? names : [...names, name] })
+    }
+  }
+  return [...used.values()]
+}
+
+/** Which of all drums are meant, the shorter way: "Tom 12", "all but Kick 22"; null: every one. */
+function whichDrums(all: readonly string[], names: readonly string[]): string | null {
+  const others = all.filter((name) => !names.includes(name))
+  if (others.length === 0) return null
+  return others.length < names.length ? `all but ${others.join(', ')}` : names.join(', ')
+}
+
+/** A formula with its mark and source, and the drums it is for where it is not for all. */
+function Formula({ figure, drums }: { figure: ExplainedFigure; drums: string | null }) {
+  const { label, formula, mark, source, inputs } = figure
   return (
     <View
       wrap={false}
@@ -65,7 +101,7 @@ function Formula({ figure: { label, formula, mark, source, inputs } }: { figure:
           {label}
         </Plain>
         <Plain size={7} colour="soft">
-          {mark}
+          {drums ? `${mark}; ${drums}` : mark}
         </Plain>
       </View>
       <View style={{ width: '36%', paddingRight: mm(2) }}>
