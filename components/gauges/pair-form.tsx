@@ -23,6 +23,19 @@ const blank: PairStart = {
   ...{ temperatureC: null, remark: '' },
 }
 
+const headFields = ['diameterIn', 'depthIn', 'plyMils', 'film', 'coatingGPerM2'] as const
+
+/** "Tom 12, batter: 12×8 in, …" is remarked as "Tom 12 batter". */
+const remarkOf = ({ words }: KnownHead) => words.slice(0, words.indexOf(':')).replace(/, (?=[^,]*$)/, ' ')
+
+/** The head of the kits that a pair was read on, if it is still as the pair keeps it. */
+function knownAs(pair: PairStart, heads: readonly KnownHead[]): KnownHead | undefined {
+  return heads.find(
+    (head) =>
+      remarkOf(head) === pair.remark && headFields.every((field) => String(head[field]) === String(pair[field])),
+  )
+}
+
 export interface PairFormProps {
   partyId: string
   gauge: Gauge
@@ -37,7 +50,7 @@ export interface PairFormProps {
 export function PairForm({ partyId, gauge, heads, start, onSaved, onClose }: PairFormProps) {
   const readAgain = useReadGaugesAgain(partyId)
   // A head out of a kit fills the fields below it; they hold what is sent.
-  const [chosen, setChosen] = useState('')
+  const [chosen, setChosen] = useState(() => (start && knownAs(start, heads)?.words) ?? '')
   const saving = useSavingForm<GaugePairInput, GaugePairRow>({
     schema: gaugePairInputSchema,
     start: start ?? blank,
@@ -61,9 +74,8 @@ export function PairForm({ partyId, gauge, heads, start, onSaved, onClose }: Pai
     setChosen(words)
     const head = heads.find((known) => known.words === words)
     if (!head) return
-    for (const field of ['diameterIn', 'depthIn', 'plyMils', 'film', 'coatingGPerM2'] as const)
-      form.setValue(field, head[field], { shouldDirty: true })
-    form.setValue('remark', words.slice(0, words.indexOf(':')).replace(/, (?=[^,]*$)/, ' '), { shouldDirty: true })
+    for (const field of headFields) form.setValue(field, head[field], { shouldDirty: true })
+    form.setValue('remark', remarkOf(head), { shouldDirty: true })
   }
   return (
     <SaveForm

@@ -9,6 +9,7 @@ import { headWords, inchWords } from '@/lib/advance/kit-words'
 import { useStrikeGaugePair } from '@/lib/client/gauges'
 import type { GaugePairRow } from '@/lib/contracts/gauge'
 import type { CalibratedPair } from '@/lib/tuning/gauge-calibration'
+import { tensionOfTapNPerM } from '@/lib/tuning/gauge-tension'
 
 /** A pair as it stands in the table, with what the calibration makes of it; null while there is none. */
 export interface ListedPair {
@@ -76,7 +77,7 @@ export function PairTable({ partyId, pairs, mayEdit }: PairTableProps) {
               {row.remark && <span className="block text-sm text-soft">{row.remark}</span>}
             </TableCell>
             <TableCell numeric className="max-sm:hidden">
-              {fitted && (fitted.tensionNPerM / 1000).toFixed(2)}
+              {(tensionOfTapNPerM(row, row.tapHz, row.temperatureC) / 1000).toFixed(2)}
             </TableCell>
             <TableCell numeric>
               {row.struck ? <span className="font-text">struck</span> : fitted && offWords(fitted.off)}
