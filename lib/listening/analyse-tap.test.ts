@@ -291,6 +291,11 @@ describe('refusals', () => {
   test('unclear: two pitches of one strength', () => {
     const two = [tap, { hz: 230, t60S: 0.7, amplitude: 0.3 }]
     expect(refused(struck(two, quiet))).toBe('unclear')
+    // The louder one above at 6 dB could be the next shape of the head, the one below it the tap.
+    const shapes = [tap, { hz: 201, t60S: 0.7, amplitude: 0.6 }]
+    expect(refused(struck(shapes, quiet))).toBe('unclear')
+    const told = heard(analyseTap(struck(shapes, quiet), 48_000, { expectHz: 160 }))
+    expect(told.pitchHz).toBeCloseTo(150, 1)
   })
 
   test('what cannot be judged is an error that names its field', () => {

@@ -1,15 +1,16 @@
+import { lookAgain } from './look-again'
+import { doubtOfPitch } from './doubt-of-pitch'
+import { ringSpectrum } from './ring-spectrum'
 import { chooseTapPartial, isNearTarget } from './choose-tap-partial'
 import { clippedUntil } from './clipped-until'
 import { findPartials } from './find-partials'
 import { glidingPitch } from './gliding-pitch'
-import { LOW_RATE_STEP, lowRate } from './low-rate'
-import type { PitchFits } from './pitch-models'
+import { LOW_RATE_STEP } from './low-rate'
+import type { BandFit } from './fit-band'
 import { fitPitchAmongNeighbours } from './pitch-among-neighbours'
 import type { FittedPitch } from './pitch-of-fit'
 import { pitchOfFit, T60_PER_TAU } from './pitch-of-fit'
 import { hasSecondStrike } from './second-strike'
-import type { Spectrum } from './spectrum'
-import { spectrumOf } from './spectrum'
 import type { TapGlide, TapReading, TapRefusalKind } from './tap-report'
 import { isDense, isHarmonic, LEAST_LOW_SHARE, lowShare } from './tap-signs'
 
@@ -48,6 +49,8 @@ const MOST_UNEXPLAINED = 0.25
 const MOST_ERROR_CENTS = 25
 /** Good taps read 0.68 and more down to 12 dB of pink noise; syllables, footsteps and rings cut off read less than this. */
 const LEAST_CONFIDENCE = 0.6
+/** Nor is a pitch named on which the looks at a ring agree no better, cents. */
+const MOST_DOUBT_CENTS = 15
 
 /** The pitch of one strike, or why none is named. */
 export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
@@ -65,7 +68,7 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
 
   const rateHz = sampleRateHz / LOW_RATE_STEP
   const firstFrom = Math.max(unclippedFrom, strikeAt + Math.round(FIRST_SKIP_S * sampleRateHz))
-  const found = findPartials(spectrumFrom(samples, firstFrom, end), rateHz).partials
+  const found = findPartials(ringSpectrum(samples, firstFrom, end), rateHz).partials
   const ringing = found.filter(({ decay }) => T60_PER_TAU / (decay * rateHz) < STEADY_T60_S)
   if (ringing.length === 0 && found.length > 0) return 'not-a-tap'
   // A pitch on its way looks like many partials side by side.
@@ -79,30 +82,38 @@ export function hearStrike(strike: StrikeToHear): HeardStrike | TapRefusalKind {
   const from = Math.max(unclippedFrom, strikeAt + skip)
   const ring = Math.round(Math.max(SHORTEST_WINDOW_S, RING_TAUS * tauS) * sampleRateHz)
   const until = Math.min(end, from + ring)
-  const fits = fitPitchAmongNeighbours(spectrumFrom(samples, from, until), rateHz, found, chosen)
-  if (fits === null) return 'unclear'
-  const unexplained = fits.best.residual / fits.best.energy
+  const spectrum = ringSpectrum(samples, from, until)
+  const fitted = fitPitchAmongNeighbours(spectrum, rateHz, found, chosen)
+  if (fitted === null) return 'unclear'
+  const { fit } = fitted
+  const unexplained = fit.residual / fit.energy
   if (moving !== null && unexplained > GLIDE_UNEXPLAINED) return moving
   const sinceStrikeS = (from - strikeAt) / sampleRateHz
-  const pitch = pitchOfFit(fits.best, rateHz, sinceStrikeS, (until - from) / sampleRateHz)
-  const confidence = confidenceOf(pitch, unexplained)
+  const pitch = pitchOfFit(fit, rateHz, sinceStrikeS, (until - from) / sampleRateHz)
   const refused = refusalOf(pitch, unexplained, share)
   if (refused !== null) return refused
-  if (confidence < LEAST_CONFIDENCE) return 'unclear'
+  if (confidenceOf(pitch, unexplained) < LEAST_CONFIDENCE) return 'unclear'
+
+  const first = { samples, rateHz, from, until, tau: tauS * sampleRateHz, size: spectrum.size, fitted }
+  const looks = lookAgain(first).map((look) => {
+    const windowS = (look.until - look.from) / sampleRateHz
+    return {
+      pitch: pitchOfFit(look.fit, rateHz, (look.from - strikeAt) / sampleRateHz, windowS),
+      windowS,
+      noiseVariance: look.fit.noiseVariance,
+    }
+  })
+  const doubt = doubtOfPitch(pitch, fit, looks, rateHz, quiet / LOW_RATE_STEP)
+  const standardErrorHz = Math.hypot(pitch.standardErrorHz, doubt.spreadHz)
+  const doubted = { ...pitch, standardErrorHz, warble: doubt.warbleStands ? pitch.warble : null }
+  if (errorCents(doubted) > MOST_DOUBT_CENTS) return 'unclear'
   return {
-    ...pitch,
-    confidence,
-    glide: glideOf(fits, rateHz, sinceStrikeS),
-    snrDb: snrDb(pitch, fits.best.noiseVariance * LOW_RATE_STEP),
+    ...doubted,
+    confidence: confidenceOf(doubted, unexplained),
+    glide: glideOf(fit, rateHz, sinceStrikeS),
+    snrDb: snrDb(pitch, fit.noiseVariance * LOW_RATE_STEP),
     heardForS: (until - strikeAt) / sampleRateHz,
   }
-}
-
-function spectrumFrom(samples: Float32Array, from: number, to: number): Spectrum {
-  const low = lowRate(samples, from, to)
-  let size = 1024
-  while (size < low.length) size *= 2
-  return spectrumOf(low, size)
 }
 
 function gliding({ samples, sampleRateHz, strikeAt, quiet, expect }: StrikeToHear, end: number): HeardStrike | null {
@@ -131,9 +142,9 @@ function refusalOf(pitch: FittedPitch, unexplained: number, share: number | null
   return null
 }
 
-function glideOf({ best }: PitchFits, rateHz: number, sinceStrikeS: number): TapGlide | null {
-  if (best.kind !== 'glide') return null
-  const [decay = 0, angle = 0, gamma = 0] = best.parameters
+function glideOf(fit: BandFit, rateHz: number, sinceStrikeS: number): TapGlide | null {
+  if (fit.kind !== 'glide') return null
+  const [decay = 0, angle = 0, gamma = 0] = fit.parameters
   const settledHz = (angle * rateHz) / (2 * Math.PI)
   // At the strike; it has faded with the energy since.
   const overHz = ((gamma * decay * rateHz) / Math.PI) * Math.exp(2 * decay * rateHz * sinceStrikeS)

@@ -2,8 +2,9 @@ import type { BandFit } from './fit-band'
 
 /** How far apart two partials may lie and still be one mode's pair, Hz. */
 export const WIDEST_PAIR_HZ = 14
-/** The second of a pair falls at most so many times as fast as the first: both are one shape on one film. */
-const MOST_DECAY_RATIO = 3
+/** The second of a pair falls at most so many times as fast as the first: both are one shape on one film. A room's own partials, or a note
+ * under a fingertip, mostly do not. */
+const MOST_DECAY_RATIO = 1.7
 /** Two that nearly cancel are no pair: their amplitudes together over that of the one partial that they replace. */
 const MOST_TOGETHER = 4
 

@@ -7,7 +7,7 @@ import { findHiddenPartial } from './hidden-partial'
 import { isPair, WIDEST_PAIR_HZ } from './pair-of-partials'
 import { parametersOf } from './partial-shape'
 import type { PitchFits } from './pitch-models'
-import { fitPitchModels } from './pitch-models'
+import { fitPitchModels, pitchBand } from './pitch-models'
 import type { Spectrum } from './spectrum'
 
 /** Partials as near as this to the pitch are fitted together with it, Hz; those beyond are taken out first. */
@@ -17,6 +17,15 @@ const MARGIN_HZ = 20
 /** How much more than a fit of many partials a glide may leave and still be believed. */
 const GLIDE_LEAVES = 1.5
 const MOST_ROUNDS = 4
+
+export type PitchAmongNeighbours = {
+  /** The pitch's model; parameters past its own are neighbours. Residual and energy are those of the pitch's own band. */
+  fit: BandFit
+  /** Where it was fitted. */
+  band: Band
+  /** What was taken out first. */
+  aside: readonly DampedPartial[]
+}
 
 /**
  * The pitch fitted together with the partials about it, so that neither leans on the other's skirts: the note that a fingertip
@@ -30,15 +39,12 @@ export function fitPitchAmongNeighbours(
   rateHz: number,
   found: readonly DampedPartial[],
   chosen: DampedPartial,
-): PitchFits | null {
+): PitchAmongNeighbours | null {
   const awayHz = (partial: DampedPartial) => (Math.abs(partial.angle - chosen.angle) * rateHz) / (2 * Math.PI)
   const all = relaxed(spectrum, rateHz, found)
   const near = all.filter((partial) => awayHz(partial) <= NEIGHBOUR_HZ).sort((a, b) => awayHz(a) - awayHz(b))
-  const cleared = without(
-    spectrum,
-    rateHz,
-    all.filter((partial) => awayHz(partial) > NEIGHBOUR_HZ),
-  )
+  const far = all.filter((partial) => awayHz(partial) > NEIGHBOUR_HZ)
+  const cleared = withoutPartials(spectrum, rateHz, far)
   const [first = chosen, ...others] = near
   // What lies in the pair's own place is left to the pitch's models: fitted one by one, a pair comes apart wrongly. A note that
   // is there too stands out later.
@@ -47,13 +53,15 @@ export function fitPitchAmongNeighbours(
     .sort((a, b) => peakHeight(b, spectrum.count) - peakHeight(a, spectrum.count))
   let beside: readonly DampedPartial[] = others.filter((one) => !inPlace.includes(one))
   for (let round = 0; ; round++) {
-    const fits = fitPitchModels(without(cleared, rateHz, beside), rateHz, first, inPlace[0] ?? null)
-    const joint = fits === null ? null : jointly(cleared, rateHz, fits, beside)
-    if (fits === null || joint === null) return fits
+    const fits = fitPitchModels(withoutPartials(cleared, rateHz, beside), rateHz, first, inPlace[0] ?? null)
+    if (fits === null) return null
+    const joint = jointly(cleared, rateHz, fits, beside)
+    if (joint === null) return { fit: fits.best, band: pitchBand(spectrum, rateHz, first), aside: [...far, ...beside] }
     const more = round < MOST_ROUNDS ? findHiddenPartial(cleared, joint.band, rateHz, joint.fit) : null
     if (more === null) {
       const { residual, energy } = fits.best
-      return glideAlone(spectrum, rateHz, all, first, residual) ?? { ...fits, best: { ...joint.fit, residual, energy } }
+      const alone = glideAlone(spectrum, rateHz, all, first, residual)
+      return alone ?? { fit: { ...joint.fit, residual, energy }, band: joint.band, aside: far }
     }
     beside = neighboursOf(more)
   }
@@ -69,11 +77,13 @@ function glideAlone(
   all: readonly DampedPartial[],
   pitch: DampedPartial,
   residual: number,
-): PitchFits | null {
+): PitchAmongNeighbours | null {
   const apart = (2 * Math.PI * WIDEST_PAIR_HZ) / rateHz
   const others = all.filter(({ angle }) => Math.abs(angle - pitch.angle) > apart)
-  const fits = fitPitchModels(without(spectrum, rateHz, others), rateHz, pitch, null)
-  return fits?.best.kind === 'glide' && fits.best.residual < GLIDE_LEAVES * residual ? fits : null
+  const fits = fitPitchModels(withoutPartials(spectrum, rateHz, others), rateHz, pitch, null)
+  return fits?.best.kind === 'glide' && fits.best.residual < GLIDE_LEAVES * residual
+    ? { fit: fits.best, band: pitchBand(spectrum, rateHz, pitch), aside: others }
+    : null
 }
 
 /** The best model with the neighbours; plain where a pair does not stay one beside them. */
@@ -110,7 +120,7 @@ function fitJointly(
   return fit === null ? null : { band, fit }
 }
 
-function neighboursOf({ kind, parameters, amplitudes }: BandFit): DampedPartial[] {
+export function neighboursOf({ kind, parameters, amplitudes }: BandFit): DampedPartial[] {
   const own = parametersOf[kind]
   const count = (parameters.length - own) / 2
   return Array.from({ length: count }, (_, i) => ({
@@ -139,7 +149,7 @@ function relaxed(spectrum: Spectrum, rateHz: number, found: readonly DampedParti
   })
 }
 
-function without(spectrum: Spectrum, rateHz: number, partials: readonly DampedPartial[]): Spectrum {
+export function withoutPartials(spectrum: Spectrum, rateHz: number, partials: readonly DampedPartial[]): Spectrum {
   const rest = copyOf(spectrum)
   for (const partial of partials) addPartial(rest, partial, -1, reachOf(spectrum, rateHz))
   return rest

@@ -1,5 +1,5 @@
 import { bandRound } from './find-partials'
-import type { BandFit } from './fit-band'
+import type { Band, BandFit } from './fit-band'
 import { BandFitter } from './fit-band'
 import { isPair } from './pair-of-partials'
 import type { ModelKind } from './partial-shape'
@@ -42,7 +42,7 @@ export function fitPitchModels(
   target: Guess,
   companion: Guess | null,
 ): PitchFits | null {
-  const band = bandRound(target, spectrum.size, rateHz / spectrum.size, BAND_HZ)
+  const band = pitchBand(spectrum, rateHz, target)
   const fitter = new BandFitter(spectrum, band)
   const one = fitter.fit('one', Float64Array.of(target.decay, target.angle))
   if (one === null) return null
@@ -64,6 +64,11 @@ export function fitPitchModels(
   }
   if (pair !== null && gain(pair.residual) > bar) best = pair
   return { one, glide, pair, best }
+}
+
+/** The band round the pitch alone. */
+export function pitchBand({ size }: Spectrum, rateHz: number, target: Guess): Band {
+  return bandRound(target, size, rateHz / size, BAND_HZ)
 }
 
 /** The fit from the start that leaves least, when it promises anything at all. */

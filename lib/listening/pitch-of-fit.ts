@@ -17,6 +17,13 @@ export type FittedPitch = {
 
 /** A second partial fainter than this beside the first is not heard as warble. */
 const FAINTEST_PARTNER = 0.06
+/** Standard deviations either way that hold 95 %. */
+const NINETEEN_IN_TWENTY = 1.96
+
+/** One standard deviation of a warble, Hz. */
+export function warbleErrorHz({ differenceHz, highHz }: TapWarble): number {
+  return (highHz - differenceHz) / NINETEEN_IN_TWENTY
+}
 
 /**
  * What a band fit says in Hz and seconds.
@@ -119,8 +126,8 @@ export function pitchOfFit(fit: BandFit, rateHz: number, sinceStrikeS: number, w
         ? null
         : {
             differenceHz,
-            lowHz: Math.max(0, differenceHz - 1.96 * differenceError),
-            highHz: differenceHz + 1.96 * differenceError,
+            lowHz: Math.max(0, differenceHz - NINETEEN_IN_TWENTY * differenceError),
+            highHz: differenceHz + NINETEEN_IN_TWENTY * differenceError,
             from: differenceHz * windowS < 2 ? 'envelope' : 'partials',
           },
   }

@@ -39,7 +39,7 @@ export type TapReading = {
    * p̄ + (Δ/2)·cos 2θ. With a glide: the middle of what rings from 50 to 650 ms.
    */
   pitchHz: number
-  /** One standard deviation of it, Hz. */
+  /** One standard deviation of it, Hz: noise, and how far looks at parts of the ring differ, as they do in a room. */
   standardErrorHz: number
   /** The nearest note at the reference asked for. */
   note: Note
@@ -52,7 +52,7 @@ export type TapReading = {
   t60StandardErrorS: number
   /** The pitch's own partial, or the close pair of them, strongest first. */
   partials: HeardPartial[]
-  /** Null when one partial says all that was heard. */
+  /** Null when one partial says all that was heard, or when not every part of the ring tells the same warble. */
   warble: TapWarble | null
   /** Null when the pitch stands still. */
   glide: TapGlide | null
@@ -67,7 +67,8 @@ export type TapReading = {
 /**
  * Why no pitch is named. `silent`: nothing over the floor. `clipped`: the microphone overran. `too-short`: the sound ends before
  * the pitch can be told. `double-hit`: two strikes in one ring. `not-a-tap`: speech, a held tone, a cymbal, a rattle. `too-noisy`:
- * the pitch drowns. `unclear`: two pitches are equally strong, or none lies near the target.
+ * the pitch drowns. `unclear`: two pitches compete, none lies near the target, or parts of the ring
+ * tell different pitches.
  */
 export type TapRefusalKind = 'silent' | 'clipped' | 'too-short' | 'double-hit' | 'not-a-tap' | 'too-noisy' | 'unclear'
 
