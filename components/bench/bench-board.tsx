@@ -94,7 +94,11 @@ function HeadBoard({ bench, drum, head }: { bench: Bench; drum: BenchDrum; head:
             {head.note.name} {hzWords(head.note.hz)} Hz
           </Fact>
         )}
-        {head.gauge !== null && <Fact name="gauge">{gaugeWords(head.gauge)}</Fact>}
+        {head.gauge !== null && (
+          <Fact name="gauge">
+            <span className="whitespace-nowrap">{gaugeWords(head.gauge)}</span>
+          </Fact>
+        )}
         {state.mean !== null && (
           <Fact name="mean">
             {view.basis === 'gauge' ? `${state.mean.toFixed(1)} on the gauge` : `${hzWords(state.mean)} Hz`}

@@ -5,7 +5,7 @@ import { TextInput } from '@/components/ui/text-input'
 import { dateWords } from '@/lib/advance/when-words'
 import { headStandingWords, headView, standingSignOff } from '@/lib/client/bench/head-view'
 import type { Bench, BenchDrum, BenchHead } from '@/lib/contracts/bench'
-import { clockWords, hzWords, sheetWords } from './bench-words'
+import { clockWords, gaugeWords, hzWords, sheetWords } from './bench-words'
 import { BenchCautions } from './bench-cautions'
 import { SharedKitNotice } from './shared-kit-notice'
 
@@ -114,7 +114,17 @@ function HeadLink({ bench, drum, head }: { bench: Bench; drum: BenchDrum; head: 
       className="flex min-h-20 flex-col justify-between gap-1 border border-ink bg-sheet p-2.5 leading-tight hover:bg-wash"
     >
       <strong>{head.side}</strong>
-      {head.tap && <span className="figures font-bold">{hzWords(head.tap.hz)} Hz</span>}
+      {head.tap ? (
+        <span>
+          tap <span className="figures font-bold whitespace-nowrap">{hzWords(head.tap.hz)} Hz</span>
+        </span>
+      ) : (
+        head.gauge && (
+          <span>
+            gauge <span className="figures">{gaugeWords(head.gauge)}</span>
+          </span>
+        )
+      )}
       <span aria-hidden className="flex gap-0.5">
         {view.order.map((lug, index) => (
           <span key={lug} className={classes('h-1.5 grow border border-ink', index < read && 'bg-ink')} />

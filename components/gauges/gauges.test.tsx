@@ -71,7 +71,15 @@ describe('the same reading on other film', () => {
 
 describe('the head asked about', () => {
   const known: KnownHead = {
-    ...{ words: 'Tom 12, batter', diameterIn: 12, depthIn: 8, plyMils: [10], film: 'coated', coatingGPerM2: 40 },
+    ...{
+      words: 'Tom 12, batter',
+      diameterIn: 12,
+      depthIn: 8,
+      plyMils: [10],
+      film: 'coated',
+      coatingGPerM2: 40,
+      openShell: false,
+    },
     tapHz: 256,
   }
   const typed = { known: '', diameterIn: '13', depthIn: '9', plyMils: '7 + 7' }

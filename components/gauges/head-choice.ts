@@ -21,8 +21,8 @@ export function chosenHead(
 ): { words: string; head: GaugeHead; tapHz: number | null } | null {
   const known = heads.find(({ words }) => words === choice.known)
   if (known) {
-    const { diameterIn, depthIn, plyMils, coatingGPerM2, words, tapHz } = known
-    return { words, head: { diameterIn, depthIn, plyMils, coatingGPerM2 }, tapHz }
+    const { diameterIn, depthIn, plyMils, coatingGPerM2, openShell, words, tapHz } = known
+    return { words, head: { diameterIn, depthIn, plyMils, coatingGPerM2, openShell }, tapHz }
   }
   const diameterIn = drumSpecSchema.shape.diameterIn.safeParse(size(choice.diameterIn)).data
   const depthIn = drumSpecSchema.shape.depthIn.safeParse(size(choice.depthIn)).data

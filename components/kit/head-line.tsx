@@ -57,7 +57,15 @@ function TapWords({ side, estimate }: Pick<HeadLineProps, 'side' | 'estimate'>) 
 
 /** The reading foretold, and the one that was noted where there is one. */
 function GaugeWords({ gauge, noted }: { gauge: HeadGauge | null; noted: number | null }) {
-  if (gauge?.kind !== 'foretold') return <span className="figures">{noted ?? '–'}</span>
+  if (gauge?.kind !== 'foretold') {
+    return noted === null ? (
+      <span>not noted</span>
+    ) : (
+      <span className="text-sm text-soft">
+        noted <span className="figures text-base text-ink">{noted}</span>
+      </span>
+    )
+  }
   const { start, scale } = gauge
   const bounds = startingBounds(start, scale)
   return (

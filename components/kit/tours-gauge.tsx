@@ -64,10 +64,11 @@ export function useHeadGauge(
   const head = spec[side]
   if (!head) return null
   const { diameterIn, depthIn } = spec
+  const openShell = spec.ported || spec.resonant === null
   const { plyMils, coatingGPerM2, gauge } = head
   return gaugeOfHead(
     calibration,
-    { diameterIn, depthIn, plyMils, coatingGPerM2 },
+    { diameterIn, depthIn, plyMils, coatingGPerM2, openShell },
     {
       tapHz: estimate?.tuning?.[side]?.tapHz.value ?? null,
       noted: gauge,

@@ -9,7 +9,7 @@ describe('figures in words', () => {
     expect(figureWords(0.35306, 'kg/m²')).toBe('0.3531 kg/m²')
     expect(figureWords(2.404825557696, '')).toBe('2.405')
     expect(figureWords(6, '')).toBe('6')
-    expect(figureWords(-5.04, '°C')).toBe('-5.04 °C')
+    expect(figureWords(-5.04, '°C')).toBe('−5.04 °C')
   })
 
   it('of pitch are to the tenth, or whole when high', () => {

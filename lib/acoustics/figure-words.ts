@@ -16,5 +16,6 @@ const displayUnits: Record<string, (value: number) => { factor: number; unit: st
 /** A computed value to four figures with its unit, in the unit that reads best: "254 µm", "11.23 MPa", "0.3531 kg/m²". */
 export function figureWords(value: number, unit: string): string {
   const shown = displayUnits[unit]?.(value) ?? { factor: 1, unit }
-  return `${Number((value * shown.factor).toPrecision(4))} ${shown.unit}`.trim()
+  // The sign of a negative figure is a minus, as wide as a plus.
+  return `${Number((value * shown.factor).toPrecision(4))} ${shown.unit}`.trim().replace('-', '−')
 }

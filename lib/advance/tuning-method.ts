@@ -32,7 +32,7 @@ export const tuningSteps: readonly { readonly name: string; readonly words: stri
   {
     name: 'Hang and check',
     words:
-      'Hang the drum, play it with both heads open and listen for warble. Tap again once the stage is warm and a new head has settled.',
+      'Hang the drum or stand it up, play it with both heads open and listen for warble. Tap again once the stage is warm and a new head has settled.',
   },
 ]
 

@@ -200,12 +200,13 @@ function sheetHead(
 }
 
 function sheetGauge(
-  { diameterIn, depthIn }: FrozenDrum['spec'],
+  { diameterIn, depthIn, ported, resonant }: FrozenDrum['spec'],
   { plyMils, coatingGPerM2, gauge: noted }: FrozenHead,
   tapHz: number | null,
   calibration: GaugeCalibration | null,
 ): SheetGauge | null {
-  const found = gaugeOfHead(calibration, { diameterIn, depthIn, plyMils, coatingGPerM2 }, { tapHz, noted })
+  const openShell = ported || resonant === null
+  const found = gaugeOfHead(calibration, { diameterIn, depthIn, plyMils, coatingGPerM2, openShell }, { tapHz, noted })
   if (found === null) return null
   if (found.kind === 'noted') return { kind: 'noted', reading: String(found.reading) }
   const { gauge, scale, start } = found

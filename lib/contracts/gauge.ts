@@ -89,6 +89,8 @@ export type KnownHead = {
   readonly plyMils: number[]
   readonly film: GaugePairInput['film']
   readonly coatingGPerM2: number
+  /** On a ported drum or one with a single head. */
+  readonly openShell: boolean
   /** The tap that its note asks for, Hz; null while it has no note. */
   readonly tapHz: number | null
 }

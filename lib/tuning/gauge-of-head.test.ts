@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { drumEstimate } from './drum-estimate'
 import { gaugeOfHead, tryCalibration } from './gauge-of-head'
 import { startingGauge } from './gauge-prediction'
 import { tapOfTensionHz } from './gauge-tension'
@@ -27,6 +28,17 @@ describe('the gauge beside a head', () => {
   it('is nothing where nothing is known', () => {
     expect(gaugeOfHead(null, tom12, { tapHz: tap, noted: null })).toBeNull()
     expect(gaugeOfHead(calibration, tom12, { tapHz: null, noted: null })).toBeNull()
+  })
+
+  // The same note of a ported kick must not come with two tensions: 1.38 kN/m on its sheet is the head in the open air (`drumTuning`).
+  it('takes a ported drum as its sheet does, in the open air', () => {
+    const kick = { role: 'kick', diameterIn: 22, depthIn: 16, lugs: 8, ported: true, headRelationCents: 0 } as const
+    const film = { plyMils: [10], coatingGPerM2: 0 }
+    const made = drumEstimate({ ...kick, batter: film, resonant: film, note: { semitone: 33, cents: 0 } })
+    const tapHz = made?.tuning?.batter.tapHz.value ?? Number.NaN
+    const gauge = gaugeOfHead(calibration, { ...kick, ...film, openShell: true }, { tapHz, noted: null })
+    if (gauge?.kind !== 'foretold') throw new Error('not foretold')
+    expect(gauge.start.tensionNPerM / (made?.tuning?.batter.tensionNPerM.value ?? 0)).toBeCloseTo(1, 9)
   })
 
   it('minds the stage: a warm one has thinner air, and the same tap needs less tension', () => {

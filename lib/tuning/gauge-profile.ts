@@ -9,6 +9,8 @@ export type GaugeHead = {
   readonly depthIn: number
   readonly plyMils: readonly number[]
   readonly coatingGPerM2: number
+  /** True on a ported drum and on one without the other head: the inner face sees open air, too. A closed shell unless said. */
+  readonly openShell?: boolean
 }
 
 /** One moment of one head: what the gauge read, and the pitch of a tap near a lug with the other head damped. */

@@ -1,6 +1,7 @@
 import { AcousticsError } from '@/lib/acoustics/acoustics-error'
 import { ROOM_TEMPERATURE_C } from '@/lib/acoustics/air'
 import { lugTapHz, lugTapTensionNPerM } from '@/lib/acoustics/lug-tap'
+import { openAirDensityKgPerM2 } from '@/lib/acoustics/open-air-head'
 import { METRE_PER_INCH } from '@/lib/acoustics/require-quantity'
 import { loadedHeadKgPerM2 } from '@/lib/acoustics/two-head-drum'
 import { filmOf } from './drum-estimate'
@@ -21,11 +22,16 @@ function tappedHead(head: GaugeHead, temperatureC: number | null) {
   requireGaugeHead(head)
   const diameterM = head.diameterIn * METRE_PER_INCH
   const shell = { diameterM, depthM: head.depthIn * METRE_PER_INCH, temperatureC: temperatureOf(temperatureC) }
-  return { massKgPerM2: loadedHeadKgPerM2(1, filmOf(head), shell), radiusM: diameterM / 2 }
+  const film = filmOf(head)
+  const massKgPerM2 = head.openShell
+    ? openAirDensityKgPerM2(1, { ...film, ...shell })
+    : loadedHeadKgPerM2(1, film, shell)
+  return { massKgPerM2, radiusM: diameterM / 2 }
 }
 
 /**
- * Film tension, N/m, of a head whose tap near a lug sounds at `tapHz` with the other head damped: shape (1,1) on a closed shell.
+ * Film tension, N/m, of a head whose tap near a lug sounds at `tapHz` with the other head damped: shape (1,1) on a closed shell,
+ * or in the open air on an open one, as in `drumModel`.
  * @throws GaugeError `quantity`: a figure out of range, or a tap that no film on this drum can sound
  */
 export function tensionOfTapNPerM(head: GaugeHead, tapHz: number, temperatureC: number | null): number {

@@ -63,7 +63,7 @@ export async function readKnownHeads(actor: Actor): Promise<KnownHead[]> {
 
 function knownHead(
   name: string,
-  { diameterIn, depthIn }: DrumSpec,
+  { diameterIn, depthIn, ported, resonant }: DrumSpec,
   side: 'batter' | 'resonant',
   head: DrumSpec['batter'],
   tapHz: number | null,
@@ -71,5 +71,6 @@ function knownHead(
   const { plyMils, film, coatingGPerM2 } = head
   const size = `${inchWords(diameterIn)}×${inchWords(depthIn)} in`
   const words = `${name}, ${side}: ${size}, ${headWords({ plyMils, film, damping: 'none' })}`
-  return { words, diameterIn, depthIn, plyMils, film, coatingGPerM2, tapHz }
+  const openShell = ported || resonant === null
+  return { words, diameterIn, depthIn, plyMils, film, coatingGPerM2, openShell, tapHz }
 }
