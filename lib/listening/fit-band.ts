@@ -33,6 +33,9 @@ type Solved = {
   columns: Float64Array[]
 }
 
+/** Columns of numbers; none where all would be zero. */
+type Columns = (Float64Array | undefined)[]
+
 const still: Complex = { re: 0, im: 0 }
 const MOST_ROUNDS = 30
 const MOST_REFUSED = 6
@@ -191,8 +194,9 @@ export class BandFitter {
       const column = new Float64Array(rows)
       shapes.forEach(({ direct, image }, j) => {
         const { re, im } = amplitudes[j] ?? { re: 0, im: 0 }
-        const u = direct[f + 1] ?? column
-        const v = image[f + 1] ?? column
+        const u = direct[f + 1]
+        const v = image[f + 1]
+        if (u === undefined || v === undefined) return
         for (let i = 0; i < rows; i += 2) {
           const ur = u[i] ?? 0
           const ui = u[i + 1] ?? 0
@@ -236,9 +240,16 @@ export class BandFitter {
     }
   }
 
-  /** The voice's spectrum (index 0) and its derivative to each free parameter; `image` with every s and c conjugated. */
-  private shapesOf(terms: Term[], free: number): { direct: Float64Array[]; image: Float64Array[] } {
-    const make = () => Array.from({ length: free + 1 }, () => new Float64Array(2 * this.bins))
+  /**
+   * The voice's spectrum (index 0) and its derivative to each free parameter that it moves with; `image` with every s and c
+   * conjugated.
+   */
+  private shapesOf(terms: Term[], free: number): { direct: Columns; image: Columns } {
+    const moves = (f: number) => terms.some(({ toS, toC }) => !isStill(toS[f]) || !isStill(toC[f]))
+    const make = () =>
+      Array.from({ length: free + 1 }, (_, i) =>
+        i === 0 || moves(i - 1) ? new Float64Array(2 * this.bins) : undefined,
+      )
     const direct = make()
     const image = make()
     for (const term of terms) {
@@ -248,7 +259,7 @@ export class BandFitter {
     return { direct, image }
   }
 
-  private add(into: Float64Array[], { s, c, toS, toC }: Term, sign: 1 | -1): void {
+  private add(into: Columns, { s, c, toS, toC }: Term, sign: 1 | -1): void {
     const { count } = this.spectrum
     const size = Math.exp(s.re)
     const zr = size * Math.cos(s.im)
@@ -263,7 +274,7 @@ export class BandFitter {
     const derivatives = into.slice(1).flatMap((column, f) => {
       const ds = toS[f] ?? still
       const dc = toC[f] ?? still
-      if (ds.re === 0 && ds.im === 0 && dc.re === 0 && dc.im === 0) return []
+      if (column === undefined) return []
       const dsi = sign * ds.im
       return [{ column, kr: cr * ds.re - ci * dsi, ki: cr * dsi + ci * ds.re, cr: dc.re, ci: sign * dc.im }]
     })
@@ -299,6 +310,10 @@ export class BandFitter {
       }
     }
   }
+}
+
+function isStill(slope: Complex = still): boolean {
+  return slope.re === 0 && slope.im === 0
 }
 
 function gramOf(columns: Float64Array[]): { gram: Float64Array; scale: Float64Array } {
