@@ -23,8 +23,8 @@ export function WhyPage({ pack, sheets }: { pack: PackDocument; sheets: readonly
       <Plain style={{ marginTop: mm(1) }}>
         Every figure on the sheets is an estimate. A drum has one note: both heads and the air between them swing
         together. A tap beside a lug is another shape of one head, and air weighs less on it: it lies near 1.7 or 1.8
-        times the note, not at the 1.593 of a bare membrane. Bounds are the scatter of real heads against the model and
-        of film against its nominal thickness. A measured pitch is worth more than any of them.
+        times the note, not at the 1.593 of a head without air. Bounds are the scatter of real heads against the model
+        and of film against its nominal thickness. A measured pitch is worth more than any of them.
       </Plain>
       <View style={{ marginTop: mm(2), borderTop: `0.75pt solid ${ink.ink}` }}>
         {formulas(drums).map(({ key, figure, names }) => (
