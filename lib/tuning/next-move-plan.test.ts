@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { facingLugs, outChance } from './next-move-plan'
+import { outChance } from './next-move-out-chance'
+import { facingLugs } from './next-move-plan'
 import { sparseCorrections } from './next-move-sparse'
 
 describe('chance of being out', () => {

@@ -1,4 +1,5 @@
 import type { Belief } from './next-move-belief'
+import { outChance } from './next-move-out-chance'
 import { sparseCorrections } from './next-move-sparse'
 
 /** Sizes of a key turn that a hand can be told, in sixteenths: a hair, an eighth … half a turn. */
@@ -17,6 +18,8 @@ export type PlanInput = {
   /** Lugs that may be brought up alone. */
   loose: ReadonlySet<number>
   costs: PlanCosts
+  /** Try every two lugs at every two sizes, not only facing ones alike. */
+  everyPair?: boolean
 }
 
 /** Seconds. */
@@ -70,30 +73,13 @@ export function standing(belief: Belief, target: number | null): Standing {
   return { off, variance }
 }
 
-/** Probability that a Gaussian of this middle and variance lies outside ± tolerance. */
-export function outChance(off: number, variance: number, tolerance: number): number {
-  const deviation = Math.sqrt(variance)
-  return normalTail((tolerance - off) / deviation) + normalTail((tolerance + off) / deviation)
-}
-
-const NEGLIGIBLE_TAIL = 6
-
-/** Upper tail of the standard normal, absolute error below 8e-8 (Abramowitz & Stegun 26.2.17, published). */
-function normalTail(z: number): number {
-  if (z > NEGLIGIBLE_TAIL) return 0
-  if (z < 0) return 1 - normalTail(-z)
-  const t = 1 / (1 + 0.2316419 * z)
-  const series = t * (0.31938153 + t * (-0.356563782 + t * (1.781477937 + t * (-1.821255978 + t * 1.330274429))))
-  return 0.3989422804 * Math.exp(-0.5 * z * z) * series
-}
-
 /**
  * The turns of one pass that are expected to cost the fewest seconds in all: their own time and what is left out after them.
  * From no turn and from sparse least-squares corrections, it goes down by changing one lug, two lugs alike or swapping two, as
  * long as that helps; the best end is kept. One lug is never brought up alone unless it is loose.
  */
 export function planTurns(input: PlanInput): Plan {
-  const { target, frozen, sizes, directions, loose, costs } = input
+  const { target, frozen, sizes, directions, loose, costs, everyPair = false } = input
   const { lugs } = input.belief
   const effect = effectOfTurns(input)
   const levels = [
@@ -114,15 +100,7 @@ export function planTurns(input: PlanInput): Plan {
       loosely = loose.has(lug)
     }
     if (ups === 1 && !loosely) return Infinity
-    return effect.leftSeconds(
-      one,
-      (oneSize - plan[one]!) / 16,
-      two,
-      (twoSize - plan[two]!) / 16,
-      plan,
-      costs.move * moves,
-      most,
-    )
+    return effect.leftSeconds(plan, one, oneSize, two, twoSize, costs.move * moves, most)
   }
   const secondsOf = (plan: Int8Array) => {
     effect.take(plan)
@@ -146,7 +124,9 @@ export function planTurns(input: PlanInput): Plan {
         for (let other = lug + 1; other < lugs; other++) {
           if (frozen.has(other)) continue
           if (plan[lug] !== plan[other]) attempt(lug, plan[other]!, other, plan[lug]!)
-          else if (plan[lug] === 0 && facingLugs(lug, lugs).includes(other)) {
+          else if (plan[lug] === 0 && everyPair) {
+            for (const size of levels) for (const too of levels) attempt(lug, size, other, too)
+          } else if (plan[lug] === 0 && facingLugs(lug, lugs).includes(other)) {
             for (const size of levels) if (size !== 0) attempt(lug, size, other, size)
           }
         }
@@ -182,6 +162,7 @@ export function planTurns(input: PlanInput): Plan {
 }
 
 const MOST_ROUNDS = 24
+const LARGEST_TURN = Math.max(...TURN_SIXTEENTHS)
 /** Starts from which the descent is tried. */
 const STARTS = 3
 
@@ -206,8 +187,11 @@ function effectOfTurns({ belief, target, tolerance, costs }: PlanInput) {
   // Of the variance a turn adds: what grows with its square, and what any turn adds, by places on from the lug.
   const bySquare = shares.map((share, d) => gain ** 2 * ((belief.handError * share) ** 2 + belief.sharesVariance[d]!))
   const byTurning = shares.map((share) => (gain * belief.lostTurns * share) ** 2 + belief.restlessness ** 2)
-  const added = (turns: number, places: number) =>
-    turns === 0 ? 0 : bySquare[places]! * turns * turns + byTurning[places]!
+  const added = Float64Array.from({ length: (LARGEST_TURN + 1) * lugs }, (_, at) => {
+    const turns = Math.floor(at / lugs) / 16
+    return turns === 0 ? 0 : bySquare[at % lugs]! * turns * turns + byTurning[at % lugs]!
+  })
+  const order = Array.from({ length: lugs }, (_, i) => i)
 
   return {
     shares,
@@ -216,48 +200,52 @@ function effectOfTurns({ belief, target, tolerance, costs }: PlanInput) {
       change.fill(0)
       spread.fill(0)
       for (let lug = 0; lug < lugs; lug++) {
-        const turns = plan[lug]! / 16
-        if (turns === 0) continue
+        const size = plan[lug]!
+        if (size === 0) continue
         for (let i = 0; i < lugs; i++) {
           const places = i < lug ? i - lug + lugs : i - lug
-          change[i]! += shares[places]! * turns
-          spread[i]! += added(turns, places)
+          change[i]! += (shares[places]! * size) / 16
+          spread[i]! += added[Math.abs(size) * lugs + places]!
         }
       }
+      // The lugs furthest out first, so that a worse plan is soon past the best.
+      order.sort((a, b) => Math.abs(off[b]! + gain * change[b]!) - Math.abs(off[a]! + gain * change[a]!))
     },
-    /** Seconds on top of `from` when one or two lugs of the plan at hand turn by so much more; may stop early once past `most`. */
+    /** Seconds on top of `from` when one or two lugs of the plan at hand turn by other sizes; may stop early once past `most`. */
     leftSeconds: (
-      one: number,
-      oneMore: number,
-      two: number,
-      twoMore: number,
       plan: Int8Array,
+      one: number,
+      oneSize: number,
+      two: number,
+      twoSize: number,
       from: number,
       most: number,
     ) => {
-      const oneNow = plan[one]! / 16
-      const twoNow = plan[two]! / 16
+      const oneMore = (oneSize - plan[one]!) / 16
+      const twoMore = one === two ? 0 : (twoSize - plan[two]!) / 16
+      const [oneNow, oneThen] = [Math.abs(plan[one]!) * lugs, Math.abs(oneSize) * lugs]
+      const [twoNow, twoThen] = [Math.abs(plan[two]!) * lugs, Math.abs(twoSize) * lugs]
       let seconds = from
       let out = 0
-      for (let i = 0; i < lugs && seconds < most; i++) {
+      for (let at = 0; at < lugs && seconds < most; at++) {
+        const i = order[at]!
         let moved = change[i]!
         let v = variance[i]! + spread[i]!
         if (oneMore !== 0) {
           const places = i < one ? i - one + lugs : i - one
           moved += shares[places]! * oneMore
-          v += added(oneNow + oneMore, places) - added(oneNow, places)
+          v += added[oneThen + places]! - added[oneNow + places]!
         }
-        if (twoMore !== 0 && two !== one) {
+        if (twoMore !== 0) {
           const places = i < two ? i - two + lugs : i - two
           moved += shares[places]! * twoMore
-          v += added(twoNow + twoMore, places) - added(twoNow, places)
+          v += added[twoThen + places]! - added[twoNow + places]!
         }
         const middle = off[i]! + gain * moved
         v += 2 * (withGain[i]! - common) * moved + gainVariance * moved * moved
-        const further = Math.max(0, Math.abs(middle) / tolerance - 1)
         const chance = outChance(middle, Math.max(1e-9, v), tolerance)
         out += chance
-        seconds += chance * (costs.out + costs.outFurther * further)
+        seconds += chance * (costs.out + costs.outFurther * Math.max(0, Math.abs(middle) / tolerance - 1))
       }
       return seconds + costs.unsure * Math.min(1, Math.max(0, out - costs.sureAt) / costs.unsureSpan)
     },

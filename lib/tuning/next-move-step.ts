@@ -30,9 +30,13 @@ export type NextMoveReason =
   | 'surprising'
   | 'no-reading'
   | 'no-turn-helps'
+  /** Not sure: turns and readings enough for an even head, and it is not. */
+  | 'no-progress'
   /** Done: believed so, by a whole pass within tolerance, or good enough for the short way. */
   | 'believed-even'
   | 'pass-even'
+  /** Done: more likely even than reading on would show, some lugs at the edge of the tolerance. */
+  | 'at-the-edge'
   | 'good-enough'
 
 /** One next step. Lugs are 1-based, in the order in which to take them. */

@@ -22,6 +22,11 @@ const COSTS = { move: 9, out: 20, outFurther: 24, unsure: 16, sureAt: 0.05, unsu
 const TIRED_COSTS = { ...COSTS, out: 3 * COSTS.out, outFurther: 3 * COSTS.outFurther }
 /** Seconds a pass must save before it is worth asking for. */
 const WORTH_SECONDS = { usual: 1, short: 5 }
+/** What counts when nothing else helps: the chance of being even, at what a call in vain costs. */
+const NUDGE_COSTS = { move: 1, out: 60, outFurther: 10, unsure: 0, sureAt: 0, unsureSpan: 1 }
+const NUDGE_SIXTEENTHS = [1, 2]
+/** Seconds a nudge must save. */
+const WORTH_NUDGING = 0.5
 /** A lug so many tolerances low, while the lowest of the rest is less than half as low, has slipped or is loose. */
 const SLIPPED = 5
 
@@ -50,7 +55,7 @@ export function turnNext(
     const lowest = [...keysRound(lugs)].sort((a, b) => lowness(a, off) - lowness(b, off))[0]!
     return { ...quarterUp('far-under', lowest, inOrder(lowest, lugs)), evenChance: at.said.evenChance }
   }
-  const lean = target === null ? 0 : middle > tolerance / 2 ? 1 : middle < -tolerance / 2 ? -1 : 0
+  const lean = leaning(off, target, tolerance)
   const slipped = slippedLugs(off, tolerance)
   const plan = planTurns({
     belief,
@@ -68,6 +73,45 @@ export function turnNext(
 }
 
 /** The first step of a plan: turns in one direction, facing lugs together. */
+/**
+ * A small turn of one or two lugs that makes a head at the edge of its tolerance more likely to be even, or null: the last
+ * resort when neither reading nor any turn of the usual plan settles it.
+ */
+export function nudge(
+  { lugs, tolerance }: { lugs: number; tolerance: number },
+  { target, asReading }: Pick<CleanLog, 'target' | 'asReading'>,
+  belief: Belief,
+  { off, said }: Pick<TurnState, 'off' | 'said'>,
+): NextMove | null {
+  const lean = leaning(off, target, tolerance)
+  const plans = [lean <= 0, lean >= 0].flatMap((allowed, down) =>
+    allowed
+      ? [
+          planTurns({
+            belief,
+            target,
+            tolerance,
+            frozen: new Set(),
+            sizes: NUDGE_SIXTEENTHS,
+            directions: { up: down === 0, down: down === 1 },
+            loose: new Set(),
+            costs: NUDGE_COSTS,
+            everyPair: true,
+          }),
+        ]
+      : [],
+  )
+  const plan = plans.reduce((a, b) => (b.seconds < a.seconds ? b : a))
+  if (plan.seconds > plan.secondsWithout - WORTH_NUDGING) return null
+  return firstOf(plan, { lugs, slipped: [], lean, known: false, asReading, pending: [], said })
+}
+
+/** 1 when the head is over on the whole, −1 when it is under, 0 between or without a target. */
+function leaning(off: Float64Array, target: number | null, tolerance: number): number {
+  const middle = off.reduce((sum, value) => sum + value, 0) / off.length
+  return target === null ? 0 : middle > tolerance / 2 ? 1 : middle < -tolerance / 2 ? -1 : 0
+}
+
 function firstOf(
   plan: Plan,
   {

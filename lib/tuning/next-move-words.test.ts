@@ -51,6 +51,15 @@ describe('the next move in words', () => {
     expect(nextMoveWords(move, 8)).toBe('Not sure: read lug 3 again. Its readings do not agree.')
   })
 
+  it('says what to look for when the head does not follow, and what lies at the edge', () => {
+    expect(nextMoveWords({ ...blank, kind: 'not-sure', reason: 'no-progress', lugs: [1, 3] }, 4)).toBe(
+      'Not sure: the head does not follow at lugs 1 and 3. Look for a bent hoop, a stiff rod or an unseated edge, then read again.',
+    )
+    expect(nextMoveWords({ ...blank, kind: 'done', reason: 'at-the-edge', lugs: [3] }, 4)).toBe(
+      'As even as turns make it: leave it. Lug 3 may lie at the edge of the tolerance.',
+    )
+  })
+
   it('says seat, bring up, read and done', () => {
     expect(nextMoveWords({ ...blank, kind: 'seat', reason: 'seat-first', lugs: [1, 3, 2, 4] }, 4)).toBe(
       'Turn every lug finger-tight, working across the drum: 1, 3, 2, 4.',

@@ -84,6 +84,8 @@ function notSure({ reason, lugs }: NextMove, which: string): string {
       return `${again}. ${lugs.length === 1 ? 'Its readings' : 'Their readings'} do not agree.`
     case 'no-turn-helps':
       return `Not sure: no turn is likely to bring ${which} closer. Look for a bent hoop or an uneven edge, or leave it so.`
+    case 'no-progress':
+      return `Not sure: the head does not follow${lugs.length === 0 ? '' : ` at ${which}`}. Look for a bent hoop, a stiff rod or an unseated edge, then read again.`
     case 'no-reading':
       return `${again}. Without a reading there the head cannot be called even.`
     default:
@@ -92,6 +94,9 @@ function notSure({ reason, lugs }: NextMove, which: string): string {
 }
 
 function done({ reason, lugs }: NextMove, which: string): string {
+  if (reason === 'at-the-edge' && lugs.length > 0) {
+    return `As even as turns make it: leave it. ${which[0]!.toUpperCase()}${which.slice(1)} may lie at the edge of the tolerance.`
+  }
   if (reason !== 'good-enough') return 'Even: leave it.'
   return lugs.length === 0
     ? 'Good enough for the time there is: leave it.'

@@ -51,8 +51,14 @@ const anyState = fc
       .record({
         first: fc.array(value, { minLength: lugs, maxLength: lugs }),
         later: fc.array(fc.oneof(reading, turn), { maxLength: 14 }),
+        again: fc.integer({ min: 0, max: 4 }),
       })
-      .map(({ first, later }): NextMoveInput => ({ ...usual, ...rest, lugs, log: [...pass(first), ...later] }))
+      .map(({ first, later, again }): NextMoveInput => ({
+        ...usual,
+        ...rest,
+        lugs,
+        log: [...pass(first), ...later, ...Array.from({ length: again }, () => pass(first)).flat()],
+      }))
   })
 
 function lugsTurnedSinceRead({ lugs, log }: NextMoveInput): number[] {
@@ -170,6 +176,47 @@ describe('the rules of the trade (common practice), in any state', () => {
 
   it('never speaks of warble: a snare side is uneven on purpose', () => {
     always((move, { lugs }) => expect(nextMoveWords(move, lugs)).not.toMatch(/warble/i))
+  })
+})
+
+describe('a head that does not follow', () => {
+  /** What the advice ends with on a head that reads so whatever is turned. */
+  const endOf = (values: readonly number[]) => {
+    const lugs = values.length
+    const log: HeadEvent[] = []
+    let move = nextMove({ ...usual, lugs, log })
+    while (move.kind !== 'done' && move.reason !== 'no-progress') {
+      expect(log.length).toBeLessThan(100 * lugs)
+      if (move.turns.length > 0) log.push({ kind: 'turn', turns: move.turns })
+      else log.push(...move.lugs.map((lug) => gauge(lug, values[lug - 1]!)))
+      move = nextMove({ ...usual, lugs, log })
+    }
+    return move
+  }
+
+  it('is called or given up, whatever it reads: turns that do nothing are not advised for ever', () => {
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 4, max: 7 }),
+        fc.constantFrom(0.9, 1.3, 3),
+        fc.infiniteStream(fc.double({ min: -1, max: 1, noNaN: true })),
+        (lugs, spread, offs) => {
+          const values = Array.from({ length: lugs }, () => 75 + spread * (offs.next().value ?? 0))
+          expect(['done', 'not-sure']).toContain(endOf(values).kind)
+        },
+      ),
+      { numRuns: 20 },
+    )
+  })
+
+  it('is given up, and the lugs named, where one leans to one side or stands out for good', () => {
+    expect(endOf([76.4, 75, 73.6, 75])).toMatchObject({ kind: 'not-sure', reason: 'no-progress', lugs: [1, 3] })
+    expect(endOf([77, 75, 75, 75])).toMatchObject({ kind: 'not-sure', reason: 'no-progress', lugs: [1] })
+  })
+
+  it('is called with the lugs named that lie at the edge, when no turn moves them (derived: S_1 = 0)', () => {
+    const log = Array.from({ length: 4 }, () => pass([76, 75, 74, 75])).flat()
+    expect(nextMove({ ...usual, lugs: 4, log })).toMatchObject({ kind: 'done', reason: 'at-the-edge', lugs: [1, 3] })
   })
 })
 

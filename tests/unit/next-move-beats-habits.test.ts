@@ -35,7 +35,7 @@ describe('following the next move, on simulated drums (common practice: 3 s a re
 
 describe('the simulated drum and the bound', () => {
   it('a turn at every lug raises all alike, a turn at one and back at its facing lug leaves the mean (derived: no k = 1)', () => {
-    const { response, lugs } = trueDrum(FIRST_SEED, 8, 'plain')
+    const { response, lugs } = trueDrum(FIRST_SEED, { lugs: 8, kind: 'plain' })
     const rise = response.map((row) => row.reduce((sum, value) => sum + value, 0))
     // Rods differ by some 5 %, one deviation.
     for (const value of rise) expect(Math.abs(value / (rise[0] ?? 0) - 1)).toBeLessThan(0.25)
@@ -47,7 +47,7 @@ describe('the simulated drum and the bound', () => {
 
   it('the bound is no moves on an even drum and never more than one move a lug', () => {
     for (let seed = FIRST_SEED; seed < FIRST_SEED + 20; seed++) {
-      const drum = trueDrum(seed, 6, 'plain')
+      const drum = trueDrum(seed, { lugs: 6, kind: 'plain' })
       const best = bestPossible(drum, 'mean')
       expect(best?.keyMoves === 0).toBe(largestDeviation(drum.readings(), 'mean') <= 1)
       expect(best?.keyMoves).toBeLessThanOrEqual(6)

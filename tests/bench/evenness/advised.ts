@@ -15,6 +15,8 @@ export function followAdvice(game: Game, learned: KnownResponse | null): void {
     if (step.kind === 'done') {
       game.call()
       if (!game.over()) for (let lug = 1; lug <= lugs; lug++) read(lug)
+    } else if (step.reason === 'no-progress') {
+      game.giveUp()
     } else if (step.turns.length > 0) {
       for (const { lug, turns } of step.turns) game.turn(lug, turns)
       log.push({ kind: 'turn', turns: step.turns })

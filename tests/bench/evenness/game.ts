@@ -38,6 +38,8 @@ export type Game = {
   tolerance: () => number
   /** "It is even": ends the game when it truly is. */
   call: () => void
+  /** "It does not follow": ends the game, and counts as a head that is not even by then. */
+  giveUp: () => void
   score: () => Score
 }
 
@@ -46,11 +48,12 @@ export function newGame(drum: TrueDrum, against: Against): Game {
   let keyMoves = 0
   let falseCalls = 0
   let even = false
+  let givenUp = false
   const seconds = () => readings * SECONDS_A_READING + keyMoves * SECONDS_A_MOVE + falseCalls * SECONDS_A_FALSE_CALL
   return {
     lugs: drum.lugs,
     against,
-    over: () => even || seconds() >= SECONDS_AT_MOST,
+    over: () => even || givenUp || seconds() >= SECONDS_AT_MOST,
     read: (lug) => {
       readings++
       return drum.read(lug)
@@ -63,6 +66,9 @@ export function newGame(drum: TrueDrum, against: Against): Game {
     call: () => {
       even = largestDeviation(drum.readings(), against) <= TOLERANCE
       if (!even) falseCalls++
+    },
+    giveUp: () => {
+      givenUp = true
     },
     score: () => ({
       seconds: even ? seconds() : SECONDS_AT_MOST,

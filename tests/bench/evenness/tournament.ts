@@ -7,16 +7,13 @@ import type { Against, Score } from './game'
 import { blindPasses, worstLugFirst } from './habits'
 import type { Gains } from './habits'
 import { seededRandom } from './seeded-random'
-import { GAUGE_NOISE, trueDrum } from './true-drum'
-import type { DrumKind, TrueDrum } from './true-drum'
+import { trueDrum } from './true-drum'
+import type { DrumOf, TrueDrum } from './true-drum'
 
-export type Field = {
-  lugs: number
+export type Field = DrumOf & {
   drums: number
   firstSeed: number
-  kind: DrumKind
   against: Against
-  noise?: number
   /** Whether the advice is told this drum's gain beforehand, give or take; the habits always know it exactly. */
   gainLearned: boolean
 }
@@ -37,18 +34,18 @@ const LEARNED_GAIN_SPREAD = 0.15
 const TOLD_STREAM = 103
 
 /** Everybody plays the same drums: the same start, hand and noise by seed. Drums that no turns can make even are left out. */
-export function play({ lugs, drums, firstSeed, kind, against, noise = GAUGE_NOISE, gainLearned }: Field): Players {
+export function play({ drums, firstSeed, against, gainLearned, ...of }: Field): Players {
   const seeds: number[] = []
   const best: Players['best'] = []
   for (let seed = firstSeed; seeds.length < drums; seed++) {
-    const least = bestPossible(trueDrum(seed, lugs, kind, noise), against)
+    const least = bestPossible(trueDrum(seed, of), against)
     if (least === null) continue
     seeds.push(seed)
     best.push(least)
   }
   const each = (go: (drum: TrueDrum, game: ReturnType<typeof newGame>, seed: number) => void) =>
     seeds.map((seed) => {
-      const drum = trueDrum(seed, lugs, kind, noise)
+      const drum = trueDrum(seed, of)
       const game = newGame(drum, against)
       go(drum, game, seed)
       return game.score()
@@ -56,7 +53,7 @@ export function play({ lugs, drums, firstSeed, kind, against, noise = GAUGE_NOIS
   const habit = (way: ReturnType<typeof blindPasses>) => each((drum, game) => way(game, trueGains(drum)))
   return {
     advice: each((drum, game, seed) =>
-      followAdvice(game, gainLearned ? told(trueGains(drum).whole, seed, lugs) : null),
+      followAdvice(game, gainLearned ? told(trueGains(drum).whole, seed, of.lugs) : null),
     ),
     worstFirst: (['turned', 'facing', 'all'] as const)
       .map((again) => habit(worstLugFirst(again)))
@@ -70,7 +67,7 @@ export function play({ lugs, drums, firstSeed, kind, against, noise = GAUGE_NOIS
 /** Median milliseconds of one call of the advice right after the first pass, where it plans the most. */
 export function adviceMs(lugs: number, firstSeed: number): number {
   const times = Array.from({ length: 40 }, (_, i) => {
-    const drum = trueDrum(firstSeed + i, lugs, 'plain')
+    const drum = trueDrum(firstSeed + i, { lugs, kind: 'plain' })
     const log = Array.from({ length: lugs }, (__, lug) => gaugeReading(lug + 1, drum.read(lug + 1)))
     const from = performance.now()
     advise(log, { lugs, against: 'mean', tolerance: TOLERANCE, learned: null })

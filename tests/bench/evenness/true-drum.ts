@@ -16,22 +16,28 @@ export type TrueDrum = {
   response: readonly (readonly number[])[]
 }
 
+export type DrumOf = { lugs: number; kind: DrumKind; noise?: number; fingerTight?: number }
+
 /** Common practice: relative error of a key turn by hand, and one deviation of a gauge reading, units. */
 const HAND_ERROR = 0.2
-export const GAUGE_NOISE = 0.35
+const GAUGE_NOISE = 0.35
 /** Reading wanted, units: common practice for a medium-high 12 in tom. */
 export const WANTED_READING = 75
 
 /**
  * A seeded drum as its bring-up left it. Its response to a turn comes from the least energy of film, hoop and rods together
- * (below), not from the circulant the advice uses. `noise` is one deviation of a reading, gauge units.
+ * (below), not from the circulant the advice uses. `noise` is one deviation of a reading, gauge units; `fingerTight` the turns by
+ * which finger-tight rods differ from their mean at most.
  */
-export function trueDrum(seed: number, lugs: number, kind: DrumKind, noise: number = GAUGE_NOISE): TrueDrum {
+export function trueDrum(
+  seed: number,
+  { lugs, kind, noise = GAUGE_NOISE, fingerTight = FINGER_TIGHT }: DrumOf,
+): TrueDrum {
   const random = seededRandom(seed, lugs, KINDS.indexOf(kind))
   const hand = seededRandom(seed, lugs, 101)
   const ear = seededRandom(seed, lugs, 102)
   const response = trueResponse(random, lugs, kind)
-  const rods = broughtUp(random, lugs)
+  const rods = broughtUp(random, lugs, fingerTight)
   const seat = seating(random, lugs, kind)
   const meanOff = random.between(0, 1) < 0.75 ? random.between(-6, -1) : random.between(0, 4)
   const offset = WANTED_READING + meanOff - mean(response.map((row) => dot(row, rods)))
@@ -64,18 +70,19 @@ export function trueDrum(seed: number, lugs: number, kind: DrumKind, noise: numb
 }
 
 const KINDS: readonly DrumKind[] = ['plain', 'friction', 'sticking rod', 'side leak', 'bent hoop']
-/** Turns by which finger-tight rods differ from their mean at most; from memory. */
+/** Turns by which finger-tight rods differ from their mean at most, by a usual hand and a gentle one; from memory. */
 const FINGER_TIGHT = 1 / 3
+export const GENTLE = 1 / 6
 /** Relative spread of what a turn does at one rod and another. */
 const ROD_SPREAD = 0.05
 /** Turns below the wanted place from which the key comes up again. */
 const GO_UNDER = 0.125
 
-/** Rods after seating finger-tight within a third of a turn and four to six quarter turns by hand, in turns. */
-function broughtUp(random: SeededRandom, lugs: number): number[] {
+/** Rods after seating finger-tight and four to six quarter turns by hand, in turns. */
+function broughtUp(random: SeededRandom, lugs: number, fingerTight: number): number[] {
   const quarters = 4 + random.whole(3)
   return Array.from({ length: lugs }, () => {
-    let turns = random.between(-FINGER_TIGHT, FINGER_TIGHT)
+    let turns = random.between(-fingerTight, fingerTight)
     for (let i = 0; i < quarters; i++) turns += 0.25 * (1 + HAND_ERROR * random.normal())
     return turns
   })
