@@ -32,12 +32,12 @@ function inRooms(seed: number, count: number, { shortestT60S, longestT60S, split
 describe('derived: taps in a room of 0.3 to 0.8 s at a tenth to three tenths of the drum', () => {
   const cases = [
     // A short ring drowns in a longer room, so most may be refused.
-    { name: 'short taps', seed: 5, mostRefused: 14, made: { shortestT60S: 0.12, longestT60S: 0.3, splitHz: 0 } },
-    { name: 'even heads', seed: 6, mostRefused: 6, made: { shortestT60S: 0.3, longestT60S: 1.4, splitHz: 0 } },
-    { name: 'split heads', seed: 7, mostRefused: 6, made: { shortestT60S: 0.3, longestT60S: 1.4, splitHz: 5 } },
+    { name: 'short taps', seed: 5, mostRefused: 12, made: { shortestT60S: 0.12, longestT60S: 0.3, splitHz: 0 } },
+    { name: 'even heads', seed: 6, mostRefused: 5, made: { shortestT60S: 0.3, longestT60S: 1.4, splitHz: 0 } },
+    { name: 'split heads', seed: 7, mostRefused: 5, made: { shortestT60S: 0.3, longestT60S: 1.4, splitHz: 5 } },
   ]
   it.each(cases)('$name: none off by 25 cents or 5 stated deviations', ({ seed, mostRefused, made }) => {
-    const { read, refused } = inRooms(seed, 20, made)
+    const { read, refused } = inRooms(seed, 16, made)
     for (const { reading, madeAtHz } of read) {
       expect(Math.abs(1200 * Math.log2(reading.pitchHz / madeAtHz))).toBeLessThan(25)
       expect(Math.abs(reading.pitchHz - madeAtHz)).toBeLessThan(5 * reading.standardErrorHz)
@@ -46,8 +46,8 @@ describe('derived: taps in a room of 0.3 to 0.8 s at a tenth to three tenths of 
   })
 
   it('a warble is claimed on one even head in eight at most', () => {
-    const { read } = inRooms(8, 24, { shortestT60S: 0.4, longestT60S: 1.4, splitHz: 0 })
-    expect(read.filter(({ reading }) => reading.warble !== null).length).toBeLessThanOrEqual(3)
-    expect(read.length).toBeGreaterThanOrEqual(18)
+    const { read } = inRooms(8, 16, { shortestT60S: 0.4, longestT60S: 1.4, splitHz: 0 })
+    expect(read.filter(({ reading }) => reading.warble !== null).length).toBeLessThanOrEqual(2)
+    expect(read.length).toBeGreaterThanOrEqual(12)
   })
 })
