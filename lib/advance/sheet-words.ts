@@ -26,9 +26,7 @@ export function toleranceWords(
 
 /** What warble is let pass on this head. */
 export function warbleLimitWords(sheet: Pick<TuningSheet, 'role' | 'warbleLimitHz'>, side: SheetHead['side']): string {
-  return warbles(sheet, side)
-    ? `under ${sheet.warbleLimitHz} a second`
-    : 'not judged: snare beds are uneven on purpose'
+  return warbles(sheet, side) ? `under ${sheet.warbleLimitHz} a second` : 'not judged: snare beds are uneven on purpose'
 }
 
 /** The gauge's starting reading and what it is worth. */
@@ -38,7 +36,7 @@ export function sheetGaugeWords(gauge: SheetHead['gauge']): { reading: string; b
     return { reading: gauge.reading, bounds: null, worth: 'as noted, relative to that gauge' }
   }
   const { reading, bounds, outside } = gauge
-  return { reading, bounds, worth: outside ?? `on ${gauge.gauge}; another gauge or hand reads otherwise` }
+  return { reading, bounds, worth: outside ?? `on ${gauge.gauge}; others differ` }
 }
 
 export const sheetCautionWords: Record<SheetHead['cautions'][number], string> = {

@@ -11,6 +11,7 @@ import {
   sampleShow,
   sampleSpec,
 } from '@/lib/advance/sample-revision'
+import { sampleGauge } from '@/lib/tuning/sample-gauge'
 import { newPiece } from '@/plots/model/document'
 import type { PdfFile } from '../../../tests/helpers/read-pdf'
 import { readPdf } from '../../../tests/helpers/read-pdf'
@@ -217,8 +218,9 @@ describe('words of any length and language', () => {
         },
       ),
     )
+    const gauge = { id: 'g', ...sampleGauge }
     for (const paper of ['A4', 'Letter'] as const) {
-      const file = await print(venuePack({ ...sampleSpec, party: { ...sampleSpec.party, paper }, kit }))
+      const file = await print(venuePack({ ...sampleSpec, party: { ...sampleSpec.party, paper }, kit, gauge }))
       expect(file.pages.filter((page) => page.text.startsWith('Tuning sheet'))).toHaveLength(3)
     }
   })

@@ -9,9 +9,9 @@ import { LugDrawing } from './lug-drawing'
 
 const drawingMm = 40
 /** Room above the tables, so that both heads' begin at one height. */
-const upperMm = 49
+const upperMm = 47
 /** A row's height and, over thirteen of them, the room of a table: fewer lugs have taller rows, easier to write in. */
-const rowMm = { least: 5, most: 8 }
+const rowMm = { least: 4.6, most: 8 }
 const blankColumns = ['gauge', 'tap Hz', 'gauge', 'tap Hz'] as const
 
 /** One head of a drum: its tap largest, then the gauge to start from, the drawn order, and room for readings. */
