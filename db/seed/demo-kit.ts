@@ -15,6 +15,8 @@ function drum(
     name?: string
     semitone: number
     gauge: number
+    /** As the batter's unless said. */
+    resonantGauge?: number
     muffling?: string
     supply?: Drum['supply']
     spec?: Partial<DrumSpec>
@@ -30,7 +32,7 @@ function drum(
       ...base.spec,
       ...say.spec,
       batter: { ...base.spec.batter, gauge: say.gauge },
-      resonant: resonant ? { ...resonant, gauge: say.gauge } : null,
+      resonant: resonant ? { ...resonant, gauge: say.resonantGauge ?? say.gauge } : null,
       note: { semitone: say.semitone, cents: 0 },
       muffling: say.muffling ?? '',
       insteadOf: {
@@ -68,10 +70,14 @@ const overhead = { type: 'small-condenser', phantom: true, stand: 'tall' } as co
 const fullRig: KitThing[] = [
   {
     key: 'kick',
-    entry: drum(kick, { semitone: 33, gauge: 58, muffling: 'one soft pad, touching the batter' }),
+    entry: drum(kick, { semitone: 33, gauge: 72, muffling: 'one soft pad, touching the batter' }),
     at: { xM: -0.14, yM: 4.6 },
   },
-  { key: 'snare', entry: drum(snare, { semitone: 52, gauge: 88, supply: 'carried' }), at: { xM: 0.14, yM: 5.46 } },
+  {
+    key: 'snare',
+    entry: drum(snare, { semitone: 52, gauge: 86, resonantGauge: 77, supply: 'carried' }),
+    at: { xM: 0.14, yM: 5.46 },
+  },
   { key: 'tom 12', entry: drum(newDrum('tom'), { semitone: 50, gauge: 76 }), at: { xM: 0.17, yM: 5.06 } },
   {
     key: 'tom 14',
@@ -82,7 +88,12 @@ const fullRig: KitThing[] = [
   {
     key: 'spare snare',
     entry: {
-      ...drum(newDrum('snare', { depthIn: 5.5 }), { name: 'Spare snare 14', semitone: 53, gauge: 88 }),
+      ...drum(newDrum('snare', { depthIn: 5.5 }), {
+        name: 'Spare snare 14',
+        semitone: 53,
+        gauge: 87,
+        resonantGauge: 78,
+      }),
       remark: 'stays in its case, side stage',
     },
   },
