@@ -2,6 +2,7 @@ import { and, asc, eq, inArray, isNotNull, isNull, sql } from 'drizzle-orm'
 import type { Db, Scope } from '@/db/client'
 import { kitEntry } from '@/db/schema/kit'
 import { rig, tour } from '@/db/schema/tour'
+import { filledEntry } from '@/lib/contracts/filled-entry'
 import type { Entry, EntryInput } from '@/lib/contracts/kit'
 
 const columns = {
@@ -22,8 +23,8 @@ const columns = {
 const readLimit = 2000
 
 // The contract checked each spec against its kind on the way in; the two columns lose that tie.
-const entriesOf = (rows: object[]) => rows as Entry[]
-const entryOf = (rows: object[]) => rows[0] as Entry | undefined
+const entriesOf = (rows: object[]) => (rows as Entry[]).map(filledEntry)
+const entryOf = (rows: object[]) => entriesOf(rows)[0]
 
 /** In the order of the kit; taken-out entries too when asked for. */
 export async function listEntries(
