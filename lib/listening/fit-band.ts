@@ -1,4 +1,7 @@
-import type { Complex, ModelKind, Term } from './partial-shape'
+import type { BandTurns } from './damped-spectrum'
+import { dampedSpectrum } from './damped-spectrum'
+import { gramOf, leastSquares } from './least-squares'
+import type { Complex, ModelKind } from './partial-shape'
 import { parametersOf, voicesOf } from './partial-shape'
 import { solveSymmetric } from './solve-symmetric'
 import type { Spectrum } from './spectrum'
@@ -33,10 +36,6 @@ type Solved = {
   columns: Float64Array[]
 }
 
-/** Columns of numbers; none where all would be zero. */
-type Columns = (Float64Array | undefined)[]
-
-const still: Complex = { re: 0, im: 0 }
 const MOST_ROUNDS = 30
 const MOST_REFUSED = 6
 /** A round that gains less than this in twice the log likelihood is the last. */
@@ -54,8 +53,7 @@ const MOST_GLIDE = 6
 export class BandFitter {
   private readonly bins: number
   private readonly data: Float64Array
-  private readonly turn: Float64Array
-  private readonly turnAll: Float64Array
+  private readonly turns: BandTurns
   private readonly energy: number
   private readonly leastAngle: number
   private readonly mostAngle: number
@@ -70,8 +68,9 @@ export class BandFitter {
     this.mostAngle = (2 * Math.PI * band.last) / spectrum.size
     this.bins = band.last - band.first + 1
     this.data = new Float64Array(2 * this.bins)
-    this.turn = new Float64Array(2 * this.bins)
-    this.turnAll = new Float64Array(2 * this.bins)
+    const turn = new Float64Array(2 * this.bins)
+    const turnAll = new Float64Array(2 * this.bins)
+    this.turns = { turn, turnAll, count: spectrum.count }
     const { cos, sin } = turnTable(spectrum.size)
     let energy = 0
     for (let i = 0; i < this.bins; i++) {
@@ -82,10 +81,10 @@ export class BandFitter {
       this.data[2 * i + 1] = im
       energy += re * re + im * im
       const whole = (k * spectrum.count) % spectrum.size
-      this.turn[2 * i] = cos[k] ?? 0
-      this.turn[2 * i + 1] = sin[k] ?? 0
-      this.turnAll[2 * i] = cos[whole] ?? 0
-      this.turnAll[2 * i + 1] = sin[whole] ?? 0
+      turn[2 * i] = cos[k] ?? 0
+      turn[2 * i + 1] = sin[k] ?? 0
+      turnAll[2 * i] = cos[whole] ?? 0
+      turnAll[2 * i + 1] = sin[whole] ?? 0
     }
     this.energy = energy
     this.freedom = (2 * this.bins * spectrum.count) / spectrum.size
@@ -151,7 +150,7 @@ export class BandFitter {
   }
 
   private amplitudesAt(kind: ModelKind, parameters: Float64Array, free: number) {
-    const shapes = voicesOf(kind, parameters).map((terms) => this.shapesOf(terms, free))
+    const shapes = voicesOf(kind, parameters).map((terms) => dampedSpectrum(terms, free, this.turns))
     const rows = 2 * this.bins
     const linear = shapes.flatMap(({ direct, image }) => {
       const real = new Float64Array(rows)
@@ -239,115 +238,4 @@ export class BandFitter {
       freedom,
     }
   }
-
-  /**
-   * The voice's spectrum (index 0) and its derivative to each free parameter that it moves with; `image` with every s and c
-   * conjugated.
-   */
-  private shapesOf(terms: Term[], free: number): { direct: Columns; image: Columns } {
-    const moves = (f: number) => terms.some(({ toS, toC }) => !isStill(toS[f]) || !isStill(toC[f]))
-    const make = () =>
-      Array.from({ length: free + 1 }, (_, i) =>
-        i === 0 || moves(i - 1) ? new Float64Array(2 * this.bins) : undefined,
-      )
-    const direct = make()
-    const image = make()
-    for (const term of terms) {
-      this.add(direct, term, 1)
-      this.add(image, term, -1)
-    }
-    return { direct, image }
-  }
-
-  private add(into: Columns, { s, c, toS, toC }: Term, sign: 1 | -1): void {
-    const { count } = this.spectrum
-    const size = Math.exp(s.re)
-    const zr = size * Math.cos(s.im)
-    const zi = sign * size * Math.sin(s.im)
-    const sizeAll = Math.exp(s.re * count)
-    const ar = sizeAll * Math.cos(s.im * count)
-    const ai = sign * sizeAll * Math.sin(s.im * count)
-    const cr = c.re
-    const ci = sign * c.im
-    const { turn, turnAll } = this
-    const shape = into[0]
-    const derivatives = into.slice(1).flatMap((column, f) => {
-      const ds = toS[f] ?? still
-      const dc = toC[f] ?? still
-      if (column === undefined) return []
-      const dsi = sign * ds.im
-      return [{ column, kr: cr * ds.re - ci * dsi, ki: cr * dsi + ci * ds.re, cr: dc.re, ci: sign * dc.im }]
-    })
-    for (let i = 0; i < 2 * this.bins; i += 2) {
-      const wr = turn[i] ?? 0
-      const wi = turn[i + 1] ?? 0
-      const er = zr * wr - zi * wi
-      const ei = zr * wi + zi * wr
-      const vr = turnAll[i] ?? 0
-      const vi = turnAll[i + 1] ?? 0
-      const fr = ar * vr - ai * vi
-      const fi = ar * vi + ai * vr
-      const dr = 1 - er
-      const di = -ei
-      const over = 1 / (dr * dr + di * di)
-      // S = (1 − f)/(1 − e)
-      const nr = 1 - fr
-      const ni = -fi
-      const Sr = (nr * dr + ni * di) * over
-      const Si = (ni * dr - nr * di) * over
-      // dS/ds = (S·e − N·f)/(1 − e)
-      const pr = Sr * er - Si * ei - count * fr
-      const pi = Sr * ei + Si * er - count * fi
-      const Dr = (pr * dr + pi * di) * over
-      const Di = (pi * dr - pr * di) * over
-      if (shape !== undefined) {
-        shape[i] = (shape[i] ?? 0) + cr * Sr - ci * Si
-        shape[i + 1] = (shape[i + 1] ?? 0) + cr * Si + ci * Sr
-      }
-      for (const { column, kr, ki, cr: br, ci: bi } of derivatives) {
-        column[i] = (column[i] ?? 0) + kr * Dr - ki * Di + br * Sr - bi * Si
-        column[i + 1] = (column[i + 1] ?? 0) + kr * Di + ki * Dr + br * Si + bi * Sr
-      }
-    }
-  }
-}
-
-function isStill(slope: Complex = still): boolean {
-  return slope.re === 0 && slope.im === 0
-}
-
-function gramOf(columns: Float64Array[]): { gram: Float64Array; scale: Float64Array } {
-  const n = columns.length
-  const gram = new Float64Array(n * n)
-  const scale = new Float64Array(n)
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j <= i; j++) {
-      const a = columns[i] ?? scale
-      const b = columns[j] ?? scale
-      let sum = 0
-      for (let r = 0; r < a.length; r++) sum += (a[r] ?? 0) * (b[r] ?? 0)
-      gram[i * n + j] = sum
-      gram[j * n + i] = sum
-    }
-  }
-  for (let i = 0; i < n; i++) scale[i] = Math.sqrt(gram[i * n + i] ?? 0) || 1
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j < n; j++) gram[i * n + j] = (gram[i * n + j] ?? 0) / ((scale[i] ?? 1) * (scale[j] ?? 1))
-  }
-  return { gram, scale }
-}
-
-/** Columns are scaled to length one first; `damping` is added to the diagonal then. */
-function leastSquares(columns: Float64Array[], data: Float64Array, damping: number): Float64Array | null {
-  const n = columns.length
-  const { gram, scale } = gramOf(columns)
-  for (let i = 0; i < n; i++) gram[i * n + i] = (gram[i * n + i] ?? 0) + damping
-  const right = new Float64Array(n)
-  columns.forEach((column, i) => {
-    let sum = 0
-    for (let r = 0; r < data.length; r++) sum += (column[r] ?? 0) * (data[r] ?? 0)
-    right[i] = sum / (scale[i] ?? 1)
-  })
-  const solved = solveSymmetric(gram, n, [right])?.[0]
-  return solved?.map((value, i) => value / (scale[i] ?? 1)) ?? null
 }
