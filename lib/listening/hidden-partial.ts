@@ -1,6 +1,7 @@
 import type { Band, BandFit } from './fit-band'
 import { BandFitter } from './fit-band'
 import { couldPair } from './pair-of-partials'
+import { T60_PER_TAU } from './pitch-of-fit'
 import type { Spectrum } from './spectrum'
 
 /** How much a partial that nobody found must gain, twice the log likelihood, to be believed. */
@@ -24,7 +25,7 @@ export function findHiddenPartial(spectrum: Spectrum, band: Band, rateHz: number
   let best: { start: Float64Array; residual: number } | null = null
   const pitch = { decay: fit.parameters[0] ?? 0, angle: fit.parameters[1] ?? 0 }
   for (const t60S of DECAYS_T60_S) {
-    const decay = Math.log(1000) / (t60S * rateHz)
+    const decay = T60_PER_TAU / (t60S * rateHz)
     const angleOf = (bin: number) => (2 * Math.PI * (band.first + bin)) / spectrum.size
     const half = Math.max(1, Math.round((decay * spectrum.size) / (2 * Math.PI)))
     const bin = band.first + highest(power, half, (at) => !couldPair(pitch, { decay, angle: angleOf(at) }, rateHz))
